@@ -1,0 +1,13 @@
+//! Fire design of structural steel members from plain-text design files.
+//!
+//! The modules stand in layers: each may import only those above it, as the table in `DEVELOPERS.md` says and
+//! `tests/layers.rs` checks. Physics (`section`, `heating`, `resistance`, `protection`) knows no text; text
+//! (`text`, `syntax`, `design`) knows no physics beyond its types; `analysis` joins the two.
+
+pub mod heating;
+pub mod protection;
+pub mod resistance;
+pub mod section;
+pub mod syntax;
+pub mod text;
+pub mod units;

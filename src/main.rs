@@ -1,0 +1,2 @@
+//! The `scorchline` binary.
+fn main() {}
