@@ -4,6 +4,8 @@
 //! `tests/layers.rs` checks. Physics (`section`, `heating`, `resistance`, `protection`) knows no text; text
 //! (`text`, `syntax`, `design`) knows no physics beyond its types; `analysis` joins the two.
 
+#![warn(missing_docs, clippy::unwrap_used, clippy::expect_used, clippy::panic)]
+
 pub mod heating;
 pub mod protection;
 pub mod resistance;
