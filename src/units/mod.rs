@@ -84,6 +84,10 @@ quantity! {
     /// A density, base unit kg/m³.
     Density, from_kg_m3, kg_m3
 }
+quantity! {
+    /// A mass per length of member, base unit kg/m.
+    LinearMass, from_kg_m, kg_m
+}
 
 impl Length {
     /// Makes a length from metres.
