@@ -18,3 +18,6 @@ pub use exposure::{Casing, Exposure, ExposureRefusal, Face, Faces, Heated, heate
 pub use geometry::{Flange, Geometry};
 pub use properties::Properties;
 pub use shape::{Kind, Shape, ShapeError};
+
+#[cfg(test)]
+mod tests;

@@ -53,6 +53,8 @@ pub fn find(text: &str, options: &LookupOptions) -> Lookup {
         .collect();
     if let Some(finish) = key.finish {
         found.retain(|row| row.finish.is_none_or(|own| own == finish));
+        // Only the European table tells finishes apart in its designations; `RHS CF 200x100x6` is written as it does.
+        prefer(&mut found, |row| row.table == Table::EU);
     }
     if let Some(tables) = &options.tables {
         prefer(&mut found, |row| tables.contains(&row.table));

@@ -135,17 +135,4 @@ fn catalogue() -> &'static Catalogue {
 }
 
 #[cfg(test)]
-mod tests {
-    use super::*;
-
-    #[test]
-    fn no_line_of_a_table_is_lost() {
-        let kept: Vec<_> = rows().iter().map(|row| row.designation.to_string()).collect();
-        let lost: Vec<_> = read::designations()
-            .into_iter()
-            .filter(|name| !kept.contains(name))
-            .collect();
-        assert!(lost.is_empty(), "{lost:?}");
-        assert_eq!(rows().len(), 4706);
-    }
-}
+mod tests;

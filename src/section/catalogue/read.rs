@@ -66,7 +66,11 @@ pub(super) fn designations() -> Vec<String> {
 }
 
 fn row(table: Table, line: &Line) -> Option<CatalogueRow> {
-    let shape = shape(line)?;
+    let mut shape = shape(table, line)?;
+    let printed_area = Area::from_mm2(line.area_cm2 * 100.0);
+    if table == Table::US {
+        shape = with_fillets_of(shape, printed_area);
+    }
     Some(CatalogueRow {
         designation: line.designation.into(),
         family: line.family.into(),
@@ -75,14 +79,43 @@ fn row(table: Table, line: &Line) -> Option<CatalogueRow> {
         shape,
         finish: finish(table, line.family),
         mass: LinearMass::from_kg_m(line.mass_kg_m),
-        printed_area: Area::from_mm2(line.area_cm2 * 100.0),
+        printed_area,
         source: line.source.into(),
         geometry: shape.geometry().ok()?,
         properties: OnceLock::new(),
     })
 }
 
-fn shape(line: &Line) -> Option<Shape> {
+/// The shape with no more fillet than its printed area leaves room for.
+///
+/// The radius of the US table comes from k, which M, MT and a few HP shapes print for detailing only: too large, by up
+/// to 5 % of the area. Where a shape without toes would exceed its printed area by more than 1 %, its fillets are what
+/// that area has beyond the sharp-cornered plates, (4 - π) r² of an I and half of it of a tee.
+fn with_fillets_of(shape: Shape, printed_area: Area) -> Shape {
+    let area = |shape: &Shape| shape.geometry().map_or(0.0, |g| g.area.mm2());
+    if area(&shape) <= 1.01 * printed_area.mm2() {
+        return shape;
+    }
+    let sharp = Length::from_mm(0.0);
+    let fillets = 4.0 - std::f64::consts::PI;
+    let radius = |plates: Shape, share: f64| {
+        let rest = printed_area.mm2() - area(&plates);
+        Length::from_mm((rest.max(0.0) / (share * fillets)).sqrt())
+    };
+    match shape {
+        Shape::I(i) => Shape::I(ParallelI {
+            r: radius(Shape::I(ParallelI { r: sharp, ..i }), 1.0),
+            ..i
+        }),
+        Shape::Tee(tee) => Shape::Tee(Tee {
+            r: radius(Shape::Tee(Tee { r: sharp, ..tee }), 0.5),
+            ..tee
+        }),
+        other => other,
+    }
+}
+
+fn shape(table: Table, line: &Line) -> Option<Shape> {
     let h = || line.h_mm.map(Length::from_mm);
     let b = || line.b_mm.map(Length::from_mm);
     let tw = || line.tw_mm.map(Length::from_mm);
@@ -109,13 +142,13 @@ fn shape(line: &Line) -> Option<Shape> {
             weld: Length::from_mm(0.0),
         }),
         "I_taper" => {
-            let taper = taper(line)?;
+            let taper = taper(table, line)?;
             Shape::TaperI(TaperI {
                 h: h()?,
                 b: b()?,
                 tw: tw()?,
                 tf: tf()?,
-                r,
+                r: taper.root,
                 toe: taper.toe,
                 slope: taper.slope,
                 tf_at: taper.tf_at,
@@ -129,13 +162,13 @@ fn shape(line: &Line) -> Option<Shape> {
             r,
         }),
         "C_taper" => {
-            let taper = taper(line)?;
+            let taper = taper(table, line)?;
             Shape::TaperChannel(TaperChannel {
                 h: h()?,
                 b: b()?,
                 tw: tw()?,
                 tf: tf()?,
-                r,
+                r: taper.root,
                 toe: taper.toe,
                 slope: taper.slope,
                 tf_at: taper.tf_at,
@@ -149,13 +182,13 @@ fn shape(line: &Line) -> Option<Shape> {
             r,
         }),
         "T_taper" => {
-            let taper = taper(line)?;
+            let taper = taper(table, line)?;
             Shape::TaperTee(TaperTee {
                 h: h()?,
                 b: b()?,
                 tw: tw()?,
                 tf: tf()?,
-                r,
+                r: taper.root,
                 toe: taper.toe,
                 slope: taper.slope,
                 tf_at: taper.tf_at,
@@ -185,14 +218,15 @@ fn shape(line: &Line) -> Option<Shape> {
     Some(shape)
 }
 
-/// The slope of a taper flange, how far from its tip the thickness is measured, and its toe radius.
+/// The slope of a taper flange, how far from its tip the thickness is measured, and its radii.
 struct Taper {
     slope: f64,
     tf_at: Length,
+    root: Length,
     toe: Length,
 }
 
-fn taper(line: &Line) -> Option<Taper> {
+fn taper(table: Table, line: &Line) -> Option<Taper> {
     let (h, b, tw) = (line.h_mm?, line.b_mm?, line.tw_mm?);
     let middle_of_channel = (b - tw) / 2.0;
     let middle_of_outstand = (b - tw) / 4.0;
@@ -211,13 +245,27 @@ fn taper(line: &Line) -> Option<Taper> {
         "S" | "ST" | "SLB" => (1.0 / 6.0, middle_of_outstand),
         _ => return None,
     };
+    // An arc of radius r in a corner that turns by a quarter less the slope ends r times this from the corner.
+    let tangent = ((std::f64::consts::FRAC_PI_2 - slope.atan()) / 2.0).tan();
     // Two ISWB print a toe radius larger than their tip can hold; the arc then takes the whole tip.
-    let tip = line.tf_mm? - slope * tf_at;
-    let quarter_turn_less_slope = std::f64::consts::FRAC_PI_2 - slope.atan();
-    let largest = tip / (quarter_turn_less_slope / 2.0).tan();
+    let largest = (line.tf_mm? - slope * tf_at) / tangent;
+    let printed = line.r_mm.unwrap_or(0.0);
+    let root = if table == Table::US {
+        // The US table has no radius but k, the distance from the outer face to where the fillet meets the web: what
+        // stands in the column is k - tf. At the web the flange is thicker than tf by the slope.
+        let outstand = if line.shape == "C_taper" {
+            b - tw
+        } else {
+            (b - tw) / 2.0
+        };
+        ((printed - slope * (outstand - tf_at)) / tangent).max(0.0)
+    } else {
+        printed
+    };
     Some(Taper {
         slope,
         tf_at: Length::from_mm(tf_at),
+        root: Length::from_mm(root),
         toe: Length::from_mm(line.r2_mm.unwrap_or(0.0).min(largest)),
     })
 }

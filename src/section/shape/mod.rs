@@ -13,7 +13,7 @@ use std::hash::{Hash, Hasher};
 
 pub use angle::Angle;
 pub use channel::{Channel, TaperChannel};
-pub use error::{LARGEST, Problem, ShapeError};
+pub use error::{LARGEST, Problem, SMALLEST, ShapeError};
 pub use hollow::{CircularHollow, RectangularHollow};
 pub use i::{ParallelI, TaperI, WeldedI};
 pub use solid::{Flat, Round};
