@@ -40,7 +40,7 @@ pub enum Lookup {
 pub fn find(text: &str, options: &LookupOptions) -> Lookup {
     let catalogue = catalogue();
     let unknown = || Lookup::Unknown {
-        nearest: catalogue.nearest.to(text, &catalogue.rows),
+        nearest: catalogue.nearest(text),
     };
     let Some(key) = Key::of(text).filter(|key| !key.letters.is_empty() && !key.numbers.is_empty()) else {
         return unknown();

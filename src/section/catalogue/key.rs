@@ -23,7 +23,11 @@ impl Key {
         if text.len() > LONGEST {
             return None;
         }
-        let mut lower = text.to_lowercase();
+        let mut lower = if text.is_ascii() {
+            text.to_ascii_lowercase()
+        } else {
+            text.to_lowercase()
+        };
         let mut finish = named_finish(&mut lower);
         let chars: Vec<char> = lower.chars().collect();
         let mut letters = String::new();
@@ -77,11 +81,16 @@ impl Key {
             text.push(if n == 0 { '|' } else { 'x' });
             // Thousandths tell all sizes apart and take 3/16 in for the 0.188 of the tables.
             let thousandths = (number * 1000.0).round_ties_even();
-            if thousandths % 1000.0 == 0.0 {
-                let _ = write!(text, "{}", thousandths / 1000.0);
+            if thousandths < 1e9 {
+                // Written as whole numbers, which is many times quicker than as a decimal.
+                let (whole, rest) = (thousandths as u32 / 1000, thousandths as u32 % 1000);
+                let _ = write!(text, "{whole}");
+                if rest > 0 {
+                    let _ = write!(text, ".{rest:03}");
+                    text.truncate(text.trim_end_matches('0').len());
+                }
             } else {
-                let written = format!("{:.3}", thousandths / 1000.0);
-                text.push_str(written.trim_end_matches('0'));
+                let _ = write!(text, "{number}");
             }
         }
         text

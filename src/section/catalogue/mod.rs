@@ -121,7 +121,15 @@ pub fn rows() -> &'static [CatalogueRow] {
 struct Catalogue {
     rows: Vec<CatalogueRow>,
     index: find::Index,
-    nearest: nearest::Candidates,
+    nearest: OnceLock<nearest::Candidates>,
+}
+
+impl Catalogue {
+    /// What misspelt designations are compared with; made at the first of them.
+    fn nearest(&'static self, text: &str) -> Vec<&'static CatalogueRow> {
+        let candidates = self.nearest.get_or_init(|| nearest::Candidates::of(&self.rows));
+        candidates.to(text, &self.rows)
+    }
 }
 
 fn catalogue() -> &'static Catalogue {
@@ -129,7 +137,7 @@ fn catalogue() -> &'static Catalogue {
     CATALOGUE.get_or_init(|| {
         let rows = read::all();
         let index = find::Index::of(&rows);
-        let nearest = nearest::Candidates::of(&rows);
+        let nearest = OnceLock::new();
         Catalogue { rows, index, nearest }
     })
 }

@@ -17,7 +17,7 @@ const SOURCES: [(Table, &str); 6] = [
     (Table::IN, include_str!("../tables/in.csv")),
 ];
 
-/// A line of a table as it stands in the file.
+/// A line of a table as it stands in the file, column by column.
 #[derive(serde::Deserialize)]
 struct Line<'a> {
     designation: &'a str,
@@ -41,12 +41,9 @@ pub(super) fn all() -> Vec<CatalogueRow> {
     let mut rows = Vec::with_capacity(4800);
     for (table, text) in SOURCES {
         let mut reader = csv::Reader::from_reader(text.as_bytes());
-        let Ok(header) = reader.headers().cloned() else {
-            continue;
-        };
         let mut record = csv::StringRecord::new();
         while matches!(reader.read_record(&mut record), Ok(true)) {
-            if let Ok(line) = record.deserialize::<Line>(Some(&header)) {
+            if let Ok(line) = record.deserialize::<Line>(None) {
                 rows.extend(row(table, &line));
             }
         }

@@ -54,7 +54,13 @@ impl Form for Angle {
         Some(Kind::Open)
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        [self.h, self.b, self.t, self.root, self.toe].map(Length::mm).to_vec()
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![
+            ("h", self.h.mm()),
+            ("b", self.b.mm()),
+            ("t", self.t.mm()),
+            ("r", self.root.mm()),
+            ("toe", self.toe.mm()),
+        ]
     }
 }

@@ -87,8 +87,14 @@ impl Form for Channel {
         self.as_taper().flange()
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        [self.h, self.b, self.tw, self.tf, self.r].map(Length::mm).to_vec()
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![
+            ("h", self.h.mm()),
+            ("b", self.b.mm()),
+            ("tw", self.tw.mm()),
+            ("tf", self.tf.mm()),
+            ("r", self.r.mm()),
+        ]
     }
 }
 
@@ -139,10 +145,16 @@ impl Form for TaperChannel {
         })
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        let lengths = [self.h, self.b, self.tw, self.tf, self.r, self.toe, self.tf_at];
-        let mut numbers = lengths.map(Length::mm).to_vec();
-        numbers.push(self.slope);
-        numbers
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![
+            ("h", self.h.mm()),
+            ("b", self.b.mm()),
+            ("tw", self.tw.mm()),
+            ("tf", self.tf.mm()),
+            ("r", self.r.mm()),
+            ("toe", self.toe.mm()),
+            ("tf at", self.tf_at.mm()),
+            ("slope", self.slope),
+        ]
     }
 }

@@ -99,8 +99,14 @@ impl Form for RectangularHollow {
         Some(Kind::RectangularHollow)
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        [self.h, self.b, self.t, self.ro, self.ri].map(Length::mm).to_vec()
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![
+            ("h", self.h.mm()),
+            ("b", self.b.mm()),
+            ("t", self.t.mm()),
+            ("ro", self.ro.mm()),
+            ("ri", self.ri.mm()),
+        ]
     }
 }
 
@@ -128,7 +134,7 @@ impl Form for CircularHollow {
         Some(Kind::CircularHollow)
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        vec![self.d.mm(), self.t.mm()]
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![("d", self.d.mm()), ("t", self.t.mm())]
     }
 }

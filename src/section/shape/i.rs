@@ -122,8 +122,14 @@ impl Form for ParallelI {
         })
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        [self.h, self.b, self.tw, self.tf, self.r].map(Length::mm).to_vec()
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![
+            ("h", self.h.mm()),
+            ("b", self.b.mm()),
+            ("tw", self.tw.mm()),
+            ("tf", self.tf.mm()),
+            ("r", self.r.mm()),
+        ]
     }
 }
 
@@ -165,11 +171,17 @@ impl Form for TaperI {
         })
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        let lengths = [self.h, self.b, self.tw, self.tf, self.r, self.toe, self.tf_at];
-        let mut numbers = lengths.map(Length::mm).to_vec();
-        numbers.push(self.slope);
-        numbers
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![
+            ("h", self.h.mm()),
+            ("b", self.b.mm()),
+            ("tw", self.tw.mm()),
+            ("tf", self.tf.mm()),
+            ("r", self.r.mm()),
+            ("toe", self.toe.mm()),
+            ("tf at", self.tf_at.mm()),
+            ("slope", self.slope),
+        ]
     }
 }
 
@@ -271,16 +283,15 @@ impl Form for WeldedI {
         })
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        let lengths = [
-            self.h,
-            self.b_top,
-            self.tf_top,
-            self.b_bottom,
-            self.tf_bottom,
-            self.tw,
-            self.weld,
-        ];
-        lengths.map(Length::mm).to_vec()
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![
+            ("h", self.h.mm()),
+            ("b top", self.b_top.mm()),
+            ("tf top", self.tf_top.mm()),
+            ("b bottom", self.b_bottom.mm()),
+            ("tf bottom", self.tf_bottom.mm()),
+            ("tw", self.tw.mm()),
+            ("weld", self.weld.mm()),
+        ]
     }
 }

@@ -23,6 +23,7 @@ pub use tee::{TaperTee, Tee};
 use crate::section::geometry::{Flange, Geometry};
 use crate::section::outline::Outline;
 use crate::section::properties::Properties;
+use crate::units::Length;
 
 /// What kind of section it is, as assessments of fire protection tell them apart.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
@@ -92,8 +93,8 @@ trait Form {
         None
     }
 
-    /// The dimensions in a fixed order, for hashing.
-    fn numbers(&self) -> Vec<f64>;
+    /// The dimensions by their keys in design files, mm (areas mm², masses kg/m, slopes plain), in a fixed order.
+    fn dimensions(&self) -> Vec<(&'static str, f64)>;
 }
 
 impl Shape {
@@ -127,6 +128,19 @@ impl Shape {
     /// The first dimension at fault.
     pub fn check(&self) -> Result<(), ShapeError> {
         self.outlines().map(|_| ())
+    }
+
+    /// The dimensions by their keys in design files, mm (areas mm², masses kg/m, slopes plain), in a fixed order.
+    #[must_use]
+    pub fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        self.form().dimensions()
+    }
+
+    /// One dimension by its key: `h`, `tw`, `d`, ...; none if the shape has no such dimension.
+    #[must_use]
+    pub fn dimension(&self, key: &str) -> Option<Length> {
+        let named = self.dimensions().into_iter().find(|(name, _)| *name == key)?;
+        Some(Length::from_mm(named.1))
     }
 
     /// The kind of section; none for stated figures.
@@ -177,8 +191,9 @@ impl Shape {
     /// called.
     pub fn hash_bits<H: Hasher>(&self, state: &mut H) {
         std::mem::discriminant(self).hash(state);
-        for number in self.form().numbers() {
-            state.write_u64(number.to_bits());
+        for (name, value) in self.form().dimensions() {
+            name.hash(state);
+            state.write_u64(value.to_bits());
         }
     }
 }

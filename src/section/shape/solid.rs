@@ -40,8 +40,8 @@ impl Form for Flat {
         Some(Kind::Solid)
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        vec![self.b.mm(), self.t.mm()]
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![("b", self.b.mm()), ("t", self.t.mm())]
     }
 }
 
@@ -62,7 +62,7 @@ impl Form for Round {
         Some(Kind::Solid)
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        vec![self.d.mm()]
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        vec![("d", self.d.mm())]
     }
 }

@@ -66,12 +66,10 @@ impl Form for Stated {
         None
     }
 
-    fn numbers(&self) -> Vec<f64> {
-        vec![
-            self.area.mm2(),
-            self.perimeter.mm(),
-            self.box_perimeter.map_or(-1.0, Length::mm),
-            self.mass.map_or(-1.0, LinearMass::kg_m),
-        ]
+    fn dimensions(&self) -> Vec<(&'static str, f64)> {
+        let mut stated = vec![("area", self.area.mm2()), ("perimeter", self.perimeter.mm())];
+        stated.extend(self.box_perimeter.map(|p| ("box perimeter", p.mm())));
+        stated.extend(self.mass.map(|mass| ("mass", mass.kg_m())));
+        stated
     }
 }
