@@ -6,6 +6,7 @@
 
 #![warn(missing_docs, clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
+pub mod design;
 pub mod heating;
 pub mod protection;
 pub mod resistance;

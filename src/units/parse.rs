@@ -43,6 +43,8 @@ pub enum Dimension {
     Ratio,
     /// A number in percent; `70` and `70 %` are 70.
     Percent,
+    /// A number without a unit.
+    Number,
 }
 
 /// A unit that a quantity may be written in: `base = value * factor + shift`.
@@ -206,13 +208,14 @@ impl Dimension {
             Self::OpeningFactor => "an opening factor",
             Self::Ratio => "a ratio",
             Self::Percent => "a percentage",
+            Self::Number => "a plain number",
         }
     }
 
     /// The spelling of the base unit.
     #[must_use]
     pub fn base_unit(self) -> &'static str {
-        if self == Self::Ratio {
+        if matches!(self, Self::Ratio | Self::Number) {
             return "";
         }
         UNITS

@@ -1,0 +1,1 @@
+//! From plain inputs to the outcome: joins section, resistance, heating and protection for one member.

@@ -1,0 +1,323 @@
+//! Reading a file: split, parse, decode. Items are read in parallel, each by its own text.
+
+use std::path::PathBuf;
+use std::sync::Arc;
+
+use rayon::prelude::*;
+
+use crate::analysis::source::{Decoded, FileKind, Item, SourceFile};
+use crate::design::decode::head;
+use crate::design::decode::library;
+use crate::design::decode::member::{self, Owner};
+use crate::design::decode::reader::Reader;
+use crate::design::keys::Key;
+use crate::design::keys::protection::PROTECTION_FILE;
+use crate::design::keys::steelwork::STEELWORK;
+use crate::design::model::head::{Group, Head};
+use crate::design::model::library::NamedProduct;
+use crate::design::model::member::{Extent, Member, MemberKeys};
+use crate::design::slip::{Slip, SlipKind};
+use crate::syntax::outline::{Chunk, outline};
+use crate::syntax::recover::{ItemTree, parse_item};
+use crate::syntax::tree::parse;
+use crate::syntax::{Entry, Node, SyntaxError, Value};
+use crate::text::{Span, Spanned};
+
+/// What the name of a file says of its kind: `*.protection.yaml` or `.yml`, `*.steelwork.yaml` or `.yml`.
+#[must_use]
+pub fn kind_by_name(path: &std::path::Path) -> Option<FileKind> {
+    let name = path.file_name()?.to_str()?.to_ascii_lowercase();
+    let stem = name.strip_suffix(".yaml").or_else(|| name.strip_suffix(".yml"))?;
+    if stem.ends_with(".steelwork") {
+        Some(FileKind::Steelwork)
+    } else if stem.ends_with(".protection") {
+        Some(FileKind::Protection)
+    } else {
+        None
+    }
+}
+
+/// Reads a file's text. The kind follows from the name, or else from the first key that tells.
+#[must_use]
+pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
+    let outline = outline(&text);
+    let kind = kind_by_name(&path).unwrap_or_else(|| {
+        let protection = outline.chunks.iter().any(|chunk| chunk.key == "protection" || chunk.key == "products");
+        if protection { FileKind::Protection } else { FileKind::Steelwork }
+    });
+    let mut file = SourceFile {
+        path,
+        text: Arc::clone(&text),
+        kind,
+        head: Head::default(),
+        groups: Vec::new(),
+        members: Vec::new(),
+        products: Vec::new(),
+        slips: Vec::new(),
+        errors: Vec::new(),
+    };
+    let mut top = Top { file: &mut file, seen: Vec::new(), last_key: None };
+    if outline.doubtful {
+        let tree = parse(&text);
+        if tree.errors.iter().all(|error| error.kind != crate::syntax::ErrorKind::NotYaml) {
+            top.file.errors = tree.errors;
+            top.whole(tree.root);
+            top.finish();
+            return file;
+        }
+    }
+    for chunk in &outline.chunks {
+        top.chunk(&text, chunk);
+    }
+    top.finish();
+    file
+}
+
+struct Top<'a> {
+    file: &'a mut SourceFile,
+    seen: Vec<String>,
+    last_key: Option<Span>,
+}
+
+impl Top<'_> {
+    fn table(&self) -> &'static [Key] {
+        match self.file.kind {
+            FileKind::Steelwork => STEELWORK,
+            FileKind::Protection => PROTECTION_FILE,
+        }
+    }
+
+    /// Reads a tree that was not split.
+    fn whole(&mut self, root: Option<Node>) {
+        let Some(root) = root else { return };
+        match root.value {
+            Value::Mapping(entries) => entries.into_iter().for_each(|entry| self.entry(entry, 0)),
+            Value::Null => {}
+            _ => {
+                let message = "a design file is a mapping of keys such as `steelwork: 1` and `members:`";
+                self.file.slips.push(Slip::new(SlipKind::WrongKind, first_line(root.span, &self.file.text), message));
+            }
+        }
+    }
+
+    fn chunk(&mut self, text: &str, chunk: &Chunk) {
+        let splits = matches!(chunk.key.as_str(), "members" | "groups" | "products") && !chunk.items.is_empty();
+        let known = Key::find(self.table(), &chunk.key).is_some();
+        if !splits || !known {
+            let tree = parse(chunk.span.slice(text));
+            self.file.errors.extend(tree.errors.into_iter().map(|error| error.shifted(chunk.span.start)));
+            match tree.root.map(|node| (node.span, node.value)) {
+                Some((_, Value::Mapping(entries))) => {
+                    entries.into_iter().for_each(|entry| self.entry(entry, chunk.span.start));
+                }
+                Some((_, Value::Null)) | None => {}
+                Some((span, _)) if self.file.errors.is_empty() => self.no_key(span.shift(chunk.span.start)),
+                Some(_) => {}
+            }
+            return;
+        }
+        if self.repeated(&chunk.key, chunk.key_span) {
+            return;
+        }
+        let items = &chunk.items;
+        let list = chunk.list;
+        let at = |span: &Span| (span.start, parse_item(span.slice(text), list));
+        match chunk.key.as_str() {
+            "members" => self.file.members = items.par_iter().map(|s| at(s)).map(|(b, t)| item(b, member_item(t))).collect(),
+            "groups" => {
+                let groups = items.iter().map(at).filter_map(|(b, t)| Some(item(b, named_item(t, group)?))).collect();
+                self.file.groups = groups;
+            }
+            _ => {
+                let products = items.iter().map(at).filter_map(|(b, t)| Some(item(b, named_item(t, product)?))).collect();
+                self.file.products = products;
+            }
+        }
+    }
+
+    fn no_key(&mut self, span: Span) {
+        self.file.errors.push(SyntaxError {
+            span: first_line(span, &self.file.text),
+            kind: crate::syntax::ErrorKind::NotYaml,
+            message: "this line has no `key:`; the top level of a design file is a mapping of keys".to_owned(),
+            repair: None,
+        });
+    }
+
+    fn repeated(&mut self, key: &str, span: Span) -> bool {
+        self.last_key = Some(span);
+        if self.seen.iter().any(|seen| seen == key) {
+            let message = format!("`{key}` stands twice at the top level; the first one holds");
+            self.file.slips.push(Slip::new(SlipKind::NotYaml, span, message));
+            return true;
+        }
+        self.seen.push(key.to_owned());
+        false
+    }
+
+    /// Takes a top-level entry that was parsed whole; its spans count from `base`.
+    fn entry(&mut self, entry: Entry, base: u32) {
+        let mut reader = Reader::default();
+        let name = match &entry.key.value {
+            Value::Scalar(name) => name.text.clone(),
+            _ => String::new(),
+        };
+        if let Some(key) = Key::find(self.table(), &name) {
+            if self.repeated(&name, entry.key.span.shift(base)) {
+                return;
+            }
+            match key.name {
+                "members" => self.file.members = self.listed(&mut reader, entry.value, key, base),
+                "groups" => self.file.groups = named_all(&mut reader, entry.value, key, base, group),
+                "products" => self.file.products = named_all(&mut reader, entry.value, key, base, product),
+                "protection" => {
+                    reader.whole(&entry.value, key);
+                    self.file.head.version_at = Some(entry.key.span.shift(base));
+                }
+                "note" => {}
+                _ => {
+                    let mut shifted = entry;
+                    shift_entry(&mut shifted, base);
+                    head::entry(&mut reader, &mut self.file.head, key, &shifted);
+                    self.file.slips.append(&mut reader.slips);
+                    return;
+                }
+            }
+        } else {
+            let node = Node { span: entry.key.span, value: Value::Mapping(vec![entry]), through_alias: false };
+            let owner = match self.file.kind {
+                FileKind::Steelwork => "a steelwork file",
+                FileKind::Protection => "a protection file",
+            };
+            reader.entries(&node, self.table(), owner, |_, _, _| {});
+        }
+        self.file.slips.extend(reader.slips.into_iter().map(|slip| slip.shifted(base)));
+    }
+
+    fn listed(&self, reader: &mut Reader, node: Node, key: &'static Key, base: u32) -> Vec<Item<Member>> {
+        match node.value {
+            Value::Sequence(nodes) => nodes
+                .into_iter()
+                .map(|node| item(base, member_item(ItemTree { node: Some(node), errors: Vec::new(), broken: false })))
+                .collect(),
+            Value::Null => Vec::new(),
+            _ => {
+                reader.wrong_kind(&node, key);
+                Vec::new()
+            }
+        }
+    }
+
+    /// What the file as a whole lacks.
+    fn finish(&mut self) {
+        let key = match self.file.kind {
+            FileKind::Steelwork => "steelwork",
+            FileKind::Protection => "protection",
+        };
+        if self.file.head.version_at.is_none() && self.file.errors.is_empty() {
+            let span = Span::new(0, self.file.text.chars().next().map_or(0, char::len_utf8));
+            let message = format!("the file has no `{key}: 1`, which says what kind of file it is and which version of the format");
+            self.file.slips.push(Slip::new(SlipKind::MissingKey, span, message).at_key(key));
+        }
+    }
+}
+
+fn first_line(span: Span, text: &str) -> Span {
+    let line = span.slice(text).split(['\n', '\r']).next().unwrap_or("");
+    Span { start: span.start, end: span.start + Span::new(0, line.len()).end }
+}
+
+fn item<T>(base: u32, decoded: Decoded<T>) -> Item<T> {
+    Item { base, decoded: Arc::new(decoded) }
+}
+
+/// Decodes an entry of `members`.
+#[must_use]
+pub fn member_item(tree: ItemTree) -> Decoded<Member> {
+    let mut reader = Reader::default();
+    let value = match &tree.node {
+        Some(node) => member::member(&mut reader, node, tree.broken),
+        None => Member { broken: true, ..Member::default() },
+    };
+    Decoded { value, slips: reader.slips, errors: tree.errors }
+}
+
+fn group(reader: &mut Reader, name: Spanned<String>, value: &Node, extent: Span) -> Group {
+    let keys: MemberKeys = member::shared_keys(reader, value, Owner::Group);
+    Group { name, keys, extent: Extent(extent) }
+}
+
+fn product(reader: &mut Reader, name: Spanned<String>, value: &Node, extent: Span) -> NamedProduct {
+    library::product(reader, name, value, extent)
+}
+
+type DecodeNamed<T> = fn(&mut Reader, Spanned<String>, &Node, Span) -> T;
+
+/// Decodes an item that is a mapping of one name.
+fn named_item<T>(tree: ItemTree, decode: DecodeNamed<T>) -> Option<Decoded<T>> {
+    let mut reader = Reader::default();
+    let mut errors = tree.errors;
+    let value = match tree.node.map(|node| node.value) {
+        Some(Value::Mapping(mut entries)) if !entries.is_empty() => {
+            named(&mut reader, entries.swap_remove(0), decode)
+        }
+        _ => None,
+    };
+    let value = match value {
+        Some(value) => value,
+        None if errors.is_empty() && reader.slips.is_empty() => return None,
+        None => {
+            // Nothing of the entry can be named, but what is wrong with it must not be lost.
+            let name = Spanned { value: String::new(), span: Span::default() };
+            let null = Node { span: Span::default(), value: Value::Null, through_alias: true };
+            decode(&mut Reader::default(), name, &null, Span::default())
+        }
+    };
+    errors.truncate(1);
+    Some(Decoded { value, slips: reader.slips, errors })
+}
+
+fn named<T>(reader: &mut Reader, entry: Entry, decode: DecodeNamed<T>) -> Option<T> {
+    let Value::Scalar(name) = &entry.key.value else {
+        reader.slip(SlipKind::WrongKind, &entry.key, "the name of a group or product is a word");
+        return None;
+    };
+    let extent = entry.key.span.join(entry.value.span);
+    let name = Spanned { value: name.text.clone(), span: entry.key.span };
+    Some(decode(reader, name, &entry.value, extent))
+}
+
+fn named_all<T>(
+    reader: &mut Reader,
+    node: Node,
+    key: &'static Key,
+    base: u32,
+    decode: DecodeNamed<T>,
+) -> Vec<Item<T>> {
+    match node.value {
+        Value::Mapping(entries) => entries
+            .into_iter()
+            .filter_map(|entry| {
+                let mut own = Reader::default();
+                let value = named(&mut own, entry, decode);
+                let Some(value) = value else {
+                    reader.slips.append(&mut own.slips);
+                    return None;
+                };
+                Some(item(base, Decoded { value, slips: own.slips, errors: Vec::new() }))
+            })
+            .collect(),
+        Value::Null => Vec::new(),
+        _ => {
+            reader.wrong_kind(&node, key);
+            Vec::new()
+        }
+    }
+}
+
+fn shift_entry(entry: &mut Entry, by: u32) {
+    if by > 0 {
+        entry.key.shift(by);
+        entry.value.shift(by);
+    }
+}

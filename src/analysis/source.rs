@@ -1,0 +1,77 @@
+//! A file as it was read: its head, and its items with the place where each stands.
+
+use std::path::PathBuf;
+use std::sync::Arc;
+
+use crate::design::model::head::{Group, Head};
+use crate::design::model::library::NamedProduct;
+use crate::design::model::member::Member;
+use crate::design::slip::Slip;
+use crate::syntax::SyntaxError;
+use crate::text::Span;
+
+/// What kind a file is.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum FileKind {
+    /// Members of a frame.
+    Steelwork,
+    /// Protection products.
+    Protection,
+}
+
+/// A thing decoded from an item's text alone. Spans count from the start of the item.
+#[derive(Debug, PartialEq)]
+pub struct Decoded<T> {
+    /// The thing.
+    pub value: T,
+    /// What is wrong with it.
+    pub slips: Vec<Slip>,
+    /// What is no YAML in it.
+    pub errors: Vec<SyntaxError>,
+}
+
+/// A decoded thing at its place in the file.
+#[derive(Debug, Clone)]
+pub struct Item<T> {
+    /// Offset of the item's text in the file's.
+    pub base: u32,
+    /// What was decoded; shared by equal texts.
+    pub decoded: Arc<Decoded<T>>,
+}
+
+impl<T> Item<T> {
+    /// The thing.
+    #[must_use]
+    pub fn value(&self) -> &T {
+        &self.decoded.value
+    }
+
+    /// A span of the item as a span of the file.
+    #[must_use]
+    pub fn place(&self, span: Span) -> Span {
+        span.shift(self.base)
+    }
+}
+
+/// A file as it was read.
+#[derive(Debug)]
+pub struct SourceFile {
+    /// Its path.
+    pub path: Arc<PathBuf>,
+    /// Its text.
+    pub text: Arc<str>,
+    /// Its kind.
+    pub kind: FileKind,
+    /// What a steelwork file says outside its members (spans of the file).
+    pub head: Head,
+    /// Groups in the order of the file.
+    pub groups: Vec<Item<Group>>,
+    /// Members in the order of the file.
+    pub members: Vec<Item<Member>>,
+    /// Products in the order of the file.
+    pub products: Vec<Item<NamedProduct>>,
+    /// Slips outside the items (spans of the file).
+    pub slips: Vec<Slip>,
+    /// What is no YAML outside the items (spans of the file).
+    pub errors: Vec<SyntaxError>,
+}

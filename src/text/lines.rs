@@ -1,0 +1,114 @@
+//! Lines and columns in the units that editors and reports count in.
+
+/// How columns are counted.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
+pub enum Encoding {
+    /// Bytes of UTF-8.
+    Utf8,
+    /// Units of UTF-16.
+    Utf16,
+    /// Unicode scalar values.
+    Utf32,
+}
+
+/// A zero-based line and column.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash, PartialOrd, Ord, Default)]
+pub struct Position {
+    /// The line.
+    pub line: u32,
+    /// The column, in the units of an [`Encoding`].
+    pub column: u32,
+}
+
+/// The starts of a text's lines. Lines end with LF, CR LF or a lone CR, as the language server protocol has them.
+#[derive(Debug, Clone)]
+pub struct LineIndex {
+    starts: Vec<u32>,
+}
+
+impl LineIndex {
+    /// Finds the lines of a text.
+    #[must_use]
+    pub fn new(text: &str) -> Self {
+        let bytes = text.as_bytes();
+        let mut starts = vec![0];
+        for (at, byte) in bytes.iter().enumerate() {
+            let ends = *byte == b'\n' || (*byte == b'\r' && bytes.get(at + 1) != Some(&b'\n'));
+            if ends {
+                starts.push(u32::try_from(at + 1).unwrap_or(u32::MAX));
+            }
+        }
+        Self { starts }
+    }
+
+    /// The line of an offset, zero-based.
+    #[must_use]
+    pub fn line(&self, offset: u32) -> u32 {
+        let after = self.starts.partition_point(|start| *start <= offset);
+        u32::try_from(after.saturating_sub(1)).unwrap_or(u32::MAX)
+    }
+
+    /// The offset at which a line begins; the end of the text for lines past the last.
+    #[must_use]
+    pub fn start(&self, line: u32, text: &str) -> u32 {
+        self.starts.get(line as usize).copied().unwrap_or_else(|| u32::try_from(text.len()).unwrap_or(u32::MAX))
+    }
+
+    /// The position of an offset. An offset inside a character counts as its start.
+    #[must_use]
+    pub fn position(&self, text: &str, offset: u32, encoding: Encoding) -> Position {
+        let mut end = (offset as usize).min(text.len());
+        while !text.is_char_boundary(end) {
+            end -= 1;
+        }
+        let line = self.line(u32::try_from(end).unwrap_or(u32::MAX));
+        let before = text.get(self.start(line, text) as usize..end).unwrap_or("");
+        let column = match encoding {
+            Encoding::Utf8 => before.len(),
+            Encoding::Utf16 => before.encode_utf16().count(),
+            Encoding::Utf32 => before.chars().count(),
+        };
+        Position { line, column: u32::try_from(column).unwrap_or(u32::MAX) }
+    }
+
+    /// The offset of a position. A column past the end of its line means the end of the line, before its break.
+    #[must_use]
+    pub fn offset(&self, text: &str, position: Position, encoding: Encoding) -> u32 {
+        let start = self.start(position.line, text);
+        let end = self.start(position.line.saturating_add(1), text);
+        let line = text.get(start as usize..end as usize).unwrap_or("").trim_end_matches(['\r', '\n']);
+        let mut units = 0;
+        for (at, c) in line.char_indices() {
+            let size = match encoding {
+                Encoding::Utf8 => c.len_utf8(),
+                Encoding::Utf16 => c.len_utf16(),
+                Encoding::Utf32 => 1,
+            };
+            if units + size > position.column as usize {
+                return start + u32::try_from(at).unwrap_or(0);
+            }
+            units += size;
+        }
+        start + u32::try_from(line.len()).unwrap_or(0)
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn counts_columns_in_each_encoding() {
+        let text = "a\r\n梁😀x\rend";
+        let index = LineIndex::new(text);
+        let x = u32::try_from(text.find('x').unwrap()).unwrap();
+        for (encoding, column) in [(Encoding::Utf8, 7), (Encoding::Utf16, 3), (Encoding::Utf32, 2)] {
+            let position = index.position(text, x, encoding);
+            assert_eq!(position, Position { line: 1, column });
+            assert_eq!(index.offset(text, position, encoding), x);
+        }
+        assert_eq!(index.line(u32::try_from(text.find("end").unwrap()).unwrap()), 2);
+        assert_eq!(index.offset(text, Position { line: 0, column: 99 }, Encoding::Utf16), 1);
+        assert_eq!(index.offset(text, Position { line: 9, column: 0 }, Encoding::Utf16) as usize, text.len());
+    }
+}
