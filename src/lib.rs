@@ -6,10 +6,13 @@
 
 #![warn(missing_docs, clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
+pub mod analysis;
 pub mod design;
+pub mod findings;
 pub mod heating;
 pub mod protection;
 pub mod resistance;
+pub mod scenario;
 pub mod section;
 pub mod syntax;
 pub mod text;

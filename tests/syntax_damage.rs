@@ -18,18 +18,62 @@ fn damaged(item: &str) -> String {
 
 /// The kinds of damage: the item, the characters that are to be shown, and the keys that survive.
 const DAMAGE: &[(&str, &str, &[&str])] = &[
-    ("  - mark: B4\n\t  role: beam\n    section: IPE 300\n", "\t  ", &["mark", "section"]),
-    ("  - mark: B4\n    role: beam\n    section HE 240 B\n", "section HE 240 B", &["mark", "role"]),
-    ("  - mark: B4\n    role: beam\n    section:IPE 300\n", ":", &["mark", "role"]),
-    ("  - mark: B4\n      role: beam\n    section: IPE 300\n", "      ", &["mark", "section"]),
-    ("  - mark: B4\n   role: beam\n    section: IPE 300\n", "   ", &["mark", "section"]),
-    ("  - mark: B4\n    protection: { product: x, thickness\n    section: IPE 300\n", "{", &["mark", "section"]),
-    ("  - mark: B4\n    note: \"to be agreed\n    section: IPE 300\n", "\"to be agreed", &["mark", "section"]),
-    ("  - mark: B4\n    location: { level: 2 }}\n    section: IPE 300\n", "}", &["mark", "section"]),
+    (
+        "  - mark: B4\n\t  role: beam\n    section: IPE 300\n",
+        "\t  ",
+        &["mark", "section"],
+    ),
+    (
+        "  - mark: B4\n    role: beam\n    section HE 240 B\n",
+        "section HE 240 B",
+        &["mark", "role"],
+    ),
+    (
+        "  - mark: B4\n    role: beam\n    section:IPE 300\n",
+        ":",
+        &["mark", "role"],
+    ),
+    (
+        "  - mark: B4\n      role: beam\n    section: IPE 300\n",
+        "      ",
+        &["mark", "section"],
+    ),
+    (
+        "  - mark: B4\n   role: beam\n    section: IPE 300\n",
+        "   ",
+        &["mark", "section"],
+    ),
+    (
+        "  - mark: B4\n    protection: { product: x, thickness\n    section: IPE 300\n",
+        "{",
+        &["mark", "section"],
+    ),
+    (
+        "  - mark: B4\n    note: \"to be agreed\n    section: IPE 300\n",
+        "\"to be agreed",
+        &["mark", "section"],
+    ),
+    (
+        "  - mark: B4\n    location: { level: 2 }}\n    section: IPE 300\n",
+        "}",
+        &["mark", "section"],
+    ),
     ("  - { mark: B4, role: beam section: IPE 300 }\n", "", &["mark"]),
-    ("  - mark: B4\n    loading: *missing\n    section: IPE 300\n", "*missing", &["mark", "section", "loading"]),
-    ("  - mark: B4\n    note: @home\n    section: IPE 300\n", "@", &["mark", "section"]),
-    ("  - mark: B4\n    note: a: b\n    section: IPE 300\n", ":", &["mark", "section"]),
+    (
+        "  - mark: B4\n    loading: *missing\n    section: IPE 300\n",
+        "*missing",
+        &["mark", "section", "loading"],
+    ),
+    (
+        "  - mark: B4\n    note: @home\n    section: IPE 300\n",
+        "@",
+        &["mark", "section"],
+    ),
+    (
+        "  - mark: B4\n    note: a: b\n    section: IPE 300\n",
+        ":",
+        &["mark", "section"],
+    ),
     ("  -mark: B4\n    role: beam\n", "", &[]),
 ];
 
@@ -61,7 +105,13 @@ fn damage_blanks_its_own_member_only() {
             let keys: Vec<String> = match read.node.map(|node| node.value) {
                 Some(Value::Mapping(entries)) => entries
                     .into_iter()
-                    .filter_map(|e| if let Value::Scalar(s) = e.key.value { Some(s.text) } else { None })
+                    .filter_map(|e| {
+                        if let Value::Scalar(s) = e.key.value {
+                            Some(s.text)
+                        } else {
+                            None
+                        }
+                    })
                     .collect(),
                 _ => Vec::new(),
             };

@@ -104,13 +104,17 @@ impl Design {
     /// A group by name.
     #[must_use]
     pub fn group(&self, name: &str) -> Option<(FileIndex, &Item<Group>)> {
-        self.groups.get(name).map(|(file, index)| (*file, &self.files[*file].groups[*index]))
+        self.groups
+            .get(name)
+            .map(|(file, index)| (*file, &self.files[*file].groups[*index]))
     }
 
     /// A product by name.
     #[must_use]
     pub fn product(&self, name: &str) -> Option<(FileIndex, &Item<NamedProduct>)> {
-        self.products.get(name).map(|(file, index)| (*file, &self.files[*file].products[*index]))
+        self.products
+            .get(name)
+            .map(|(file, index)| (*file, &self.files[*file].products[*index]))
     }
 
     /// A member's keys with those of its group and the defaults.
@@ -119,7 +123,9 @@ impl Design {
         let group = member.keys.group.value().or_else(|| self.head().defaults.group.value());
         Inherited {
             member: &member.keys,
-            group: group.and_then(|name| self.group(name)).map(|(_, item)| &item.value().keys),
+            group: group
+                .and_then(|name| self.group(name))
+                .map(|(_, item)| &item.value().keys),
             defaults: Some(&self.head().defaults),
         }
     }

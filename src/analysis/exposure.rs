@@ -40,20 +40,40 @@ pub fn reached(exposure: Exposure, shield: Option<Shield>) -> Reached {
         Exposure::AllRound | Exposure::Perimeter(_) => false,
     };
     let covered = covers_top || matches!(exposure, Exposure::Covered(faces) if !faces.is_empty());
-    let plain = |slab: bool, doubt: Option<ShieldDoubt>| Reached { exposure, slab: slab && covers_top, doubt };
-    let all_round = |doubt| Reached { exposure: Exposure::AllRound, slab: false, doubt: Some(doubt) };
+    let plain = |slab: bool, doubt: Option<ShieldDoubt>| Reached {
+        exposure,
+        slab: slab && covers_top,
+        doubt,
+    };
+    let all_round = |doubt| Reached {
+        exposure: Exposure::AllRound,
+        slab: false,
+        doubt: Some(doubt),
+    };
     if !covered {
         return plain(false, None);
     }
     match shield {
         None => plain(false, Some(ShieldDoubt::NotStated)),
-        Some(Shield::None | Shield::Deck { concrete: Some(false), .. }) => all_round(ShieldDoubt::NoShield),
+        Some(
+            Shield::None
+            | Shield::Deck {
+                concrete: Some(false), ..
+            },
+        ) => all_round(ShieldDoubt::NoShield),
         Some(Shield::Slab) => plain(true, None),
         Some(Shield::Wall) => plain(false, None),
         Some(Shield::Deck { concrete: None, .. }) => all_round(ShieldDoubt::NoShield),
-        Some(Shield::Deck { voids_filled: Some(true), .. }) => plain(true, None),
-        Some(Shield::Deck { contact: Some(contact), .. }) if contact >= CONTACT => plain(true, None),
-        Some(Shield::Deck { contact: Some(contact), .. }) => all_round(ShieldDoubt::LowContact(contact)),
+        Some(Shield::Deck {
+            voids_filled: Some(true),
+            ..
+        }) => plain(true, None),
+        Some(Shield::Deck {
+            contact: Some(contact), ..
+        }) if contact >= CONTACT => plain(true, None),
+        Some(Shield::Deck {
+            contact: Some(contact), ..
+        }) => all_round(ShieldDoubt::LowContact(contact)),
         Some(Shield::Deck { contact: None, .. }) => all_round(ShieldDoubt::VoidsOpen),
     }
 }
@@ -62,19 +82,36 @@ pub fn reached(exposure: Exposure, shield: Option<Shield>) -> Reached {
 mod tests {
     use super::*;
 
-    const DECK: Shield = Shield::Deck { concrete: Some(true), contact: None, voids_filled: None, re_entrant: None };
+    const DECK: Shield = Shield::Deck {
+        concrete: Some(true),
+        contact: None,
+        voids_filled: None,
+        re_entrant: None,
+    };
 
     #[test]
     fn a_slab_covers_the_top() {
         let slab = reached(Exposure::ThreeSides, Some(Shield::Slab));
-        assert_eq!(slab, Reached { exposure: Exposure::ThreeSides, slab: true, doubt: None });
+        assert_eq!(
+            slab,
+            Reached {
+                exposure: Exposure::ThreeSides,
+                slab: true,
+                doubt: None
+            }
+        );
         assert!(!reached(Exposure::AllRound, Some(Shield::Slab)).slab);
         assert!(!reached(Exposure::ThreeSides, Some(Shield::Wall)).slab);
     }
 
     #[test]
     fn bare_sheeting_is_no_shield() {
-        let sheeting = Shield::Deck { concrete: Some(false), contact: None, voids_filled: None, re_entrant: None };
+        let sheeting = Shield::Deck {
+            concrete: Some(false),
+            contact: None,
+            voids_filled: None,
+            re_entrant: None,
+        };
         for shield in [Shield::None, sheeting] {
             let reached = reached(Exposure::ThreeSides, Some(shield));
             assert_eq!(reached.exposure, Exposure::AllRound);
@@ -84,11 +121,22 @@ mod tests {
 
     #[test]
     fn a_deck_counts_by_contact_or_filled_voids() {
-        let with = |contact, voids_filled| Shield::Deck { concrete: Some(true), contact, voids_filled, re_entrant: None };
-        assert_eq!(reached(Exposure::ThreeSides, Some(DECK)).doubt, Some(ShieldDoubt::VoidsOpen));
+        let with = |contact, voids_filled| Shield::Deck {
+            concrete: Some(true),
+            contact,
+            voids_filled,
+            re_entrant: None,
+        };
+        assert_eq!(
+            reached(Exposure::ThreeSides, Some(DECK)).doubt,
+            Some(ShieldDoubt::VoidsOpen)
+        );
         assert!(reached(Exposure::ThreeSides, Some(with(Some(0.85), None))).slab);
         assert!(reached(Exposure::ThreeSides, Some(with(Some(0.5), Some(true)))).slab);
         let low = reached(Exposure::ThreeSides, Some(with(Some(0.5), Some(false))));
-        assert_eq!((low.exposure, low.doubt), (Exposure::AllRound, Some(ShieldDoubt::LowContact(0.5))));
+        assert_eq!(
+            (low.exposure, low.doubt),
+            (Exposure::AllRound, Some(ShieldDoubt::LowContact(0.5)))
+        );
     }
 }

@@ -11,37 +11,74 @@ use crate::text::Spanned;
 /// How designations are looked up in a design.
 #[must_use]
 pub fn lookup_options(basis: &Basis) -> LookupOptions {
-    let tables: Vec<Table> =
-        Table::ALL.into_iter().filter(|table| basis.section_tables.contains(&table.code())).collect();
+    let tables: Vec<Table> = Table::ALL
+        .into_iter()
+        .filter(|table| basis.section_tables.contains(&table.code()))
+        .collect();
     LookupOptions {
         tables: (!tables.is_empty()).then_some(tables),
-        hollow: basis.hollow_hot_finished.map(|hot| if hot { Finish::HotFinished } else { Finish::ColdFormed }),
+        hollow: basis
+            .hollow_hot_finished
+            .map(|hot| if hot { Finish::HotFinished } else { Finish::ColdFormed }),
     }
 }
 
 /// What is wrong with the names in one block of keys. Spans are those of the block's own text.
 pub fn check(keys: &MemberKeys, design: &Design, options: &LookupOptions, slips: &mut Vec<Slip>) {
     if let (Some(SectionChoice::Designation(text)), Some(span)) = (keys.section.value(), keys.section.span()) {
-        slips.extend(section_slip(&Spanned { value: text.as_str(), span }, options));
+        slips.extend(section_slip(
+            &Spanned {
+                value: text.as_str(),
+                span,
+            },
+            options,
+        ));
     }
     if let (Some(name), Some(span)) = (keys.group.value(), keys.group.span())
         && !design.groups.contains_key(name)
     {
         let known = design.groups.keys().map(String::as_str);
-        slips.push(stranger(SlipKind::UnknownGroup, "group", "group", name, span, known, "under `groups`"));
+        slips.push(stranger(
+            SlipKind::UnknownGroup,
+            "group",
+            "group",
+            name,
+            span,
+            known,
+            "under `groups`",
+        ));
     }
     if let (Some(name), Some(span)) = (keys.fire.value(), keys.fire.span())
         && !design.fires.contains_key(name)
     {
         let known = design.fires.keys().map(String::as_str);
-        slips.push(stranger(SlipKind::UnknownFire, "fire", "fire", name, span, known, "under `fires`"));
+        slips.push(stranger(
+            SlipKind::UnknownFire,
+            "fire",
+            "fire",
+            name,
+            span,
+            known,
+            "under `fires`",
+        ));
     }
-    if let Some(product) = keys.protection.value().and_then(|protection| protection.product.as_ref())
+    if let Some(product) = keys
+        .protection
+        .value()
+        .and_then(|protection| protection.product.as_ref())
         && !design.products.contains_key(&product.value)
     {
         let known = design.products.keys().map(String::as_str);
         let place = "in the libraries of the design";
-        slips.push(stranger(SlipKind::UnknownProduct, "protection", "product", &product.value, product.span, known, place));
+        slips.push(stranger(
+            SlipKind::UnknownProduct,
+            "protection",
+            "product",
+            &product.value,
+            product.span,
+            known,
+            place,
+        ));
     }
 }
 
@@ -62,7 +99,15 @@ fn stranger<'a>(
         None if known.is_empty() => String::new(),
         None => {
             let more = if known.len() > 5 { ", .." } else { "" };
-            format!("; there are {}{more}", known.iter().take(5).map(|k| format!("`{k}`")).collect::<Vec<_>>().join(", "))
+            format!(
+                "; there are {}{more}",
+                known
+                    .iter()
+                    .take(5)
+                    .map(|k| format!("`{k}`"))
+                    .collect::<Vec<_>>()
+                    .join(", ")
+            )
         }
     };
     let slip = Slip::new(kind, span, format!("no {noun} is called `{name}` {place}{hint}")).at_key(key);
@@ -74,32 +119,62 @@ fn stranger<'a>(
 
 fn section_slip(text: &Spanned<&str>, options: &LookupOptions) -> Option<Slip> {
     let listed = |rows: &[&CatalogueRow]| {
-        rows.iter().take(5).map(|row| format!("`{}`", row.designation)).collect::<Vec<_>>().join(", ")
+        rows.iter()
+            .take(5)
+            .map(|row| format!("`{}`", row.designation))
+            .collect::<Vec<_>>()
+            .join(", ")
     };
     match find(text.value, options) {
         Lookup::Found(_) => None,
         Lookup::Ambiguous(rows) => {
             let all: Vec<String> = rows
                 .iter()
-                .map(|row| format!("`{}` ({}, {:.0} mm²)", row.designation, row.standard, row.geometry().area.mm2()))
+                .map(|row| {
+                    format!(
+                        "`{}` ({}, {:.0} mm²)",
+                        row.designation,
+                        row.standard,
+                        row.geometry().area.mm2()
+                    )
+                })
                 .collect();
-            let message = format!("`{}` fits {} different sections: {}", text.value, rows.len(), all.join(", "));
+            let message = format!(
+                "`{}` fits {} different sections: {}",
+                text.value,
+                rows.len(),
+                all.join(", ")
+            );
             let mut slip = Slip::new(SlipKind::AmbiguousSection, text.span, message)
                 .at_key("section")
                 .remark("write the one that is meant, or settle it for the design by `basis: { section tables: [..], hollow: .. }`", None);
             for row in &rows {
-                slip = slip.repair(format!("write `{}`", row.designation), false, text.span, &*row.designation);
+                slip = slip.repair(
+                    format!("write `{}`", row.designation),
+                    false,
+                    text.span,
+                    &*row.designation,
+                );
             }
             Some(slip)
         }
         Lookup::Unknown { nearest } => {
             let message = match nearest.as_slice() {
                 [] => format!("no section table has `{}`", text.value),
-                rows => format!("no section table has `{}`; the nearest are {}", text.value, listed(rows)),
+                rows => format!(
+                    "no section table has `{}`; the nearest are {}",
+                    text.value,
+                    listed(rows)
+                ),
             };
             let mut slip = Slip::new(SlipKind::UnknownSection, text.span, message).at_key("section");
             for row in nearest.iter().take(3) {
-                slip = slip.repair(format!("write `{}`", row.designation), false, text.span, &*row.designation);
+                slip = slip.repair(
+                    format!("write `{}`", row.designation),
+                    false,
+                    text.span,
+                    &*row.designation,
+                );
             }
             Some(slip)
         }

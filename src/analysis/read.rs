@@ -42,8 +42,15 @@ pub fn kind_by_name(path: &std::path::Path) -> Option<FileKind> {
 pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
     let outline = outline(&text);
     let kind = kind_by_name(&path).unwrap_or_else(|| {
-        let protection = outline.chunks.iter().any(|chunk| chunk.key == "protection" || chunk.key == "products");
-        if protection { FileKind::Protection } else { FileKind::Steelwork }
+        let protection = outline
+            .chunks
+            .iter()
+            .any(|chunk| chunk.key == "protection" || chunk.key == "products");
+        if protection {
+            FileKind::Protection
+        } else {
+            FileKind::Steelwork
+        }
     });
     let mut file = SourceFile {
         path,
@@ -56,10 +63,18 @@ pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
         slips: Vec::new(),
         errors: Vec::new(),
     };
-    let mut top = Top { file: &mut file, seen: Vec::new(), last_key: None };
+    let mut top = Top {
+        file: &mut file,
+        seen: Vec::new(),
+        last_key: None,
+    };
     if outline.doubtful {
         let tree = parse(&text);
-        if tree.errors.iter().all(|error| error.kind != crate::syntax::ErrorKind::NotYaml) {
+        if tree
+            .errors
+            .iter()
+            .all(|error| error.kind != crate::syntax::ErrorKind::NotYaml)
+        {
             top.file.errors = tree.errors;
             top.whole(tree.root);
             top.finish();
@@ -95,7 +110,11 @@ impl Top<'_> {
             Value::Null => {}
             _ => {
                 let message = "a design file is a mapping of keys such as `steelwork: 1` and `members:`";
-                self.file.slips.push(Slip::new(SlipKind::WrongKind, first_line(root.span, &self.file.text), message));
+                self.file.slips.push(Slip::new(
+                    SlipKind::WrongKind,
+                    first_line(root.span, &self.file.text),
+                    message,
+                ));
             }
         }
     }
@@ -105,10 +124,14 @@ impl Top<'_> {
         let known = Key::find(self.table(), &chunk.key).is_some();
         if !splits || !known {
             let tree = parse(chunk.span.slice(text));
-            self.file.errors.extend(tree.errors.into_iter().map(|error| error.shifted(chunk.span.start)));
+            self.file
+                .errors
+                .extend(tree.errors.into_iter().map(|error| error.shifted(chunk.span.start)));
             match tree.root.map(|node| (node.span, node.value)) {
                 Some((_, Value::Mapping(entries))) => {
-                    entries.into_iter().for_each(|entry| self.entry(entry, chunk.span.start));
+                    entries
+                        .into_iter()
+                        .for_each(|entry| self.entry(entry, chunk.span.start));
                 }
                 Some((_, Value::Null)) | None => {}
                 Some((span, _)) if self.file.errors.is_empty() => self.no_key(span.shift(chunk.span.start)),
@@ -123,13 +146,21 @@ impl Top<'_> {
         let list = chunk.list;
         let at = |span: &Span| (span.start, parse_item(span.slice(text), list));
         match chunk.key.as_str() {
-            "members" => self.file.members = items.par_iter().map(|s| at(s)).map(|(b, t)| item(b, member_item(t))).collect(),
+            "members" => self.file.members = items.par_iter().map(at).map(|(b, t)| item(b, member_item(t))).collect(),
             "groups" => {
-                let groups = items.iter().map(at).filter_map(|(b, t)| Some(item(b, named_item(t, group)?))).collect();
+                let groups = items
+                    .iter()
+                    .map(at)
+                    .filter_map(|(b, t)| Some(item(b, named_item(t, group)?)))
+                    .collect();
                 self.file.groups = groups;
             }
             _ => {
-                let products = items.iter().map(at).filter_map(|(b, t)| Some(item(b, named_item(t, product)?))).collect();
+                let products = items
+                    .iter()
+                    .map(at)
+                    .filter_map(|(b, t)| Some(item(b, named_item(t, product)?)))
+                    .collect();
                 self.file.products = products;
             }
         }
@@ -184,21 +215,36 @@ impl Top<'_> {
                 }
             }
         } else {
-            let node = Node { span: entry.key.span, value: Value::Mapping(vec![entry]), through_alias: false };
+            let node = Node {
+                span: entry.key.span,
+                value: Value::Mapping(vec![entry]),
+                through_alias: false,
+            };
             let owner = match self.file.kind {
                 FileKind::Steelwork => "a steelwork file",
                 FileKind::Protection => "a protection file",
             };
             reader.entries(&node, self.table(), owner, |_, _, _| {});
         }
-        self.file.slips.extend(reader.slips.into_iter().map(|slip| slip.shifted(base)));
+        self.file
+            .slips
+            .extend(reader.slips.into_iter().map(|slip| slip.shifted(base)));
     }
 
     fn listed(&self, reader: &mut Reader, node: Node, key: &'static Key, base: u32) -> Vec<Item<Member>> {
         match node.value {
             Value::Sequence(nodes) => nodes
                 .into_iter()
-                .map(|node| item(base, member_item(ItemTree { node: Some(node), errors: Vec::new(), broken: false })))
+                .map(|node| {
+                    item(
+                        base,
+                        member_item(ItemTree {
+                            node: Some(node),
+                            errors: Vec::new(),
+                            broken: false,
+                        }),
+                    )
+                })
                 .collect(),
             Value::Null => Vec::new(),
             _ => {
@@ -216,19 +262,29 @@ impl Top<'_> {
         };
         if self.file.head.version_at.is_none() && self.file.errors.is_empty() {
             let span = Span::new(0, self.file.text.chars().next().map_or(0, char::len_utf8));
-            let message = format!("the file has no `{key}: 1`, which says what kind of file it is and which version of the format");
-            self.file.slips.push(Slip::new(SlipKind::MissingKey, span, message).at_key(key));
+            let message = format!(
+                "the file has no `{key}: 1`, which says what kind of file it is and which version of the format"
+            );
+            self.file
+                .slips
+                .push(Slip::new(SlipKind::MissingKey, span, message).at_key(key));
         }
     }
 }
 
 fn first_line(span: Span, text: &str) -> Span {
     let line = span.slice(text).split(['\n', '\r']).next().unwrap_or("");
-    Span { start: span.start, end: span.start + Span::new(0, line.len()).end }
+    Span {
+        start: span.start,
+        end: span.start + Span::new(0, line.len()).end,
+    }
 }
 
 fn item<T>(base: u32, decoded: Decoded<T>) -> Item<T> {
-    Item { base, decoded: Arc::new(decoded) }
+    Item {
+        base,
+        decoded: Arc::new(decoded),
+    }
 }
 
 /// Decodes an entry of `members`.
@@ -237,14 +293,25 @@ pub fn member_item(tree: ItemTree) -> Decoded<Member> {
     let mut reader = Reader::default();
     let value = match &tree.node {
         Some(node) => member::member(&mut reader, node, tree.broken),
-        None => Member { broken: true, ..Member::default() },
+        None => Member {
+            broken: true,
+            ..Member::default()
+        },
     };
-    Decoded { value, slips: reader.slips, errors: tree.errors }
+    Decoded {
+        value,
+        slips: reader.slips,
+        errors: tree.errors,
+    }
 }
 
 fn group(reader: &mut Reader, name: Spanned<String>, value: &Node, extent: Span) -> Group {
     let keys: MemberKeys = member::shared_keys(reader, value, Owner::Group);
-    Group { name, keys, extent: Extent(extent) }
+    Group {
+        name,
+        keys,
+        extent: Extent(extent),
+    }
 }
 
 fn product(reader: &mut Reader, name: Spanned<String>, value: &Node, extent: Span) -> NamedProduct {
@@ -258,9 +325,7 @@ fn named_item<T>(tree: ItemTree, decode: DecodeNamed<T>) -> Option<Decoded<T>> {
     let mut reader = Reader::default();
     let mut errors = tree.errors;
     let value = match tree.node.map(|node| node.value) {
-        Some(Value::Mapping(mut entries)) if !entries.is_empty() => {
-            named(&mut reader, entries.swap_remove(0), decode)
-        }
+        Some(Value::Mapping(mut entries)) if !entries.is_empty() => named(&mut reader, entries.swap_remove(0), decode),
         _ => None,
     };
     let value = match value {
@@ -268,32 +333,44 @@ fn named_item<T>(tree: ItemTree, decode: DecodeNamed<T>) -> Option<Decoded<T>> {
         None if errors.is_empty() && reader.slips.is_empty() => return None,
         None => {
             // Nothing of the entry can be named, but what is wrong with it must not be lost.
-            let name = Spanned { value: String::new(), span: Span::default() };
-            let null = Node { span: Span::default(), value: Value::Null, through_alias: true };
+            let name = Spanned {
+                value: String::new(),
+                span: Span::default(),
+            };
+            let null = Node {
+                span: Span::default(),
+                value: Value::Null,
+                through_alias: true,
+            };
             decode(&mut Reader::default(), name, &null, Span::default())
         }
     };
     errors.truncate(1);
-    Some(Decoded { value, slips: reader.slips, errors })
+    Some(Decoded {
+        value,
+        slips: reader.slips,
+        errors,
+    })
 }
 
 fn named<T>(reader: &mut Reader, entry: Entry, decode: DecodeNamed<T>) -> Option<T> {
     let Value::Scalar(name) = &entry.key.value else {
-        reader.slip(SlipKind::WrongKind, &entry.key, "the name of a group or product is a word");
+        reader.slip(
+            SlipKind::WrongKind,
+            &entry.key,
+            "the name of a group or product is a word",
+        );
         return None;
     };
     let extent = entry.key.span.join(entry.value.span);
-    let name = Spanned { value: name.text.clone(), span: entry.key.span };
+    let name = Spanned {
+        value: name.text.clone(),
+        span: entry.key.span,
+    };
     Some(decode(reader, name, &entry.value, extent))
 }
 
-fn named_all<T>(
-    reader: &mut Reader,
-    node: Node,
-    key: &'static Key,
-    base: u32,
-    decode: DecodeNamed<T>,
-) -> Vec<Item<T>> {
+fn named_all<T>(reader: &mut Reader, node: Node, key: &'static Key, base: u32, decode: DecodeNamed<T>) -> Vec<Item<T>> {
     match node.value {
         Value::Mapping(entries) => entries
             .into_iter()
@@ -304,7 +381,14 @@ fn named_all<T>(
                     reader.slips.append(&mut own.slips);
                     return None;
                 };
-                Some(item(base, Decoded { value, slips: own.slips, errors: Vec::new() }))
+                Some(item(
+                    base,
+                    Decoded {
+                        value,
+                        slips: own.slips,
+                        errors: Vec::new(),
+                    },
+                ))
             })
             .collect(),
         Value::Null => Vec::new(),

@@ -42,15 +42,27 @@ impl<'a> Inherited<'a> {
     pub fn get<T>(&self, field: impl Fn(&'a MemberKeys) -> &'a Given<T>) -> Found<'a, T> {
         let own = field(self.member);
         if !own.is_absent() {
-            return Found { given: own, origin: Origin::Member };
+            return Found {
+                given: own,
+                origin: Origin::Member,
+            };
         }
         if let Some(given) = self.group.map(&field).filter(|given| !given.is_absent()) {
-            return Found { given, origin: Origin::Group };
+            return Found {
+                given,
+                origin: Origin::Group,
+            };
         }
         if let Some(given) = self.defaults.map(&field).filter(|given| !given.is_absent()) {
-            return Found { given, origin: Origin::Defaults };
+            return Found {
+                given,
+                origin: Origin::Defaults,
+            };
         }
-        Found { given: own, origin: Origin::BuiltIn }
+        Found {
+            given: own,
+            origin: Origin::BuiltIn,
+        }
     }
 }
 

@@ -38,7 +38,9 @@ impl fmt::Display for FireError {
     fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
         match self {
             Self::TooFewPoints => write!(f, "it needs at least two points"),
-            Self::TimesNotIncreasing(at) => write!(f, "the time of point {} does not come after the one before", at + 1),
+            Self::TimesNotIncreasing(at) => {
+                write!(f, "the time of point {} does not come after the one before", at + 1)
+            }
             Self::NotPositive(name) => write!(f, "its {name} must be above zero"),
         }
     }
@@ -152,7 +154,10 @@ impl Fire {
     /// Whether it is a nominal fire action, for which (4.26a) has its own shadow factor.
     #[must_use]
     pub const fn is_nominal(&self) -> bool {
-        matches!(self, Self::Standard | Self::External | Self::Hydrocarbon | Self::SlowHeating)
+        matches!(
+            self,
+            Self::Standard | Self::External | Self::Hydrocarbon | Self::SlowHeating
+        )
     }
 
     /// Whether the gas ever cools.
@@ -204,7 +209,10 @@ mod tests {
     #[test]
     fn rates_are_the_slopes_of_the_curves() {
         let points = vec![(0.0, 20.0), (10.0, 540.0), (30.0, 830.0), (90.0, 610.0)];
-        let points = points.into_iter().map(|(t, c)| (Time::from_min(t), Temperature::from_celsius(c))).collect();
+        let points = points
+            .into_iter()
+            .map(|(t, c)| (Time::from_min(t), Temperature::from_celsius(c)))
+            .collect();
         let fires = [
             Fire::Standard,
             Fire::External,
@@ -215,7 +223,10 @@ mod tests {
         for fire in fires {
             for t in [0.5, 3.0, 12.0, 25.0, 70.0, 200.0] {
                 let slope = (fire.gas_celsius(t + 1e-4) - fire.gas_celsius(t - 1e-4)) / 2e-4;
-                assert!((slope - fire.gas_rate(t)).abs() < 1e-3 * slope.abs().max(1.0), "{fire:?} at {t}");
+                assert!(
+                    (slope - fire.gas_rate(t)).abs() < 1e-3 * slope.abs().max(1.0),
+                    "{fire:?} at {t}"
+                );
             }
         }
     }
@@ -223,10 +234,19 @@ mod tests {
     #[test]
     fn points_must_advance() {
         let points = |pairs: &[(f64, f64)]| {
-            Points::new(pairs.iter().map(|(t, c)| (Time::from_min(*t), Temperature::from_celsius(*c))).collect(), None)
+            Points::new(
+                pairs
+                    .iter()
+                    .map(|(t, c)| (Time::from_min(*t), Temperature::from_celsius(*c)))
+                    .collect(),
+                None,
+            )
         };
         assert_eq!(points(&[(0.0, 20.0)]), Err(FireError::TooFewPoints));
-        assert_eq!(points(&[(0.0, 20.0), (0.0, 30.0)]), Err(FireError::TimesNotIncreasing(1)));
+        assert_eq!(
+            points(&[(0.0, 20.0), (0.0, 30.0)]),
+            Err(FireError::TimesNotIncreasing(1))
+        );
         assert!(points(&[(0.0, 20.0), (5.0, f64::NAN)]).is_err());
         let held = points(&[(0.0, 20.0), (10.0, 520.0)]).unwrap();
         assert_eq!((held.gas(5.0), held.gas(99.0)), (270.0, 520.0));

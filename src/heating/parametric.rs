@@ -116,7 +116,16 @@ impl Parametric {
         let star_max = by_load * gamma;
         let delay = if fuel_controlled { limit * gamma / star_max } else { 1.0 };
         let top = heating(heating_gamma * end);
-        Ok(Self { input, load, gamma, heating_gamma, end, top, star_max, delay })
+        Ok(Self {
+            input,
+            load,
+            gamma,
+            heating_gamma,
+            end,
+            top,
+            star_max,
+            delay,
+        })
     }
 
     pub(super) fn gas_celsius(&self, minutes: f64) -> f64 {
@@ -176,7 +185,11 @@ impl Parametric {
                 breaches.push(Breach { what, bound });
             }
         };
-        test(input.floor_area <= 500.0, format!("the floor area is {} m²", input.floor_area), "at most 500 m²");
+        test(
+            input.floor_area <= 500.0,
+            format!("the floor area is {} m²", input.floor_area),
+            "at most 500 m²",
+        );
         test(
             (0.02..=0.20).contains(&input.opening_factor),
             format!("the opening factor is {} m½", input.opening_factor),
@@ -193,14 +206,29 @@ impl Parametric {
             "50 to 1000 MJ/m²",
         );
         if let Some(height) = input.height {
-            test(height.m() <= 4.0, format!("the compartment is {} m high", height.m()), "at most 4 m");
+            test(
+                height.m() <= 4.0,
+                format!("the compartment is {} m high", height.m()),
+                "at most 4 m",
+            );
         }
-        test(!input.roof_openings, "the roof has openings".to_owned(), "no openings in the roof");
+        test(
+            !input.roof_openings,
+            "the roof has openings".to_owned(),
+            "no openings in the roof",
+        );
         breaches
     }
 
     pub(super) fn hash_bits<H: Hasher>(&self, state: &mut H) {
-        for number in [self.gamma, self.heating_gamma, self.end, self.top, self.star_max, self.delay] {
+        for number in [
+            self.gamma,
+            self.heating_gamma,
+            self.end,
+            self.top,
+            self.star_max,
+            self.delay,
+        ] {
             number.to_bits().hash(state);
         }
     }
@@ -208,8 +236,7 @@ impl Parametric {
 
 /// (A.1) with t* in hours.
 fn heating(star: f64) -> f64 {
-    20.0 + 1325.0
-        * (1.0 - 0.324 * (-0.2 * star).exp() - 0.204 * (-1.7 * star).exp() - 0.472 * (-19.0 * star).exp())
+    20.0 + 1325.0 * (1.0 - 0.324 * (-0.2 * star).exp() - 0.204 * (-1.7 * star).exp() - 0.472 * (-19.0 * star).exp())
 }
 
 fn heating_slope(star: f64) -> f64 {

@@ -104,7 +104,11 @@ fn inverse_table() -> Vec<f64> {
             let (mut low, mut high) = (celsius, (celsius + 2.0 * SPACING / 400.0).min(HIGHEST + 5.0));
             while high - low > 1e-9 {
                 let middle = 0.5 * (low + high);
-                if enthalpy(middle) < wanted { low = middle } else { high = middle }
+                if enthalpy(middle) < wanted {
+                    low = middle
+                } else {
+                    high = middle
+                }
             }
             celsius = low;
             low
@@ -115,7 +119,11 @@ fn inverse_table() -> Vec<f64> {
 /// λa in W/mK (3.3a), (3.3b), 20 to 1200 °C.
 #[must_use]
 pub fn conductivity(celsius: f64) -> f64 {
-    if celsius < 800.0 { 54.0 - 3.33e-2 * celsius } else { 27.3 }
+    if celsius < 800.0 {
+        54.0 - 3.33e-2 * celsius
+    } else {
+        27.3
+    }
 }
 
 /// Relative thermal elongation (3.1a) to (3.1d), 20 to 1200 °C.

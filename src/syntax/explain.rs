@@ -13,7 +13,12 @@ pub fn explain(text: &str, error: &ScanError) -> SyntaxError {
     let at = (0..=at).rev().find(|at| text.is_char_boundary(*at)).unwrap_or(0);
     if matches!(error.kind(), Cause::RecursionLimitExceeded) {
         let message = format!("nesting deeper than {MAX_DEPTH} levels is not read");
-        return SyntaxError { span: one_char(text, at), kind: ErrorKind::Limit, message, repair: None };
+        return SyntaxError {
+            span: one_char(text, at),
+            kind: ErrorKind::Limit,
+            message,
+            repair: None,
+        };
     }
     find_slip(text, at).unwrap_or_else(|| {
         let message = match error.kind() {
@@ -31,11 +36,19 @@ pub fn explain(text: &str, error: &ScanError) -> SyntaxError {
 }
 
 fn not_yaml(span: Span, message: String, repair: Option<Repair>) -> SyntaxError {
-    SyntaxError { span, kind: ErrorKind::NotYaml, message, repair }
+    SyntaxError {
+        span,
+        kind: ErrorKind::NotYaml,
+        message,
+        repair,
+    }
 }
 
 fn one_char(text: &str, at: usize) -> Span {
-    let len = text.get(at..).and_then(|rest| rest.chars().next()).map_or(0, char::len_utf8);
+    let len = text
+        .get(at..)
+        .and_then(|rest| rest.chars().next())
+        .map_or(0, char::len_utf8);
     if len > 0 {
         return Span::new(at, at + len);
     }
@@ -56,7 +69,10 @@ impl<'a> Line<'a> {
     fn at(text: &'a str, offset: usize) -> Self {
         let start = text[..offset].rfind('\n').map_or(0, |at| at + 1);
         let end = text[offset..].find('\n').map_or(text.len(), |at| offset + at);
-        Line { start, text: text[start..end].trim_end_matches('\r') }
+        Line {
+            start,
+            text: text[start..end].trim_end_matches('\r'),
+        }
     }
 
     fn after(self, text: &'a str) -> Option<Self> {
@@ -106,8 +122,16 @@ fn tab(line: Line<'_>) -> Option<SyntaxError> {
     let from = line.text[..indent].find('\t')?;
     let to = from + line.text[from..indent].len();
     let span = line.span(from, to);
-    let repair = Repair { title: "indent with spaces".to_owned(), span, text: "  ".repeat(to - from) };
-    Some(not_yaml(span, "a tab indents this line; YAML indents with spaces".to_owned(), Some(repair)))
+    let repair = Repair {
+        title: "indent with spaces".to_owned(),
+        span,
+        text: "  ".repeat(to - from),
+    };
+    Some(not_yaml(
+        span,
+        "a tab indents this line; YAML indents with spaces".to_owned(),
+        Some(repair),
+    ))
 }
 
 /// Where a quote opens a value that nothing closes.
@@ -116,7 +140,11 @@ fn open_quote(text: &str) -> Option<SyntaxError> {
     let (at, quote) = scan.open_quote?;
     let line = Line::at(text, at);
     let span = Span::new(at, line.start + line.text.len());
-    Some(not_yaml(span, format!("the quote {quote} that opens here is never closed"), None))
+    Some(not_yaml(
+        span,
+        format!("the quote {quote} that opens here is never closed"),
+        None,
+    ))
 }
 
 fn open_bracket(text: &str) -> Option<SyntaxError> {
@@ -127,7 +155,11 @@ fn open_bracket(text: &str) -> Option<SyntaxError> {
     let content = strip_comment(line.text);
     let repair = (scan.brackets.len() == 1 && content.ends_with(|c| c != bracket)).then(|| {
         let end = line.start + content.trim_end().len();
-        Repair { title: format!("close it with `{closing}`"), span: Span::new(end, end), text: format!(" {closing}") }
+        Repair {
+            title: format!("close it with `{closing}`"),
+            span: Span::new(end, end),
+            text: format!(" {closing}"),
+        }
     });
     let message = format!("this `{bracket}` is never closed; a `{closing}` is missing");
     Some(not_yaml(Span::new(at, at + 1), message, repair))
@@ -137,7 +169,11 @@ fn stray_bracket(line: Line<'_>) -> Option<SyntaxError> {
     let scan = Scan::of(line.text);
     let (at, bracket) = scan.stray?;
     let span = line.span(at, at + 1);
-    Some(not_yaml(span, format!("this `{bracket}` closes nothing that is open"), None))
+    Some(not_yaml(
+        span,
+        format!("this `{bracket}` closes nothing that is open"),
+        None,
+    ))
 }
 
 fn second_colon(line: Line<'_>, at: usize) -> Option<SyntaxError> {
@@ -154,7 +190,11 @@ fn second_colon(line: Line<'_>, at: usize) -> Option<SyntaxError> {
     let from = content.len() - value.len();
     let span = line.span(from, content.len());
     let quoted = format!("\"{}\"", value.replace('\\', "\\\\").replace('"', "\\\""));
-    let repair = Repair { title: "put the value into quotes".to_owned(), span, text: quoted };
+    let repair = Repair {
+        title: "put the value into quotes".to_owned(),
+        span,
+        text: quoted,
+    };
     let message = "a second `: ` on this line; put a value that holds one into quotes".to_owned();
     Some(not_yaml(line.span(second, second + 1), message, Some(repair)))
 }
@@ -171,7 +211,11 @@ fn colon_without_space(line: Line<'_>) -> Option<SyntaxError> {
         return None;
     }
     let span = line.span(at, at + 1);
-    let repair = Repair { title: "write a space behind the colon".to_owned(), span, text: ": ".to_owned() };
+    let repair = Repair {
+        title: "write a space behind the colon".to_owned(),
+        span,
+        text: ": ".to_owned(),
+    };
     let message = format!("a space is missing behind the colon of `{key}`");
     Some(not_yaml(span, message, Some(repair)))
 }
@@ -226,8 +270,13 @@ fn indentation(text: &str, line: Line<'_>) -> Option<SyntaxError> {
     if line.text.trim().is_empty() || indent == above {
         return None;
     }
-    let span = if indent > 0 { line.span(0, indent) } else { line.span(0, line.text.len().min(1)) };
-    let message = format!("this line is indented by {indent}; the one above by {above}. Keys of one mapping stand in one column");
+    let span = if indent > 0 {
+        line.span(0, indent)
+    } else {
+        line.span(0, line.text.len().min(1))
+    };
+    let message =
+        format!("this line is indented by {indent}; the one above by {above}. Keys of one mapping stand in one column");
     let repair = Repair {
         title: format!("indent by {above}"),
         span: line.span(0, indent),
@@ -294,7 +343,10 @@ impl Scan {
                 }
                 b'#' if at == 0 || bytes[at - 1].is_ascii_whitespace() => {
                     scan.comment.get_or_insert(at);
-                    at = bytes[at..].iter().position(|b| *b == b'\n').map_or(bytes.len(), |end| at + end);
+                    at = bytes[at..]
+                        .iter()
+                        .position(|b| *b == b'\n')
+                        .map_or(bytes.len(), |end| at + end);
                     fresh = true;
                     continue;
                 }

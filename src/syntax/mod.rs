@@ -125,7 +125,10 @@ impl Node {
     #[must_use]
     pub fn get(&self, name: &str) -> Option<&Self> {
         match &self.value {
-            Value::Mapping(entries) => entries.iter().find(|entry| entry.key.is_scalar(name)).map(|entry| &entry.value),
+            Value::Mapping(entries) => entries
+                .iter()
+                .find(|entry| entry.key.is_scalar(name))
+                .map(|entry| &entry.value),
             _ => None,
         }
     }

@@ -46,7 +46,11 @@ struct Line<'a> {
 /// Splits a text.
 #[must_use]
 pub fn outline(text: &str) -> Outline {
-    let mut splitter = Splitter { outline: Outline::default(), column: 0, content_column: 0 };
+    let mut splitter = Splitter {
+        outline: Outline::default(),
+        column: 0,
+        content_column: 0,
+    };
     let bytes = text.as_bytes();
     let mut start = 0;
     while start < bytes.len() {
@@ -76,7 +80,12 @@ impl Splitter {
     fn line(&mut self, text: &str, start: usize, raw: &[u8]) {
         let indent = raw.iter().take_while(|b| **b == b' ').count();
         let content = trim_break(&raw[indent..]);
-        let line = Line { start, indent, content, tab: content.first() == Some(&b'\t') };
+        let line = Line {
+            start,
+            indent,
+            content,
+            tab: content.first() == Some(&b'\t'),
+        };
         // A lone CR is a line break too, which this splitter does not follow.
         self.outline.doubtful |= content.contains(&b'\r');
         if content.is_empty() || content[0] == b'#' {
@@ -113,7 +122,11 @@ impl Splitter {
             items: Vec::new(),
             list: bare && LISTS.contains(&key),
         });
-        self.column = if bare && (LISTS.contains(&key) || MAPPINGS.contains(&key)) { usize::MAX } else { 0 };
+        self.column = if bare && (LISTS.contains(&key) || MAPPINGS.contains(&key)) {
+            usize::MAX
+        } else {
+            0
+        };
     }
 
     fn inner(&mut self, line: &Line<'_>, dash: bool) {
@@ -173,7 +186,10 @@ fn is_dash(content: &[u8]) -> bool {
 
 /// Length of the plain key that a line begins with, if a colon follows it.
 fn key_end(content: &[u8]) -> Option<usize> {
-    if matches!(content[0], b'"' | b'\'' | b'?' | b'-' | b'[' | b'{' | b'&' | b'*' | b'!' | b'%' | b'|' | b'>' | b':') {
+    if matches!(
+        content[0],
+        b'"' | b'\'' | b'?' | b'-' | b'[' | b'{' | b'&' | b'*' | b'!' | b'%' | b'|' | b'>' | b':'
+    ) {
         return None;
     }
     let colon = content
@@ -204,7 +220,11 @@ mod tests {
     use super::*;
 
     fn items(text: &str) -> Vec<&str> {
-        outline(text).chunks.iter().flat_map(|c| c.items.iter().map(|s| s.slice(text))).collect()
+        outline(text)
+            .chunks
+            .iter()
+            .flat_map(|c| c.items.iter().map(|s| s.slice(text)))
+            .collect()
     }
 
     #[test]

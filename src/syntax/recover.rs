@@ -28,7 +28,11 @@ pub fn parse_item(text: &str, list: bool) -> ItemTree {
     if list {
         node = match node.map(|node| (node.span, node.value)) {
             Some((_, Value::Sequence(mut nodes))) if !nodes.is_empty() => Some(nodes.swap_remove(0)),
-            Some((span, value @ Value::Mapping(_))) if broken => Some(Node { span, value, through_alias: false }),
+            Some((span, value @ Value::Mapping(_))) if broken => Some(Node {
+                span,
+                value,
+                through_alias: false,
+            }),
             _ => None,
         };
         if node.is_none() && !broken {
@@ -64,15 +68,22 @@ fn rescue(text: &str, root: &mut Option<Node>, errors: &[SyntaxError], list: boo
     };
     let flow = text.trim_start().trim_start_matches(['-', ' ']).starts_with('{');
     let pieces = if flow { flow_pieces(text) } else { lines(text) };
-    let found: Vec<Entry> =
-        pieces.into_iter().filter(|piece| !overlaps(*piece, error.span)).filter_map(|piece| entry(text, piece)).collect();
+    let found: Vec<Entry> = pieces
+        .into_iter()
+        .filter(|piece| !overlaps(*piece, error.span))
+        .filter_map(|piece| entry(text, piece))
+        .collect();
     match mapping {
         Some(Value::Mapping(entries)) => add(entries, found),
         Some(value @ Value::Null) => *value = Value::Mapping(found),
         Some(_) => {}
         None if list && !found.is_empty() => {
             let span = Span::new(0, text.trim_end().len());
-            *root = Some(Node { span, value: Value::Mapping(found), through_alias: false });
+            *root = Some(Node {
+                span,
+                value: Value::Mapping(found),
+                through_alias: false,
+            });
         }
         None => {}
     }
@@ -82,7 +93,9 @@ fn add(entries: &mut Vec<Entry>, found: Vec<Entry>) {
     // A value that the parser gave to a key before it broke off may be the damage itself: the line's own reading wins.
     for new in found {
         let same = |entry: &Entry| entry.key.span.start == new.key.span.start;
-        let known = entries.iter().any(|entry| same(entry) || entry.key.value == new.key.value);
+        let known = entries
+            .iter()
+            .any(|entry| same(entry) || entry.key.value == new.key.value);
         if !known {
             entries.push(new);
         }
@@ -99,7 +112,9 @@ fn entry(text: &str, piece: Span) -> Option<Entry> {
     if !tree.errors.is_empty() {
         return None;
     }
-    let Value::Mapping(mut entries) = tree.root?.value else { return None };
+    let Value::Mapping(mut entries) = tree.root?.value else {
+        return None;
+    };
     if entries.len() != 1 {
         return None;
     }
@@ -158,8 +173,14 @@ fn flow_pieces(text: &str) -> Vec<Span> {
         let piece = span.slice(text);
         let lead = piece.len() - piece.trim_start().len();
         let tail = piece.len() - piece.trim_end().len();
-        Span { start: span.start + Span::new(0, lead).end, end: span.end - Span::new(0, tail).end.min(span.len()) }
+        Span {
+            start: span.start + Span::new(0, lead).end,
+            end: span.end - Span::new(0, tail).end.min(span.len()),
+        }
     };
-    pieces.into_iter().map(trim).filter(|span| span.start < span.end).collect()
+    pieces
+        .into_iter()
+        .map(trim)
+        .filter(|span| span.start < span.end)
+        .collect()
 }
-

@@ -16,7 +16,10 @@ pub fn parse(text: &str) -> Tree {
     options.flow_nesting_limit = MAX_DEPTH;
     options.block_nesting_limit = MAX_DEPTH;
     options.emit_unresolved_aliases = true;
-    let mut builder = Builder { text, ..Builder::default() };
+    let mut builder = Builder {
+        text,
+        ..Builder::default()
+    };
     let mut documents = 0;
     for event in Parser::new_from_str_with_options(text, options) {
         match event {
@@ -48,7 +51,8 @@ fn several_documents(text: &str, at: Span) -> SyntaxError {
     SyntaxError {
         span: Span { start: at.start, end },
         kind: ErrorKind::SeveralDocuments,
-        message: "a second document begins here; a design file is one document, and what follows is not read".to_owned(),
+        message: "a second document begins here; a design file is one document, and what follows is not read"
+            .to_owned(),
         repair: None,
     }
 }
@@ -96,11 +100,18 @@ impl Builder<'_> {
                 let value = if null {
                     Value::Null
                 } else {
-                    Value::Scalar(Scalar { text: text.into_owned(), style: style_of(style) })
+                    Value::Scalar(Scalar {
+                        text: text.into_owned(),
+                        style: style_of(style),
+                    })
                 };
                 // An empty value has its place right behind the colon, not at the next token.
                 let span = if span.is_empty() { self.behind_key(span) } else { span };
-                let node = Node { span, value, through_alias: false };
+                let node = Node {
+                    span,
+                    value,
+                    through_alias: false,
+                };
                 self.remember(anchor, &node);
                 self.place(node)
             }
@@ -118,23 +129,40 @@ impl Builder<'_> {
                     message: format!("the alias `*{name}` has no anchor `&{name}` before it"),
                     repair: None,
                 });
-                self.place(Node { span, value: Value::Null, through_alias: true })
+                self.place(Node {
+                    span,
+                    value: Value::Null,
+                    through_alias: true,
+                })
             }
             _ => true,
         }
     }
 
     fn limit(&mut self, span: Span, message: String) -> bool {
-        self.errors.push(SyntaxError { span, kind: ErrorKind::Limit, message, repair: None });
+        self.errors.push(SyntaxError {
+            span,
+            kind: ErrorKind::Limit,
+            message,
+            repair: None,
+        });
         false
     }
 
     fn behind_key(&self, span: Span) -> Span {
         match self.open.last().and_then(|open| open.key.as_ref()) {
             Some(key) => {
-                let after = self.text.get(key.span.end as usize..span.start.max(key.span.end) as usize).unwrap_or("");
-                let colon = after.find(':').map_or(key.span.end, |at| key.span.end + Span::new(0, at + 1).end);
-                Span { start: colon, end: colon }
+                let after = self
+                    .text
+                    .get(key.span.end as usize..span.start.max(key.span.end) as usize)
+                    .unwrap_or("");
+                let colon = after
+                    .find(':')
+                    .map_or(key.span.end, |at| key.span.end + Span::new(0, at + 1).end);
+                Span {
+                    start: colon,
+                    end: colon,
+                }
             }
             None => span,
         }
@@ -144,7 +172,12 @@ impl Builder<'_> {
         if self.open.len() >= MAX_DEPTH {
             return self.limit(span, format!("nesting deeper than {MAX_DEPTH} levels is not read"));
         }
-        self.open.push(Open { anchor, start: span.start, value, key: None });
+        self.open.push(Open {
+            anchor,
+            start: span.start,
+            value,
+            key: None,
+        });
         true
     }
 
@@ -200,21 +233,40 @@ impl Builder<'_> {
         while !self.open.is_empty() {
             self.end(end);
         }
-        Tree { root: self.root, errors: self.errors }
+        Tree {
+            root: self.root,
+            errors: self.errors,
+        }
     }
 }
 
 /// The node of a collection, from its first character to its last. A block collection ends with its last value, not
 /// with the blank lines and comments behind it.
 fn close(open: Open, end: Span, text: &str) -> (Node, usize) {
-    let closed = text.get(end.start as usize..end.end as usize).is_some_and(|t| t == "}" || t == "]");
+    let closed = text
+        .get(end.start as usize..end.end as usize)
+        .is_some_and(|t| t == "}" || t == "]");
     let last = match &open.value {
         Value::Sequence(nodes) => nodes.last().map(|node| node.span.end),
         Value::Mapping(entries) => entries.last().map(|entry| entry.value.span.end.max(entry.key.span.end)),
         _ => None,
     };
-    let stop = if closed { end.end } else { last.unwrap_or(open.start).max(open.start) };
-    (Node { span: Span { start: open.start, end: stop }, value: open.value, through_alias: false }, open.anchor)
+    let stop = if closed {
+        end.end
+    } else {
+        last.unwrap_or(open.start).max(open.start)
+    };
+    (
+        Node {
+            span: Span {
+                start: open.start,
+                end: stop,
+            },
+            value: open.value,
+            through_alias: false,
+        },
+        open.anchor,
+    )
 }
 
 /// An alias stands for the whole node: every part of it has the alias's place.
@@ -236,7 +288,10 @@ fn mark_alias(node: &mut Node, span: Span) {
 fn count(node: &Node) -> usize {
     1 + match &node.value {
         Value::Sequence(nodes) => nodes.iter().map(count).sum(),
-        Value::Mapping(entries) => entries.iter().map(|entry| count(&entry.key) + count(&entry.value)).sum(),
+        Value::Mapping(entries) => entries
+            .iter()
+            .map(|entry| count(&entry.key) + count(&entry.value))
+            .sum(),
         _ => 0,
     }
 }

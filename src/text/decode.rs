@@ -13,7 +13,11 @@ pub struct DecodeError {
 
 impl fmt::Display for DecodeError {
     fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
-        write!(f, "byte {} is not {}; save the file as UTF-8", self.offset, self.encoding)
+        write!(
+            f,
+            "byte {} is not {}; save the file as UTF-8",
+            self.offset, self.encoding
+        )
     }
 }
 
@@ -31,13 +35,15 @@ pub fn decode(bytes: Vec<u8>) -> Result<String, DecodeError> {
         [0xFE, 0xFF, rest @ ..] => utf16(rest, u16::from_be_bytes, "UTF-16 (big endian)"),
         // Without a mark, a first character below U+0100 tells the encoding by its zero bytes.
         [0, first, ..] if *first != 0 => utf16(&bytes, u16::from_be_bytes, "UTF-16 (big endian)"),
-        [first, 0, ..] if *first != 0 && bytes.len() % 2 == 0 && bytes.get(3) == Some(&0) => {
+        [first, 0, ..] if *first != 0 && bytes.len().is_multiple_of(2) && bytes.get(3) == Some(&0) => {
             utf16(&bytes, u16::from_le_bytes, "UTF-16 (little endian)")
         }
         _ => {
             let mark = bytes.starts_with(&[0xEF, 0xBB, 0xBF]);
-            let mut text = String::from_utf8(bytes)
-                .map_err(|error| DecodeError { encoding: "UTF-8", offset: error.utf8_error().valid_up_to() })?;
+            let mut text = String::from_utf8(bytes).map_err(|error| DecodeError {
+                encoding: "UTF-8",
+                offset: error.utf8_error().valid_up_to(),
+            })?;
             if mark {
                 text.drain(..3);
             }
@@ -50,18 +56,38 @@ fn utf16(bytes: &[u8], unit: fn([u8; 2]) -> u16, encoding: &'static str) -> Resu
     let pairs = bytes.as_chunks::<2>();
     let mut text = String::with_capacity(bytes.len());
     for (at, decoded) in char::decode_utf16(pairs.0.iter().map(|pair| unit(*pair))).enumerate() {
-        text.push(decoded.map_err(|_| DecodeError { encoding, offset: 2 * at })?);
+        text.push(decoded.map_err(|_| DecodeError {
+            encoding,
+            offset: 2 * at,
+        })?);
     }
-    if pairs.1.is_empty() { Ok(text) } else { Err(DecodeError { encoding, offset: bytes.len() - 1 }) }
+    if pairs.1.is_empty() {
+        Ok(text)
+    } else {
+        Err(DecodeError {
+            encoding,
+            offset: bytes.len() - 1,
+        })
+    }
 }
 
 fn utf32(bytes: &[u8], unit: fn([u8; 4]) -> u32, encoding: &'static str) -> Result<String, DecodeError> {
     let words = bytes.as_chunks::<4>();
     let mut text = String::with_capacity(bytes.len());
     for (at, word) in words.0.iter().enumerate() {
-        text.push(char::from_u32(unit(*word)).ok_or(DecodeError { encoding, offset: 4 * at })?);
+        text.push(char::from_u32(unit(*word)).ok_or(DecodeError {
+            encoding,
+            offset: 4 * at,
+        })?);
     }
-    if words.1.is_empty() { Ok(text) } else { Err(DecodeError { encoding, offset: bytes.len() - 1 }) }
+    if words.1.is_empty() {
+        Ok(text)
+    } else {
+        Err(DecodeError {
+            encoding,
+            offset: bytes.len() - 1,
+        })
+    }
 }
 
 #[cfg(test)]
@@ -73,9 +99,15 @@ mod tests {
         let text = "mark: B1 # déjà 梁";
         let utf16 = |mark: bool, bytes: fn(u16) -> [u8; 2]| {
             let mark = mark.then_some(0xFEFF_u16);
-            mark.into_iter().chain(text.encode_utf16()).flat_map(bytes).collect::<Vec<u8>>()
+            mark.into_iter()
+                .chain(text.encode_utf16())
+                .flat_map(bytes)
+                .collect::<Vec<u8>>()
         };
-        let utf32: Vec<u8> = std::iter::once('\u{FEFF}').chain(text.chars()).flat_map(|c| (c as u32).to_be_bytes()).collect();
+        let utf32: Vec<u8> = std::iter::once('\u{FEFF}')
+            .chain(text.chars())
+            .flat_map(|c| (c as u32).to_be_bytes())
+            .collect();
         let cases = [
             text.as_bytes().to_vec(),
             [b"\xEF\xBB\xBF", text.as_bytes()].concat(),

@@ -51,7 +51,10 @@ impl LineIndex {
     /// The offset at which a line begins; the end of the text for lines past the last.
     #[must_use]
     pub fn start(&self, line: u32, text: &str) -> u32 {
-        self.starts.get(line as usize).copied().unwrap_or_else(|| u32::try_from(text.len()).unwrap_or(u32::MAX))
+        self.starts
+            .get(line as usize)
+            .copied()
+            .unwrap_or_else(|| u32::try_from(text.len()).unwrap_or(u32::MAX))
     }
 
     /// The position of an offset. An offset inside a character counts as its start.
@@ -68,7 +71,10 @@ impl LineIndex {
             Encoding::Utf16 => before.encode_utf16().count(),
             Encoding::Utf32 => before.chars().count(),
         };
-        Position { line, column: u32::try_from(column).unwrap_or(u32::MAX) }
+        Position {
+            line,
+            column: u32::try_from(column).unwrap_or(u32::MAX),
+        }
     }
 
     /// The offset of a position. A column past the end of its line means the end of the line, before its break.
@@ -76,7 +82,10 @@ impl LineIndex {
     pub fn offset(&self, text: &str, position: Position, encoding: Encoding) -> u32 {
         let start = self.start(position.line, text);
         let end = self.start(position.line.saturating_add(1), text);
-        let line = text.get(start as usize..end as usize).unwrap_or("").trim_end_matches(['\r', '\n']);
+        let line = text
+            .get(start as usize..end as usize)
+            .unwrap_or("")
+            .trim_end_matches(['\r', '\n']);
         let mut units = 0;
         for (at, c) in line.char_indices() {
             let size = match encoding {
@@ -109,6 +118,9 @@ mod tests {
         }
         assert_eq!(index.line(u32::try_from(text.find("end").unwrap()).unwrap()), 2);
         assert_eq!(index.offset(text, Position { line: 0, column: 99 }, Encoding::Utf16), 1);
-        assert_eq!(index.offset(text, Position { line: 9, column: 0 }, Encoding::Utf16) as usize, text.len());
+        assert_eq!(
+            index.offset(text, Position { line: 9, column: 0 }, Encoding::Utf16) as usize,
+            text.len()
+        );
     }
 }

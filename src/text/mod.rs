@@ -22,13 +22,19 @@ impl Span {
     #[must_use]
     pub fn new(start: usize, end: usize) -> Self {
         let held = |offset: usize| u32::try_from(offset).unwrap_or(u32::MAX);
-        Self { start: held(start), end: held(end) }
+        Self {
+            start: held(start),
+            end: held(end),
+        }
     }
 
     /// The span moved on by an offset.
     #[must_use]
     pub const fn shift(self, by: u32) -> Self {
-        Self { start: self.start.saturating_add(by), end: self.end.saturating_add(by) }
+        Self {
+            start: self.start.saturating_add(by),
+            end: self.end.saturating_add(by),
+        }
     }
 
     /// Length in bytes.
@@ -58,7 +64,10 @@ impl Span {
     /// The least span that holds both.
     #[must_use]
     pub fn join(self, other: Self) -> Self {
-        Self { start: self.start.min(other.start), end: self.end.max(other.end) }
+        Self {
+            start: self.start.min(other.start),
+            end: self.end.max(other.end),
+        }
     }
 }
 

@@ -6,9 +6,11 @@
 
 mod parse;
 mod show;
+mod table;
 
-pub use parse::{Dimension, QuantityError, Unit, parse_duration, parse_quantity, units_of};
+pub use parse::{QuantityError, parse_duration, parse_quantity};
 pub use show::{DisplayUnits, significant};
+pub use table::{Dimension, Unit, units_of};
 
 /// Declares a quantity: a newtype over `f64` with one base unit.
 macro_rules! quantity {

@@ -2,6 +2,7 @@
 //! tolerance and the status of the figures: `published` (read in the source or a public copy), `computed` (worked out
 //! independently from the stated formula) or `memory` (of the source, not read again).
 
+mod heating;
 mod support;
 
 mod section_australian_tables;

@@ -43,14 +43,24 @@ pub fn fires(reader: &mut Reader, node: &Node, key: &'static Key) -> Vec<NamedFi
             reader.slip(SlipKind::WrongKind, &entry.key, text);
             continue;
         }
-        let name = Spanned { value: name.text.clone(), span: entry.key.span };
+        let name = Spanned {
+            value: name.text.clone(),
+            span: entry.key.span,
+        };
         let fire = fire(reader, &entry.value, &name.value);
         fires.push(NamedFire { name, fire });
     }
     fires
 }
 
-const PARAMETRIC: &[&str] = &["opening factor", "fire load", "thermal inertia", "floor area", "enclosure area", "growth"];
+const PARAMETRIC: &[&str] = &[
+    "opening factor",
+    "fire load",
+    "thermal inertia",
+    "floor area",
+    "enclosure area",
+    "growth",
+];
 
 fn fire(reader: &mut Reader, node: &Node, name: &str) -> Option<Fire> {
     let owner = format!("the fire `{name}`");
@@ -62,7 +72,12 @@ fn fire(reader: &mut Reader, node: &Node, name: &str) -> Option<Fire> {
         let value = &entry.value;
         match key.name {
             "kind" => kind = reader.choice(value, key).value().copied(),
-            "growth" => growth = reader.choice(value, key).value().map(|at| [Growth::Slow, Growth::Medium, Growth::Fast][*at]),
+            "growth" => {
+                growth = reader
+                    .choice(value, key)
+                    .value()
+                    .map(|at| [Growth::Slow, Growth::Medium, Growth::Fast][*at])
+            }
             "roof openings" => roof_openings = reader.yes_no(value, key).value().copied().unwrap_or(false),
             "points" => {
                 for point in reader.list(value) {
@@ -108,7 +123,11 @@ fn fire(reader: &mut Reader, node: &Node, name: &str) -> Option<Fire> {
     match built {
         Ok(fire) => Some(fire),
         Err(error) => {
-            reader.slips.push(Slip::new(SlipKind::OutOfBounds, node.span, format!("{owner} can't burn so: {error}")));
+            reader.slips.push(Slip::new(
+                SlipKind::OutOfBounds,
+                node.span,
+                format!("{owner} can't burn so: {error}"),
+            ));
             None
         }
     }

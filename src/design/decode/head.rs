@@ -16,7 +16,10 @@ use crate::units::Temperature;
 pub fn entry(reader: &mut Reader, head: &mut Head, key: &'static Key, entry: &Entry) {
     let node = &entry.value;
     if table::HEAD_ONLY.contains(&key.name) {
-        head.head_only.push(Spanned { value: key.name, span: entry.key.span });
+        head.head_only.push(Spanned {
+            value: key.name,
+            span: entry.key.span,
+        });
     }
     match key.name {
         "steelwork" => {
@@ -70,7 +73,11 @@ fn basis(reader: &mut Reader, entry: &Entry) -> Basis {
             "rates" => {
                 reader.entries(node, table::RATES, "`rates`", |reader, key, entry| {
                     let rate = reader.quantity(&entry.value, key).value().copied();
-                    if key.name == "steel" { basis.steel_rate = rate } else { basis.carbon_rate = rate }
+                    if key.name == "steel" {
+                        basis.steel_rate = rate
+                    } else {
+                        basis.carbon_rate = rate
+                    }
                 });
             }
             "default critical temperature" => {
@@ -94,7 +101,9 @@ fn basis(reader: &mut Reader, entry: &Entry) -> Basis {
 fn factors(reader: &mut Reader, entry: &Entry) -> Factors {
     let mut factors = Factors::default();
     reader.entries(&entry.value, table::FACTORS, "`factors`", |reader, key, entry| {
-        let Some(value) = reader.quantity(&entry.value, key).value().copied() else { return };
+        let Some(value) = reader.quantity(&entry.value, key).value().copied() else {
+            return;
+        };
         match key.name {
             "gamma M fi" => factors.gamma_m_fi = value,
             "gamma M0" => factors.gamma_m0 = value,
@@ -108,9 +117,14 @@ fn factors(reader: &mut Reader, entry: &Entry) -> Factors {
 
 fn method(reader: &mut Reader, entry: &Entry, key: &'static Key) -> Given<Method> {
     let node = &entry.value;
-    let Some(scalar) = reader.scalar(node, key) else { return Given::unreadable(node.span) };
+    let Some(scalar) = reader.scalar(node, key) else {
+        return Given::unreadable(node.span);
+    };
     const METHODS: [Method; 3] = [Method::En1993, Method::Asce29, Method::As4100];
-    if let Some(method) = METHODS.into_iter().find(|method| same_word(method.edition(), &scalar.text)) {
+    if let Some(method) = METHODS
+        .into_iter()
+        .find(|method| same_word(method.edition(), &scalar.text))
+    {
         return Given::new(method, node.span);
     }
     let editions = table::METHODS.join(", ");
@@ -118,9 +132,11 @@ fn method(reader: &mut Reader, entry: &Entry, key: &'static Key) -> Given<Method
         "the method `{}` is not supported; supported are {editions}. No member is verified until one of them is named",
         scalar.text
     );
-    let mut slip = Slip::new(SlipKind::MethodNotSupported, node.span, text)
-        .at_key(key.name);
-    if let (Some(near), false) = (nearest(&scalar.text, table::METHODS.iter().copied()), node.through_alias) {
+    let mut slip = Slip::new(SlipKind::MethodNotSupported, node.span, text).at_key(key.name);
+    if let (Some(near), false) = (
+        nearest(&scalar.text, table::METHODS.iter().copied()),
+        node.through_alias,
+    ) {
         slip = slip.repair(format!("write `{near}`"), false, node.span, near);
     }
     reader.slips.push(slip);

@@ -11,11 +11,23 @@ use crate::units::{Force, Length, Moment};
 
 /// What `loading` may hold beside each other; a member states its load in one of these ways.
 const UTILISATION: &[&str] = &["utilisation"];
-const AMBIENT: &[&str] = &["ambient utilisation", "reduction", "permanent", "variable", "combination factor"];
+const AMBIENT: &[&str] = &[
+    "ambient utilisation",
+    "reduction",
+    "permanent",
+    "variable",
+    "combination factor",
+];
 const RATIO: &[&str] = &["load ratio"];
 
 /// Keys that refine a stated utilisation: the slenderness that the utilisation alone does not show.
-const LENGTHS: &[&str] = &["buckling length", "buckling length minor", "lateral length", "moment shape", "support"];
+const LENGTHS: &[&str] = &[
+    "buckling length",
+    "buckling length minor",
+    "lateral length",
+    "moment shape",
+    "support",
+];
 
 /// Decodes the mapping of `loading`.
 pub fn loading(reader: &mut Reader, node: &Node) -> Given<Box<Loading>> {
@@ -30,7 +42,12 @@ pub fn loading(reader: &mut Reader, node: &Node) -> Given<Box<Loading>> {
         if !LENGTHS.contains(&key.name) && !ways.iter().any(|(w, _)| *w == way) {
             ways.push((way, key.name));
         }
-        if let Some(slot) = UTILISATION.iter().chain(AMBIENT).chain(RATIO).position(|name| *name == key.name) {
+        if let Some(slot) = UTILISATION
+            .iter()
+            .chain(AMBIENT)
+            .chain(RATIO)
+            .position(|name| *name == key.name)
+        {
             numbers[slot] = reader.quantity(value, key).value().copied();
             return;
         }
@@ -41,7 +58,10 @@ pub fn loading(reader: &mut Reader, node: &Node) -> Given<Box<Loading>> {
     }
     if ways.len() > 1 {
         let names: Vec<String> = ways.iter().map(|(_, name)| format!("`{name}`")).collect();
-        let text = format!("`loading` states the load in more than one way ({}); keep one of them", names.join(" and "));
+        let text = format!(
+            "`loading` states the load in more than one way ({}); keep one of them",
+            names.join(" and ")
+        );
         reader.slip(SlipKind::WrongKind, node, text);
     }
     let [utilisation, ambient, reduction, permanent, variable, combination, ratio] = numbers;
@@ -50,9 +70,11 @@ pub fn loading(reader: &mut Reader, node: &Node) -> Given<Box<Loading>> {
         Some("ambient") => {
             let reduction = match (reduction, permanent, variable, combination) {
                 (Some(factor), ..) => Some(Reduction::Factor(factor)),
-                (None, Some(permanent), Some(variable), Some(combination)) => {
-                    Some(Reduction::Actions { permanent, variable, combination })
-                }
+                (None, Some(permanent), Some(variable), Some(combination)) => Some(Reduction::Actions {
+                    permanent,
+                    variable,
+                    combination,
+                }),
                 _ => None,
             };
             if ambient.is_none() && reader.slips.len() == before {
@@ -61,7 +83,9 @@ pub fn loading(reader: &mut Reader, node: &Node) -> Given<Box<Loading>> {
                 let text = "`ambient utilisation` needs `reduction` (ηfi), or `permanent`, `variable` and `combination factor`";
                 reader.slip(SlipKind::MissingKey, node, text);
             }
-            ambient.zip(reduction).map(|(utilisation, reduction)| Load::Ambient { utilisation, reduction })
+            ambient
+                .zip(reduction)
+                .map(|(utilisation, reduction)| Load::Ambient { utilisation, reduction })
         }
         Some("ratio") => ratio.map(Load::Ratio),
         Some(_) => Some(Load::Effects(effects)),
@@ -78,7 +102,6 @@ pub fn loading(reader: &mut Reader, node: &Node) -> Given<Box<Loading>> {
         Some(load) if reader.slips.len() == before => Given::new(Box::new(Loading { load, restraint }), node.span),
         _ => Given::unreadable(node.span),
     }
-
 }
 
 fn way_of(name: &str) -> &'static str {
@@ -105,7 +128,9 @@ fn effect(reader: &mut Reader, effects: &mut Effects, restraint: &mut Restraint,
         }
         _ => {}
     }
-    let Some(number) = reader.quantity(node, key).value().copied() else { return };
+    let Some(number) = reader.quantity(node, key).value().copied() else {
+        return;
+    };
     match key.name {
         "axial" => effects.axial = Some(Force::from_kn(number)),
         "bending" => effects.bending = Some(Moment::from_knm(number)),

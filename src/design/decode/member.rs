@@ -5,8 +5,8 @@ use crate::design::decode::protection;
 use crate::design::decode::reader::{Reader, same_word};
 use crate::design::decode::section;
 use crate::design::given::Given;
-use crate::design::keys::member as table;
 use crate::design::keys::Key;
+use crate::design::keys::member as table;
 use crate::design::model::member::{
     Agreed, Connection, Departure, Environment, Extent, Location, Member, MemberKeys, Openings, Period, Role, Shield,
     StatedTemperature, Steel, Surface,
@@ -40,17 +40,30 @@ impl Owner {
 
 /// Decodes an item of `members`.
 pub fn member(reader: &mut Reader, node: &Node, broken: bool) -> Member {
-    let mut member = Member { broken, extent: Extent(node.span), ..Member::default() };
+    let mut member = Member {
+        broken,
+        extent: Extent(node.span),
+        ..Member::default()
+    };
     if matches!(node.value, Value::Null) {
-        reader.slip(SlipKind::WrongKind, node, "an empty entry: a member is a mapping that begins with `mark`");
+        reader.slip(
+            SlipKind::WrongKind,
+            node,
+            "an empty entry: a member is a mapping that begins with `mark`",
+        );
         return member;
     }
     let mut keys = MemberKeys::default();
-    let is_mapping = reader.entries(node, table::MEMBER, Owner::Member.words(), |reader, key, entry| match key.name {
-        "mark" => member.mark = reader.text(&entry.value, key),
-        "departures" => member.departures = departures(reader, &entry.value, key),
-        _ => member_key(reader, &mut keys, key, &entry.value, Owner::Member),
-    });
+    let is_mapping = reader.entries(
+        node,
+        table::MEMBER,
+        Owner::Member.words(),
+        |reader, key, entry| match key.name {
+            "mark" => member.mark = reader.text(&entry.value, key),
+            "departures" => member.departures = departures(reader, &entry.value, key),
+            _ => member_key(reader, &mut keys, key, &entry.value, Owner::Member),
+        },
+    );
     member.keys = keys;
     if is_mapping && member.mark.is_absent() && !broken {
         reader.missing(node.span, "mark", "a member");
@@ -64,15 +77,25 @@ pub fn shared_keys(reader: &mut Reader, node: &Node, owner: Owner) -> MemberKeys
     if matches!(node.value, Value::Null) {
         return keys;
     }
-    reader.entries(node, table::MEMBER, owner.words(), |reader, key, entry| match key.name {
-        "mark" | "departures" => {
-            let text = format!("`{}` belongs to a single member; {} can't carry it", key.name, owner.words());
-            reader.slip(SlipKind::UnknownKey, &entry.key, text);
+    reader.entries(node, table::MEMBER, owner.words(), |reader, key, entry| {
+        match key.name {
+            "mark" | "departures" => {
+                let text = format!(
+                    "`{}` belongs to a single member; {} can't carry it",
+                    key.name,
+                    owner.words()
+                );
+                reader.slip(SlipKind::UnknownKey, &entry.key, text);
+            }
+            "group" if owner == Owner::Group => {
+                reader.slip(
+                    SlipKind::UnknownKey,
+                    &entry.key,
+                    "groups don't nest: a group can't name another",
+                );
+            }
+            _ => member_key(reader, &mut keys, key, &entry.value, owner),
         }
-        "group" if owner == Owner::Group => {
-            reader.slip(SlipKind::UnknownKey, &entry.key, "groups don't nest: a group can't name another");
-        }
-        _ => member_key(reader, &mut keys, key, &entry.value, owner),
     });
     keys
 }
@@ -104,7 +127,11 @@ fn member_key(reader: &mut Reader, keys: &mut MemberKeys, key: &'static Key, nod
         "steadies" => keys.steadies = reader.names(node, key),
         "connection" => keys.connection = connection(reader, node),
         "restrained" => keys.restrained = reader.yes_no(node, key),
-        other => reader.slip(SlipKind::UnknownKey, node, format!("{} can't carry `{other}`", owner.words())),
+        other => reader.slip(
+            SlipKind::UnknownKey,
+            node,
+            format!("{} can't carry `{other}`", owner.words()),
+        ),
     }
 }
 
@@ -125,17 +152,30 @@ fn location(reader: &mut Reader, node: &Node) -> Given<Box<Location>> {
             _ => location.phase = text,
         }
     });
-    if read { Given::new(Box::new(location), node.span) } else { Given::unreadable(node.span) }
+    if read {
+        Given::new(Box::new(location), node.span)
+    } else {
+        Given::unreadable(node.span)
+    }
 }
 
 fn openings(reader: &mut Reader, node: &Node) -> Given<Box<Openings>> {
-    let mut openings = Openings { shape: "", width: None, height: None, spacing: None, web_below: None };
+    let mut openings = Openings {
+        shape: "",
+        width: None,
+        height: None,
+        spacing: None,
+        web_below: None,
+    };
     let before = reader.slips.len();
     let read = reader.entries(node, table::OPENINGS, "`openings`", |reader, key, entry| {
         let node = &entry.value;
         match key.name {
             "shape" => {
-                openings.shape = reader.choice(node, key).value().map_or("", |at| key.kind.choices()[*at]);
+                openings.shape = reader
+                    .choice(node, key)
+                    .value()
+                    .map_or("", |at| key.kind.choices()[*at]);
             }
             "diameter" | "width" => openings.width = length(reader, node, key),
             "height" => openings.height = length(reader, node, key),
@@ -161,7 +201,11 @@ fn taper(reader: &mut Reader, node: &Node) -> Given<Vec<Length>> {
             depths.extend(length(reader, node, key));
         }
     });
-    if read && reader.slips.len() == before { Given::new(depths, node.span) } else { Given::unreadable(node.span) }
+    if read && reader.slips.len() == before {
+        Given::new(depths, node.span)
+    } else {
+        Given::unreadable(node.span)
+    }
 }
 
 fn length(reader: &mut Reader, node: &Node, key: &'static Key) -> Option<Length> {
@@ -180,12 +224,16 @@ fn steel(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Steel> {
         }
         return steel;
     }
-    reader.word(node, key, table::GRADES, SlipKind::UnknownSteel).map(|at| Steel::Grade(table::GRADES[at]))
+    reader
+        .word(node, key, table::GRADES, SlipKind::UnknownSteel)
+        .map(|at| Steel::Grade(table::GRADES[at]))
 }
 
 fn surface(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Surface> {
     if !matches!(node.value, Value::Mapping(_)) {
-        return reader.choice(node, key).map(|at| if at == 0 { Surface::Plain } else { Surface::Galvanised });
+        return reader
+            .choice(node, key)
+            .map(|at| if at == 0 { Surface::Plain } else { Surface::Galvanised });
     }
     let mut surface = Given::unreadable(node.span);
     let whole = node.span;
@@ -245,16 +293,20 @@ fn exposure(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Exposu
 
 fn shield(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Shield> {
     if !matches!(node.value, Value::Mapping(_)) {
-        return reader.choice(node, key).map(|at| [Shield::Slab, Shield::Wall, Shield::None][at]);
+        return reader
+            .choice(node, key)
+            .map(|at| [Shield::Slab, Shield::Wall, Shield::None][at]);
     }
     let before = reader.slips.len();
     let (mut concrete, mut contact, mut voids_filled, mut re_entrant) = (None, None, None, None);
     if reader.entries(node, table::SHIELD, "`shielded by`", |reader, _, entry| {
-        reader.entries(&entry.value, table::DECK, "`deck`", |reader, key, entry| match key.name {
-            "concrete" => concrete = reader.yes_no(&entry.value, key).value().copied(),
-            "contact" => contact = reader.quantity(&entry.value, key).value().copied(),
-            "voids filled" => voids_filled = reader.yes_no(&entry.value, key).value().copied(),
-            _ => re_entrant = reader.choice(&entry.value, key).value().map(|at| *at == 1),
+        reader.entries(&entry.value, table::DECK, "`deck`", |reader, key, entry| {
+            match key.name {
+                "concrete" => concrete = reader.yes_no(&entry.value, key).value().copied(),
+                "contact" => contact = reader.quantity(&entry.value, key).value().copied(),
+                "voids filled" => voids_filled = reader.yes_no(&entry.value, key).value().copied(),
+                _ => re_entrant = reader.choice(&entry.value, key).value().map(|at| *at == 1),
+            }
         });
     }) {
         reader.wanted(node, table::SHIELD, "`shielded by`");
@@ -262,7 +314,15 @@ fn shield(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Shield> 
     if reader.slips.len() > before {
         return Given::unreadable(node.span);
     }
-    Given::new(Shield::Deck { concrete, contact, voids_filled, re_entrant }, node.span)
+    Given::new(
+        Shield::Deck {
+            concrete,
+            contact,
+            voids_filled,
+            re_entrant,
+        },
+        node.span,
+    )
 }
 
 fn period(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Period> {
@@ -280,24 +340,44 @@ fn period(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Period> 
         return Given::unreadable(node.span);
     }
     reader.wanted(node, table::PERIOD, "`period`");
-    if none { Given::new(Period::None { because }, node.span) } else { Given::unreadable(node.span) }
+    if none {
+        Given::new(Period::None { because }, node.span)
+    } else {
+        Given::unreadable(node.span)
+    }
 }
 
 fn critical(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<StatedTemperature> {
-    let stated = |celsius: f64| StatedTemperature { value: Temperature::from_celsius(celsius), by: None, preliminary: None };
+    let stated = |celsius: f64| StatedTemperature {
+        value: Temperature::from_celsius(celsius),
+        by: None,
+        preliminary: None,
+    };
     if !matches!(node.value, Value::Mapping(_)) {
         return reader.quantity(node, key).map(stated);
     }
     let (mut value, mut by, mut preliminary) = (None, None, None);
-    if reader.entries(node, table::CRITICAL, "`critical temperature`", |reader, key, entry| match key.name {
-        "value" => value = reader.quantity(&entry.value, key).value().copied(),
-        "by" => by = reader.text(&entry.value, key).value().cloned(),
-        _ => preliminary = reader.choice(&entry.value, key).value().map(|at| *at == 0),
-    }) {
+    if reader.entries(
+        node,
+        table::CRITICAL,
+        "`critical temperature`",
+        |reader, key, entry| match key.name {
+            "value" => value = reader.quantity(&entry.value, key).value().copied(),
+            "by" => by = reader.text(&entry.value, key).value().cloned(),
+            _ => preliminary = reader.choice(&entry.value, key).value().map(|at| *at == 0),
+        },
+    ) {
         reader.wanted(node, table::CRITICAL, "`critical temperature`");
     }
     match value {
-        Some(celsius) => Given::new(StatedTemperature { by, preliminary, ..stated(celsius) }, node.span),
+        Some(celsius) => Given::new(
+            StatedTemperature {
+                by,
+                preliminary,
+                ..stated(celsius)
+            },
+            node.span,
+        ),
         None => Given::unreadable(node.span),
     }
 }
@@ -305,11 +385,20 @@ fn critical(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<Stated
 fn connection(reader: &mut Reader, node: &Node) -> Given<Connection> {
     let mut connection = Connection::default();
     let before = reader.slips.len();
-    let read = reader.entries(node, table::CONNECTION, "`connection`", |reader, key, entry| match key.name {
-        "utilisation" => connection.utilisation = reader.quantity(&entry.value, key).value().copied(),
-        _ => connection.same_protection = reader.yes_no(&entry.value, key).value().copied(),
-    });
-    if read && reader.slips.len() == before { Given::new(connection, node.span) } else { Given::unreadable(node.span) }
+    let read = reader.entries(
+        node,
+        table::CONNECTION,
+        "`connection`",
+        |reader, key, entry| match key.name {
+            "utilisation" => connection.utilisation = reader.quantity(&entry.value, key).value().copied(),
+            _ => connection.same_protection = reader.yes_no(&entry.value, key).value().copied(),
+        },
+    );
+    if read && reader.slips.len() == before {
+        Given::new(connection, node.span)
+    } else {
+        Given::unreadable(node.span)
+    }
 }
 
 fn departures(reader: &mut Reader, node: &Node, key: &'static Key) -> Vec<Departure> {
@@ -326,21 +415,30 @@ fn departure(reader: &mut Reader, node: &Node) -> Option<Departure> {
     let mut from = None;
     let (mut because, mut by, mut until) = (Given::Absent, Given::Absent, Given::Absent);
     let mut at = Agreed::default();
-    let read = reader.entries(node, table::DEPARTURE, "a departure", |reader, key, entry| match key.name {
-        "from" => {
-            if let Given::Value(Spanned { value, span }) = reader.text(&entry.value, key) {
-                from = Some(Spanned { value, span });
+    let read = reader.entries(node, table::DEPARTURE, "a departure", |reader, key, entry| {
+        match key.name {
+            "from" => {
+                if let Given::Value(Spanned { value, span }) = reader.text(&entry.value, key) {
+                    from = Some(Spanned { value, span });
+                }
             }
+            "because" => because = reader.text(&entry.value, key),
+            "by" => by = reader.text(&entry.value, key),
+            "until" => until = reader.date(&entry.value, key),
+            _ => at = agreed(reader, &entry.value),
         }
-        "because" => because = reader.text(&entry.value, key),
-        "by" => by = reader.text(&entry.value, key),
-        "until" => until = reader.date(&entry.value, key),
-        _ => at = agreed(reader, &entry.value),
     });
     if read {
         reader.wanted(node, table::DEPARTURE, "a departure");
     }
-    Some(Departure { from: from?, because, by, until, at, extent: Extent(node.span) })
+    Some(Departure {
+        from: from?,
+        because,
+        by,
+        until,
+        at,
+        extent: Extent(node.span),
+    })
 }
 
 fn agreed(reader: &mut Reader, node: &Node) -> Agreed {
@@ -349,7 +447,10 @@ fn agreed(reader: &mut Reader, node: &Node) -> Agreed {
         "needs" => agreed.needs = length(reader, &entry.value, key),
         "section factor" => agreed.section_factor = reader.quantity(&entry.value, key).value().copied(),
         "temperature" => {
-            agreed.temperature = reader.quantity(&entry.value, key).value().map(|c| Temperature::from_celsius(*c));
+            agreed.temperature = reader
+                .quantity(&entry.value, key)
+                .value()
+                .map(|c| Temperature::from_celsius(*c));
         }
         _ => agreed.resistance = reader.period(&entry.value, key).value().map(|min| Time::from_min(*min)),
     });
@@ -360,4 +461,3 @@ fn agreed(reader: &mut Reader, node: &Node) -> Agreed {
 pub fn is_none_word(node: &Node) -> bool {
     matches!(&node.value, Value::Scalar(scalar) if same_word("none", &scalar.text))
 }
-

@@ -2,7 +2,7 @@
 
 pub mod fire;
 pub mod head;
-
+pub mod library;
 pub mod loading;
 pub mod member;
 pub mod protection;

@@ -18,7 +18,10 @@ pub fn protection(reader: &mut Reader, node: &Node, key: &'static Key) -> Given<
     }
     match &node.value {
         Value::Scalar(name) => {
-            protection.product = Some(Spanned { value: name.text.clone(), span: node.span });
+            protection.product = Some(Spanned {
+                value: name.text.clone(),
+                span: node.span,
+            });
             return Given::new(Box::new(protection), node.span);
         }
         Value::Mapping(_) => {}

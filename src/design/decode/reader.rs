@@ -28,13 +28,21 @@ impl Reader {
         mut each: impl FnMut(&mut Self, &'static Key, &Entry),
     ) -> bool {
         let Value::Mapping(entries) = &node.value else {
-            self.slip(SlipKind::WrongKind, node, format!("{owner} is a mapping of keys; {}", described(node)));
+            self.slip(
+                SlipKind::WrongKind,
+                node,
+                format!("{owner} is a mapping of keys; {}", described(node)),
+            );
             return false;
         };
         let mut seen: u64 = 0;
         for (at, entry) in entries.iter().enumerate() {
             let Value::Scalar(name) = &entry.key.value else {
-                self.slip(SlipKind::WrongKind, &entry.key, format!("a key of {owner} is a word; {}", described(&entry.key)));
+                self.slip(
+                    SlipKind::WrongKind,
+                    &entry.key,
+                    format!("a key of {owner} is a word; {}", described(&entry.key)),
+                );
                 continue;
             };
             let Some(index) = table.iter().position(|key| key.name == name.text) else {
@@ -60,7 +68,8 @@ impl Reader {
 
     /// Reports a missing key at the start of its mapping.
     pub fn missing(&mut self, span: Span, name: &'static str, owner: &str) {
-        self.slips.push(Slip::new(SlipKind::MissingKey, span, format!("{owner} has no `{name}`")).at_key(name));
+        self.slips
+            .push(Slip::new(SlipKind::MissingKey, span, format!("{owner} has no `{name}`")).at_key(name));
     }
 
     /// Reports something at a node.
@@ -70,7 +79,11 @@ impl Reader {
 
     /// Reports a key that stands twice in its mapping: keys of a YAML mapping are unique (YAML 1.2 section 3.2.1.1).
     pub fn twice(&mut self, key: &Node, name: &str) {
-        self.slip(SlipKind::NotYaml, key, format!("`{name}` stands twice in this mapping; the first one holds"));
+        self.slip(
+            SlipKind::NotYaml,
+            key,
+            format!("`{name}` stands twice in this mapping; the first one holds"),
+        );
     }
 
     fn unknown_key(&mut self, entries: &[Entry], at: usize, name: &Scalar, table: &'static [Key], owner: &str) {
@@ -94,9 +107,17 @@ impl Reader {
                 let text = format!("`{}` is no key of {owner}; perhaps `{near}`", name.text);
                 let slip = Slip::new(SlipKind::UnknownKey, span, text);
                 let free = entries.iter().all(|e| !e.key.is_scalar(near));
-                if free && !entry.key.through_alias { slip.repair(format!("write `{near}`"), true, span, near) } else { slip }
+                if free && !entry.key.through_alias {
+                    slip.repair(format!("write `{near}`"), true, span, near)
+                } else {
+                    slip
+                }
             }
-            None => Slip::new(SlipKind::UnknownKey, span, format!("`{}` is no key of {owner}", name.text)),
+            None => Slip::new(
+                SlipKind::UnknownKey,
+                span,
+                format!("`{}` is no key of {owner}", name.text),
+            ),
         };
         self.slips.push(slip);
     }
@@ -115,7 +136,8 @@ impl Reader {
     /// Reports that a value is of another kind than the key wants.
     pub fn wrong_kind(&mut self, node: &Node, key: &'static Key) {
         let text = format!("`{}` wants {}; {}", key.name, key.kind.wanted(), described(node));
-        self.slips.push(Slip::new(SlipKind::WrongKind, node.span, text).at_key(key.name));
+        self.slips
+            .push(Slip::new(SlipKind::WrongKind, node.span, text).at_key(key.name));
     }
 
     /// Text, kept as it is written.
@@ -151,19 +173,24 @@ impl Reader {
         let wanted = Kind::Number(measure).wanted();
         match parse_quantity(text, measure.dimension, measure.unit) {
             Ok(value) => {
-                let bound = |limit: f64| {
-                    parse_quantity(&format!("{limit}"), measure.dimension, measure.unit).unwrap_or(limit)
-                };
+                let bound =
+                    |limit: f64| parse_quantity(&format!("{limit}"), measure.dimension, measure.unit).unwrap_or(limit);
                 if value < bound(measure.min) - 1e-9 || value > bound(measure.max) + 1e-9 {
                     let range = format!("{} to {} {}", measure.min, measure.max, measure.unit);
-                    let message = format!("`{text}` can't be {} here: possible are {}", measure.noun, range.trim_end());
-                    self.slips.push(Slip::new(SlipKind::OutOfBounds, node.span, message).at_key(key.name));
+                    let message = format!(
+                        "`{text}` can't be {} here: possible are {}",
+                        measure.noun,
+                        range.trim_end()
+                    );
+                    self.slips
+                        .push(Slip::new(SlipKind::OutOfBounds, node.span, message).at_key(key.name));
                     return None;
                 }
                 Some(value)
             }
             Err(error) => {
-                self.slips.push(quantity_slip(&error, text, node, &wanted, measure.noun, measure.unit).at_key(key.name));
+                self.slips
+                    .push(quantity_slip(&error, text, node, &wanted, measure.noun, measure.unit).at_key(key.name));
                 None
             }
         }
@@ -178,7 +205,8 @@ impl Reader {
             Ok(value) if (1.0..=360.0).contains(&value) => Given::new(value, node.span),
             Ok(_) => {
                 let message = format!("`{}` can't be a period here: possible are 1 to 360 min", scalar.text);
-                self.slips.push(Slip::new(SlipKind::OutOfBounds, node.span, message).at_key(key.name));
+                self.slips
+                    .push(Slip::new(SlipKind::OutOfBounds, node.span, message).at_key(key.name));
                 Given::unreadable(node.span)
             }
             Err(error) => {
@@ -204,7 +232,11 @@ impl Reader {
             return Given::new(value, node.span);
         }
         let number = scalar.text.trim().parse::<f64>().is_ok();
-        let kind = if number { SlipKind::OutOfBounds } else { SlipKind::WrongKind };
+        let kind = if number {
+            SlipKind::OutOfBounds
+        } else {
+            SlipKind::WrongKind
+        };
         let message = format!("`{}` wants {}, not `{}`", key.name, key.kind.wanted(), scalar.text);
         self.slips.push(Slip::new(kind, node.span, message).at_key(key.name));
         Given::unreadable(node.span)
@@ -229,7 +261,13 @@ impl Reader {
     }
 
     /// One of `words`; a stranger is reported as `kind`, with the nearest word.
-    pub fn word(&mut self, node: &Node, key: &'static Key, words: &'static [&'static str], kind: SlipKind) -> Given<usize> {
+    pub fn word(
+        &mut self,
+        node: &Node,
+        key: &'static Key,
+        words: &'static [&'static str],
+        kind: SlipKind,
+    ) -> Given<usize> {
         let Some(scalar) = self.scalar(node, key) else {
             return Given::unreadable(node.span);
         };
@@ -237,7 +275,12 @@ impl Reader {
             return Given::new(index, node.span);
         }
         let near = nearest(&scalar.text, words.iter().copied());
-        let mut message = format!("`{}` wants {}, not `{}`", key.name, Kind::Choice(words).wanted(), scalar.text);
+        let mut message = format!(
+            "`{}` wants {}, not `{}`",
+            key.name,
+            Kind::Choice(words).wanted(),
+            scalar.text
+        );
         if let Some(near) = near {
             message.push_str(&format!("; perhaps `{near}`"));
         }
@@ -258,7 +301,8 @@ impl Reader {
             Ok(date) => Given::new(date, node.span),
             Err(_) => {
                 let message = format!("`{}` wants {}, not `{}`", key.name, key.kind.wanted(), scalar.text);
-                self.slips.push(Slip::new(SlipKind::WrongKind, node.span, message).at_key(key.name));
+                self.slips
+                    .push(Slip::new(SlipKind::WrongKind, node.span, message).at_key(key.name));
                 Given::unreadable(node.span)
             }
         }
@@ -283,7 +327,11 @@ impl Reader {
                 _ => bad = true,
             }
         }
-        if bad && names.is_empty() { Given::unreadable(node.span) } else { Given::new(names, node.span) }
+        if bad && names.is_empty() {
+            Given::unreadable(node.span)
+        } else {
+            Given::new(names, node.span)
+        }
     }
 
     /// A list of exactly `N` numbers of the key's measure.
@@ -297,7 +345,11 @@ impl Reader {
         };
         let mut values = [0.0; N];
         for (value, entry) in values.iter_mut().zip(nodes) {
-            let read = if key.kind == Kind::Tuple(&Kind::Period, N) { self.period(entry, key) } else { self.quantity(entry, key) };
+            let read = if key.kind == Kind::Tuple(&Kind::Period, N) {
+                self.period(entry, key)
+            } else {
+                self.quantity(entry, key)
+            };
             match read.value() {
                 Some(read) => *value = *read,
                 None => return Given::unreadable(node.span),
@@ -323,7 +375,13 @@ pub fn described(node: &Node) -> String {
 
 /// Words are compared without regard to case and to the kind of space between them.
 pub fn same_word(word: &str, text: &str) -> bool {
-    let plain = |c: char| if c == '-' || c == '_' { ' ' } else { c.to_ascii_lowercase() };
+    let plain = |c: char| {
+        if c == '-' || c == '_' {
+            ' '
+        } else {
+            c.to_ascii_lowercase()
+        }
+    };
     word.chars().map(plain).eq(text.trim().chars().map(plain))
 }
 
@@ -331,20 +389,36 @@ fn quantity_slip(error: &QuantityError, text: &str, node: &Node, wanted: &str, n
     let span = node.span;
     let short: String = text.chars().take(40).collect();
     let slip = match error {
-        QuantityError::NotANumber => {
-            Slip::new(SlipKind::WrongKind, span, format!("`{short}` is no number; {wanted} is wanted"))
-        }
+        QuantityError::NotANumber => Slip::new(
+            SlipKind::WrongKind,
+            span,
+            format!("`{short}` is no number; {wanted} is wanted"),
+        ),
         QuantityError::DecimalComma(repaired) => {
             let text = format!("`{short}` has a decimal comma; numbers take a point: `{repaired}`");
             let slip = Slip::new(SlipKind::WrongKind, span, text);
-            return if node.through_alias { slip } else { slip.repair(format!("write `{repaired}`"), true, span, repaired) };
+            return if node.through_alias {
+                slip
+            } else {
+                slip.repair(format!("write `{repaired}`"), true, span, repaired)
+            };
         }
-        QuantityError::NotFinite => {
-            Slip::new(SlipKind::OutOfBounds, span, format!("`{short}` is no finite number; {wanted} is wanted"))
-        }
+        QuantityError::NotFinite => Slip::new(
+            SlipKind::OutOfBounds,
+            span,
+            format!("`{short}` is no finite number; {wanted} is wanted"),
+        ),
         QuantityError::WrongDimension { found, .. } => {
-            let unit = if unit.is_empty() { String::new() } else { format!(", in {unit}") };
-            Slip::new(SlipKind::WrongUnit, span, format!("`{short}` is {}; {noun} is wanted{unit}", found.noun()))
+            let unit = if unit.is_empty() {
+                String::new()
+            } else {
+                format!(", in {unit}")
+            };
+            Slip::new(
+                SlipKind::WrongUnit,
+                span,
+                format!("`{short}` is {}; {noun} is wanted{unit}", found.noun()),
+            )
         }
         QuantityError::UnknownUnit { unit: written, nearest } => {
             let near = nearest.map(|near| format!("; perhaps `{near}`")).unwrap_or_default();
@@ -377,16 +451,24 @@ fn quantity_slip(error: &QuantityError, text: &str, node: &Node, wanted: &str, n
 fn decimal_comma(entries: &[Entry], at: usize, name: &Scalar) -> Option<Slip> {
     let entry = &entries[at];
     let before = &entries.get(at.checked_sub(1)?)?.value;
-    let Value::Scalar(number) = &before.value else { return None };
+    let Value::Scalar(number) = &before.value else {
+        return None;
+    };
     let digits = |text: &str| !text.is_empty() && text.bytes().all(|b| b.is_ascii_digit());
     let fraction = name.text.split(' ').next().is_some_and(digits);
     let adjacent = entry.key.span.start == before.span.end + 1;
     if !matches!(entry.value.value, Value::Null) || !fraction || !digits(&number.text) || !adjacent {
         return None;
     }
-    let span = Span { start: before.span.start, end: entry.key.span.end };
+    let span = Span {
+        start: before.span.start,
+        end: entry.key.span.end,
+    };
     let repaired = format!("{}.{}", number.text, name.text);
-    let text = format!("`{},{}` has a decimal comma; numbers take a point: `{repaired}`", number.text, name.text);
+    let text = format!(
+        "`{},{}` has a decimal comma; numbers take a point: `{repaired}`",
+        number.text, name.text
+    );
     let slip = Slip::new(SlipKind::WrongKind, span, text);
     if entry.key.through_alias || number.style != Style::Plain {
         return Some(slip);
@@ -399,10 +481,18 @@ fn missing_colon(entry: &Entry, name: &Scalar, table: &'static [Key]) -> Option<
     if !matches!(entry.value.value, Value::Null) || name.style != Style::Plain {
         return None;
     }
-    let key = table.iter().filter(|key| name.text.strip_prefix(key.name).is_some_and(|rest| rest.starts_with(' ')));
+    let key = table.iter().filter(|key| {
+        name.text
+            .strip_prefix(key.name)
+            .is_some_and(|rest| rest.starts_with(' '))
+    });
     let key = key.max_by_key(|key| key.name.len())?;
     let repaired = format!("{}: {}", key.name, name.text[key.name.len()..].trim_start());
     let text = format!("`{}` has no colon; write `{repaired}`", name.text);
     let slip = Slip::new(SlipKind::UnknownKey, entry.key.span, text).at_key(key.name);
-    Some(if entry.key.through_alias { slip } else { slip.repair(format!("write `{repaired}`"), true, entry.key.span, repaired) })
+    Some(if entry.key.through_alias {
+        slip
+    } else {
+        slip.repair(format!("write `{repaired}`"), true, entry.key.span, repaired)
+    })
 }

@@ -48,7 +48,10 @@ fn shape(reader: &mut Reader, node: &Node) -> Given<SectionChoice> {
     let mut kind = None;
     if let Some(named) = node.get("shape") {
         let key = &SECTION[0];
-        kind = reader.choice(named, key).value().and_then(|at| ShapeKeys::find(key.kind.choices()[*at]));
+        kind = reader
+            .choice(named, key)
+            .value()
+            .and_then(|at| ShapeKeys::find(key.kind.choices()[*at]));
     } else {
         reader.missing(node.span, "shape", "a section mapping");
     }
@@ -59,8 +62,15 @@ fn shape(reader: &mut Reader, node: &Node) -> Given<SectionChoice> {
         }
         if let Some(kind) = kind.filter(|kind| !kind.takes(key.name)) {
             let takes: Vec<&str> = kind.wants.iter().chain(kind.may).copied().collect();
-            let text = format!("the shape `{}` takes no `{}`; its keys are {}", kind.name, key.name, takes.join(", "));
-            reader.slips.push(Slip::new(SlipKind::UnknownKey, entry.key.span, text).at_key(key.name));
+            let text = format!(
+                "the shape `{}` takes no `{}`; its keys are {}",
+                kind.name,
+                key.name,
+                takes.join(", ")
+            );
+            reader
+                .slips
+                .push(Slip::new(SlipKind::UnknownKey, entry.key.span, text).at_key(key.name));
             return;
         }
         if key.name == "of" {
@@ -69,10 +79,18 @@ fn shape(reader: &mut Reader, node: &Node) -> Given<SectionChoice> {
             sizes.0.push((key.name, *value));
         }
     });
-    let Some(kind) = kind else { return Given::unreadable(node.span) };
+    let Some(kind) = kind else {
+        return Given::unreadable(node.span);
+    };
     for name in kind.wants.iter().filter(|name| node.get(name).is_none()) {
-        let text = format!("the shape `{}` has no `{name}`; it wants {}", kind.name, kind.wants.join(", "));
-        reader.slips.push(Slip::new(SlipKind::MissingKey, node.span, text).at_key(name));
+        let text = format!(
+            "the shape `{}` has no `{name}`; it wants {}",
+            kind.name,
+            kind.wants.join(", ")
+        );
+        reader
+            .slips
+            .push(Slip::new(SlipKind::MissingKey, node.span, text).at_key(name));
     }
     if reader.slips.len() > before {
         return Given::unreadable(node.span);
@@ -82,7 +100,9 @@ fn shape(reader: &mut Reader, node: &Node) -> Given<SectionChoice> {
     };
     if let Err(error) = shape.check() {
         let span = node.get(error.dimension).map_or(node.span, |at| at.span);
-        reader.slips.push(Slip::new(SlipKind::OutOfBounds, span, format!("no section can be so: {error}")).at_key("section"));
+        reader
+            .slips
+            .push(Slip::new(SlipKind::OutOfBounds, span, format!("no section can be so: {error}")).at_key("section"));
         return Given::unreadable(node.span);
     }
     Given::new(SectionChoice::Shape(Box::new(shape)), node.span)
@@ -92,7 +112,13 @@ fn shape(reader: &mut Reader, node: &Node) -> Given<SectionChoice> {
 fn build(kind: &str, sizes: &Sizes) -> Option<Shape> {
     let at = |name: &str| sizes.length(name);
     Some(match kind {
-        "i" => Shape::I(ParallelI { h: at("h"), b: at("b"), tw: at("tw"), tf: at("tf"), r: at("r") }),
+        "i" => Shape::I(ParallelI {
+            h: at("h"),
+            b: at("b"),
+            tw: at("tw"),
+            tf: at("tf"),
+            r: at("r"),
+        }),
         "welded i" => Shape::WeldedI(WeldedI {
             h: at("h"),
             b_top: sizes.first(&["b top", "b"]),
@@ -102,9 +128,27 @@ fn build(kind: &str, sizes: &Sizes) -> Option<Shape> {
             tw: at("tw"),
             weld: at("weld"),
         }),
-        "channel" => Shape::Channel(Channel { h: at("h"), b: at("b"), tw: at("tw"), tf: at("tf"), r: at("r") }),
-        "tee" => Shape::Tee(Tee { h: at("h"), b: at("b"), tw: at("tw"), tf: at("tf"), r: at("r") }),
-        "angle" => Shape::Angle(Angle { h: at("h"), b: at("b"), t: at("t"), root: at("r"), toe: at("toe") }),
+        "channel" => Shape::Channel(Channel {
+            h: at("h"),
+            b: at("b"),
+            tw: at("tw"),
+            tf: at("tf"),
+            r: at("r"),
+        }),
+        "tee" => Shape::Tee(Tee {
+            h: at("h"),
+            b: at("b"),
+            tw: at("tw"),
+            tf: at("tf"),
+            r: at("r"),
+        }),
+        "angle" => Shape::Angle(Angle {
+            h: at("h"),
+            b: at("b"),
+            t: at("t"),
+            root: at("r"),
+            toe: at("toe"),
+        }),
         "rectangular hollow" => {
             let t = at("t").mm();
             // Unless stated, the corners are those of hot finished sections, EN 10210-2: outer 1.5 t, inner 1.0 t.

@@ -143,6 +143,12 @@ pub struct Factors {
 
 impl Default for Factors {
     fn default() -> Self {
-        Self { gamma_m_fi: 1.0, gamma_m0: 1.0, permanent: 1.35, variable: 1.5, xi: 1.0 }
+        Self {
+            gamma_m_fi: 1.0,
+            gamma_m0: 1.0,
+            permanent: 1.35,
+            variable: 1.5,
+            xi: 1.0,
+        }
     }
 }

@@ -1,0 +1,9 @@
+//! From files to outcomes: reading, names, and the evaluation of each member.
+
+pub mod design;
+pub mod exposure;
+pub mod files;
+pub mod names;
+pub mod outcome;
+pub mod read;
+pub mod source;
