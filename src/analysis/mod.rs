@@ -3,6 +3,7 @@
 pub mod design;
 pub mod exposure;
 pub mod files;
+pub mod inputs;
 pub mod names;
 pub mod outcome;
 pub mod read;

@@ -3,6 +3,7 @@
 //! independently from the stated formula) or `memory` (of the source, not read again).
 
 mod heating;
+mod resistance;
 mod support;
 
 mod section_australian_tables;

@@ -1,5 +1,7 @@
 //! Decoding a product of a protection file.
 
+use std::sync::Arc;
+
 use crate::design::decode::member::environment;
 use crate::design::decode::reader::Reader;
 use crate::design::keys::protection as keys;
@@ -75,7 +77,7 @@ pub fn product(reader: &mut Reader, name: Spanned<String>, node: &Node, extent: 
     let fires = draft.fires.take().unwrap_or_default();
     NamedProduct {
         name,
-        product: if readable { draft.build() } else { None },
+        product: if readable { draft.build().map(Arc::new) } else { None },
         fires,
         environment: place,
         evidence,

@@ -1,5 +1,7 @@
 //! What a protection file says.
 
+use std::sync::Arc;
+
 use jiff::civil::Date;
 
 use crate::design::model::member::{Environment, Extent};
@@ -12,7 +14,7 @@ pub struct NamedProduct {
     /// The name.
     pub name: Spanned<String>,
     /// What it is, as far as the physics needs it; absent where its entry can't be read.
-    pub product: Option<Product>,
+    pub product: Option<Arc<Product>>,
     /// The fires that it was assessed for, by name; standard unless stated.
     pub fires: Vec<Spanned<String>>,
     /// The environment a coating may serve in.
