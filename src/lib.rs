@@ -7,6 +7,7 @@
 #![warn(missing_docs, clippy::unwrap_used, clippy::expect_used, clippy::panic)]
 
 pub mod analysis;
+pub mod check;
 pub mod design;
 pub mod findings;
 pub mod heating;

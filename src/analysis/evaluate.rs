@@ -1,1 +1,334 @@
 //! From plain inputs to the outcome: joins section, resistance, heating and protection for one member.
+
+use crate::analysis::inputs::{Cover, Inputs, ProductInput, SectionInput};
+use crate::analysis::memo::Memo;
+use crate::analysis::outcome::{
+    BareState, Critical, ExposedSection, Gap, LimitFrom, Outcome, ProtectedState, Verdict,
+};
+use crate::design::model::head::Factors;
+use crate::design::model::member::{Load, Reduction, Role, Steel, Surface};
+use crate::heating::flux::{Bare, Emissivity, effective_factor};
+use crate::protection::product::{Kind as ProductKind, ShapeClass};
+use crate::protection::requirement::{self, Demand, Refusal};
+use crate::protection::stock;
+use crate::resistance::critical::{self, Loading, Unverified, critical_temperature};
+use crate::resistance::grade::yield_strength;
+use crate::section::shadow::shadow_factor;
+use crate::section::{Casing, Exposure, Geometry, Kind, heated};
+use crate::units::{Length, Stress, Temperature, Time};
+
+/// Works out a member. Nothing is claimed that its inputs do not carry.
+#[must_use]
+pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
+    let mut outcome = Outcome {
+        verdict: Verdict::NotVerified,
+        gaps: Vec::new(),
+        section: None,
+        critical: None,
+        bare: None,
+        protected: None,
+    };
+    outcome.gaps.extend(inputs.unread.iter().map(|key| Gap::Unread(key)));
+    outcome.gaps.extend(inputs.not_covered.iter().map(|(key, why)| Gap::NotCovered { key, why: (*why).to_owned() }));
+    let (Some(section), Some(fire)) = (&inputs.section, &inputs.fire) else { return outcome };
+    let geometry = match section.shape.geometry() {
+        Ok(geometry) => geometry,
+        Err(error) => {
+            outcome.gaps.push(Gap::NotCovered { key: "section", why: error.to_string() });
+            return outcome;
+        }
+    };
+    let casing = match &inputs.cover {
+        Cover::Product(product) if product.boxed => Casing::Box,
+        Cover::Product(_) => Casing::Profile,
+        _ => Casing::Bare,
+    };
+    outcome.section = exposed(inputs, section, &geometry, casing, fire.is_nominal());
+    let Some(exposed) = outcome.section.clone() else {
+        let why = "the exposure means nothing for this section".to_owned();
+        outcome.gaps.push(Gap::NotCovered { key: "exposure", why });
+        return outcome;
+    };
+    let mut cold = false;
+    if inputs.incomplete() && inputs.not_covered.iter().any(|(key, _)| *key != "method") {
+        return outcome;
+    }
+    match limit(inputs, section, &geometry) {
+        Ok(critical) => {
+            if let Some(section) = &mut outcome.section {
+                section.class = critical.1;
+            }
+            outcome.critical = Some(critical.0);
+        }
+        Err(Unverified::FailsCold(utilisation)) => {
+            cold = true;
+            outcome.gaps.push(Gap::FailsCold(utilisation));
+        }
+        Err(Unverified::Missing(key)) => outcome.gaps.push(Gap::Missing(key)),
+        Err(Unverified::NotCovered(why)) => outcome.gaps.push(Gap::CriticalTemperature(why.to_owned())),
+    }
+    let emissivity = match inputs.surface {
+        Surface::GalvanisedTo { category: 'A' | 'B' } => Emissivity::Galvanised,
+        _ => Emissivity::Steel,
+    };
+    let piece = Bare {
+        fire,
+        factor: effective_factor(exposed.bare_factor),
+        shadow: exposed.shadow_factor,
+        emissivity,
+    };
+    let limit = outcome.critical.as_ref();
+    outcome.bare = Some(BareState {
+        at_period: inputs.period.map(|period| piece.temperature_at(period)),
+        resistance: limit.and_then(|limit| piece.time_to(limit.bare)),
+    });
+    if let (Cover::Product(product), Some(limit), Some(period)) = (&inputs.cover, limit, inputs.period) {
+        let demand = Demand {
+            fire,
+            factor: effective_factor(exposed.factor),
+            limit: limit.protected,
+            period,
+            shape: shape_class(geometry.kind),
+            sides: sides(inputs.reached.exposure, inputs.role),
+            beam: inputs.role.is_some_and(Role::reads_as_beam),
+        };
+        outcome.protected = Some(protect(product, &demand, memo));
+    }
+    outcome.verdict = verdict(inputs, &outcome, cold);
+    outcome
+}
+
+fn exposed(
+    inputs: &Inputs,
+    section: &SectionInput,
+    geometry: &Geometry,
+    casing: Casing,
+    nominal: bool,
+) -> Option<ExposedSection> {
+    let exposure = inputs.reached.exposure;
+    let bare = heated(geometry, exposure, Casing::Bare).ok()?;
+    let own = heated(geometry, exposure, casing).ok()?;
+    Some(ExposedSection {
+        shape: section.shape.name(),
+        area: geometry.area,
+        mass_per_m: section.mass.unwrap_or(geometry.mass.kg_m()),
+        heated_perimeter: own.perimeter,
+        factor: own.factor,
+        bare_factor: bare.factor,
+        box_factor: heated(geometry, exposure, Casing::Box).ok().map(|heated| heated.factor),
+        shadow_factor: shadow_factor(geometry, exposure, nominal).ok()?,
+        class: None,
+        below_ten: own.factor.per_m() < crate::heating::flux::LEAST_FACTOR,
+    })
+}
+
+fn shape_class(kind: Option<Kind>) -> ShapeClass {
+    match kind {
+        Some(Kind::RectangularHollow) => ShapeClass::RectangularHollow,
+        Some(Kind::CircularHollow) => ShapeClass::CircularHollow,
+        Some(Kind::Solid) => ShapeClass::Solid,
+        Some(Kind::Open) | None => ShapeClass::Open,
+    }
+}
+
+fn sides(exposure: Exposure, role: Option<Role>) -> u8 {
+    let beam = role.is_some_and(Role::reads_as_beam);
+    if beam && matches!(exposure, Exposure::ThreeSides | Exposure::FlangeOnly) { 3 } else { 4 }
+}
+
+/// The critical temperature with the cross-section class.
+fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result<(Critical, Option<u8>), Unverified> {
+    let bare = matches!(inputs.cover, Cover::Bare);
+    if let Some(stated) = inputs.stated {
+        let critical = Critical {
+            as_built: stated,
+            bare: stated,
+            protected: stated,
+            from: LimitFrom::Stated,
+            governing: "stated".to_owned(),
+        };
+        return Ok((critical, None));
+    }
+    let Some(loading) = &inputs.loading else { return default_limit(inputs) };
+    let role = inputs.role.unwrap_or(Role::Beam);
+    let member = critical::Member {
+        shape: section.shape,
+        fy: strength(inputs, geometry, section)?,
+        gamma_m_fi: inputs.factors.gamma_m_fi,
+        compression: matches!(role, Role::Column | Role::Brace),
+        tension: role.is_tie(),
+        slab: inputs.reached.slab,
+    };
+    let limit = critical_temperature(&member, resolve(&loading.load, &loading.restraint, inputs, role)?)?;
+    let critical = Critical {
+        as_built: if bare { limit.bare } else { limit.protected },
+        bare: limit.bare,
+        protected: limit.protected,
+        from: LimitFrom::Loading,
+        governing: limit.governing,
+    };
+    Ok((critical, limit.class))
+}
+
+fn default_limit(inputs: &Inputs) -> Result<(Critical, Option<u8>), Unverified> {
+    let role = inputs.role.unwrap_or(Role::Column);
+    let restrained_beam = role.reads_as_beam() && inputs.reached.slab;
+    match inputs.default_critical {
+        Some(t) if restrained_beam || role.is_tie() => Ok((
+            Critical {
+                as_built: t,
+                bare: t,
+                protected: t,
+                from: LimitFrom::Default,
+                governing: "the named default of the basis of design".to_owned(),
+            },
+            None,
+        )),
+        _ => Err(Unverified::NotCovered("neither a critical temperature nor `loading` is given")),
+    }
+}
+
+fn strength(inputs: &Inputs, geometry: &Geometry, section: &SectionInput) -> Result<Stress, Unverified> {
+    match &inputs.steel {
+        Some(Steel::Yield(fy)) => Ok(*fy),
+        Some(Steel::Grade(name)) => {
+            let thickest = ["tf", "t", "tw", "tf top", "tf bottom", "d"]
+                .iter()
+                .find_map(|name| section.shape.dimension(name))
+                .unwrap_or_else(|| geometry.flange.map_or(Length::from_mm(40.0), |flange| flange.thickness));
+            yield_strength(name, thickest, inputs.yield_from_en10025)
+                .ok_or(Unverified::NotCovered("the yield strength at this thickness is not in the table; state `steel: {yield: ..}`"))
+        }
+        None => Err(Unverified::Missing("steel")),
+    }
+}
+
+fn resolve(
+    load: &Load,
+    restraint: &crate::design::model::member::Restraint,
+    inputs: &Inputs,
+    role: Role,
+) -> Result<Loading, Unverified> {
+    let Factors { permanent, variable, xi, .. } = inputs.factors;
+    match load {
+        Load::Utilisation(mu) => Ok(Loading::Utilisation(*mu)),
+        Load::Ambient { utilisation, reduction } => Ok(Loading::Utilisation(
+            utilisation
+                * match reduction {
+                    Reduction::Factor(eta) => *eta,
+                    Reduction::Actions { permanent: gk, variable: qk, combination } => {
+                        critical::load_reduction(*gk, *qk, *combination, (permanent, variable), xi)
+                    }
+                },
+        )),
+        Load::Ratio(_) => Err(Unverified::NotCovered("a load ratio belongs to AS 4100, which is not yet computed")),
+        Load::Effects(effects) => {
+            let bending = effects.bending.filter(|moment| moment.knm() != 0.0);
+            let axial = effects.axial.filter(|force| force.kn() != 0.0);
+            if effects.bending_minor.is_some_and(|moment| moment.knm() != 0.0) {
+                return Err(Unverified::NotCovered("bending about the weak axis is not yet computed"));
+            }
+            if effects.shear.is_some_and(|force| force.kn() != 0.0) {
+                return Err(Unverified::NotCovered("shear in fire is not yet computed"));
+            }
+            match (axial, bending) {
+                (Some(_), Some(_)) => Err(Unverified::NotCovered("axial force with bending is not yet computed")),
+                (Some(force), None) if role.is_tie() == (force.kn() > 0.0) => Ok(Loading::Tension(force)),
+                (Some(force), None) => Ok(Loading::Compression(
+                    crate::units::Force::from_kn(force.kn().abs()),
+                    restraint.buckling_length,
+                    restraint.buckling_length_minor,
+                )),
+                (None, Some(moment)) => {
+                    let restrained = inputs.reached.slab || restraint.lateral_length.is_some_and(|l| l.mm() == 0.0);
+                    if restrained {
+                        Ok(Loading::Bending(moment, restraint.continuous))
+                    } else if restraint.lateral_length.is_none() {
+                        Err(Unverified::Missing("lateral length"))
+                    } else {
+                        Err(Unverified::NotCovered("lateral-torsional buckling is not yet computed"))
+                    }
+                }
+                (None, None) => Err(Unverified::NotCovered("the effects in fire are all zero")),
+            }
+        }
+    }
+}
+
+fn protect(input: &ProductInput, demand: &Demand<'_>, memo: &Memo) -> ProtectedState {
+    let product = &input.product;
+    let requirement = if input.fire_assessed {
+        requirement::requirement(product, demand, memo)
+    } else {
+        Err(Refusal::FireNotAssessed)
+    };
+    let coating = product.kind == ProductKind::Coating;
+    let stated = !input.layers.is_empty();
+    let layers = if stated {
+        Some(input.layers.clone())
+    } else {
+        requirement.as_ref().ok().and_then(|needed| needed.next.clone()).map(|up| up.layers)
+    };
+    let provided = layers.as_ref().map(|layers| Length::from_mm(layers.iter().map(|layer| layer.mm()).sum()));
+    let performance = match (&requirement, provided) {
+        (Ok(_) | Err(Refusal::TooSlender { .. }), Some(provided)) if provided.mm() > 0.0 => {
+            Some(requirement::performance(product, demand, provided))
+        }
+        _ => None,
+    };
+    let outside = provided.and_then(|provided| requirement::outside_thickness(product, provided));
+    ProtectedState {
+        outside_thickness: outside,
+        largest_factor: matches!(requirement, Err(Refusal::TooSlender { .. }))
+            .then(|| requirement::largest_factor(product, demand))
+            .flatten(),
+        provided,
+        stated,
+        layers: match (coating, provided) {
+            (true, Some(film)) => stock::coats(product, film),
+            _ => layers.map(|layers| layers.len() as u32),
+        },
+        at_period: performance.and_then(|performance| performance.at_period),
+        resistance: performance.and_then(|performance| performance.resistance),
+        requirement,
+    }
+}
+
+fn verdict(inputs: &Inputs, outcome: &Outcome, cold: bool) -> Verdict {
+    let Some(period) = inputs.period else {
+        return if inputs.unread.contains(&"period") { Verdict::NotVerified } else { Verdict::NoPeriod };
+    };
+    if inputs.incomplete() || matches!(inputs.cover, Cover::Unknown) {
+        return Verdict::NotVerified;
+    }
+    if cold {
+        return Verdict::Fails;
+    }
+    if outcome.critical.is_none() {
+        return Verdict::NotVerified;
+    }
+    if let Some(protected) = &outcome.protected {
+        return match &protected.requirement {
+            Ok(needed) if !needed.unstated.is_empty() || protected.outside_thickness.is_some() => Verdict::NotVerified,
+            Ok(needed) => match protected.provided {
+                Some(provided) if provided.mm() + 1e-9 >= needed.exact.mm() => Verdict::Passes,
+                Some(_) => Verdict::Fails,
+                None => Verdict::CannotBeProtected,
+            },
+            Err(Refusal::TooSlender { .. }) => Verdict::CannotBeProtected,
+            Err(_) => Verdict::NotVerified,
+        };
+    }
+    let lasts = |resistance: Option<Time>| resistance.is_none_or(|time| time.min() >= period.min());
+    match outcome.bare {
+        Some(bare) if lasts(bare.resistance) => Verdict::Passes,
+        Some(_) => Verdict::Fails,
+        None => Verdict::NotVerified,
+    }
+}
+
+/// A temperature for messages, whole degrees.
+#[must_use]
+pub fn degrees(temperature: Temperature) -> String {
+    format!("{:.0} °C", temperature.celsius())
+}

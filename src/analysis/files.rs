@@ -32,6 +32,16 @@ pub enum ReadTrouble {
     },
 }
 
+impl std::fmt::Display for ReadTrouble {
+    fn fmt(&self, f: &mut std::fmt::Formatter<'_>) -> std::fmt::Result {
+        match self {
+            Self::System(words) => f.write_str(words),
+            Self::Encoding(error) => error.fmt(f),
+            Self::TooLarge { size, limit } => write!(f, "it has {size} bytes; at most {limit} are read"),
+        }
+    }
+}
+
 /// Files as the command line or an editor has them.
 pub trait Files: Sync {
     /// Follows `relative`, a path named in the file `from`, inside the workspace.

@@ -77,6 +77,10 @@ pub enum Gap {
     Unread(&'static str),
     /// The critical temperature is neither stated nor derivable.
     CriticalTemperature(String),
+    /// A key of the loading is missing.
+    Missing(&'static str),
+    /// The load exceeds the resistance at 20 °C; the utilisation.
+    FailsCold(f64),
     /// The methods of the product do not cover it (yet).
     NotCovered {
         /// The key concerned.
@@ -89,8 +93,6 @@ pub enum Gap {
 /// The section as exposed.
 #[derive(Debug, Clone, PartialEq)]
 pub struct ExposedSection {
-    /// Designation, or the shape's word.
-    pub name: String,
     /// The shape's word: `i`, `rectangular hollow`, ..
     pub shape: &'static str,
     /// Area.
@@ -116,7 +118,7 @@ pub struct ExposedSection {
 /// The member without protection.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub struct BareState {
-    /// Steel temperature at the period (the highest up to it, where the fire cools).
+    /// Steel temperature at the period.
     pub at_period: Option<Temperature>,
     /// Time to the critical temperature; `None` if not reached within 360 min.
     pub resistance: Option<Time>,
@@ -127,6 +129,10 @@ pub struct BareState {
 pub struct ProtectedState {
     /// What is needed, or why nothing holds.
     pub requirement: Result<Requirement, Refusal>,
+    /// The assessed range of thickness, where what is provided lies outside it.
+    pub outside_thickness: Option<(Length, Length)>,
+    /// Where nothing holds the member: the largest section factor that the product holds.
+    pub largest_factor: Option<SectionFactor>,
     /// Thickness of all layers (dry film of a coating) that the verdict rests on.
     pub provided: Option<Length>,
     /// Whether the file states it; the next stock thickness otherwise.

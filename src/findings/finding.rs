@@ -94,6 +94,22 @@ pub struct Finding {
 }
 
 impl Finding {
+    /// A finding of the registry; `None` for a name that it does not have.
+    #[must_use]
+    pub fn new(name: &str, place: Place, message: String) -> Option<Self> {
+        let declaration = super::registry::find(name)?;
+        Some(Self {
+            declaration,
+            severity: declaration.severity,
+            message,
+            notes: Vec::new(),
+            place,
+            mark: None,
+            key: None,
+            fixes: Vec::new(),
+        })
+    }
+
     /// The stable name: `too-slender-to-protect`.
     #[must_use]
     pub const fn name(&self) -> &'static str {

@@ -1,0 +1,99 @@
+//! Agreed departures: they move a finding to a list of their own and never change a verdict.
+
+use std::sync::Arc;
+
+use jiff::civil::Date;
+
+use super::finding::{Finding, Place, Severity};
+use super::registry;
+use crate::analysis::design::{Design, MemberAt};
+use crate::analysis::outcome::Outcome;
+use crate::design::model::member::Departure;
+
+/// Splits the findings of a member into open and agreed ones, and reports departures that don't hold.
+pub fn apply(
+    design: &Design,
+    at: MemberAt,
+    outcome: &Outcome,
+    on: Date,
+    findings: Vec<Finding>,
+) -> (Vec<Finding>, Vec<Finding>) {
+    let item = design.member(at);
+    let departures = &item.value().departures;
+    if departures.is_empty() {
+        return (findings, Vec::new());
+    }
+    let mark = item.value().mark.value().cloned().unwrap_or_default();
+    let mut open = Vec::new();
+    let mut agreed = Vec::new();
+    let mut own = Vec::new();
+    let mut holds = vec![false; departures.len()];
+    for (n, departure) in departures.iter().enumerate() {
+        let from = &departure.from;
+        let place = Place { path: Arc::clone(&design.files[at.file].path), span: item.place(from.span) };
+        let mut add = |name: &str, message: String| {
+            if let Some(mut finding) = Finding::new(name, place.clone(), message) {
+                finding.mark = Some(mark.clone());
+                finding.key = Some("departures".to_owned());
+                own.push(finding);
+            }
+        };
+        let Some(declaration) = registry::find(&from.value) else {
+            add("departure-unused", format!("{mark} departs from `{}`, which is no finding", from.value));
+            continue;
+        };
+        let error = declaration.severity == Severity::Error;
+        let lacks = |given: bool, key: &str| (!given).then(|| format!("`{key}`"));
+        let mut missing: Vec<String> = lacks(departure.because.value().is_some(), "because").into_iter().collect();
+        if error {
+            missing.extend(lacks(departure.by.value().is_some(), "by"));
+            missing.extend(lacks(departure.until.value().is_some(), "until"));
+        }
+        if !missing.is_empty() {
+            add("departure-without-reason", format!("{mark}: the departure from {} lacks {}", from.value, missing.join(", ")));
+        } else if departure.until.value().is_some_and(|until| *until < on) {
+            add("departure-expired", format!("{mark}: the departure from {} has run out", from.value));
+        } else if let Some(worse) = outgrown(departure, outcome) {
+            add("departure-outgrown", format!("{mark}: the departure from {} is outgrown: {worse}", from.value));
+        } else if findings.iter().any(|finding| finding.name() == from.value) {
+            holds[n] = true;
+        } else {
+            add("departure-unused", format!("{mark} departs from {}, which was not found", from.value));
+        }
+    }
+    for finding in findings {
+        let met = departures.iter().zip(&holds).any(|(departure, holds)| *holds && departure.from.value == finding.name());
+        if met { agreed.push(finding) } else { open.push(finding) }
+    }
+    open.append(&mut own);
+    (open, agreed)
+}
+
+/// What has worsened since the departure was agreed.
+fn outgrown(departure: &Departure, outcome: &Outcome) -> Option<String> {
+    let needed = outcome.protected.as_ref().and_then(|state| state.requirement.as_ref().ok());
+    if let (Some(was), Some(is)) = (departure.at.needs, needed.map(|needed| needed.exact))
+        && is.mm() > was.mm() + 0.05
+    {
+        return Some(format!("it needed {:.1} mm, now {:.1} mm", was.mm(), is.mm()));
+    }
+    if let (Some(was), Some(section)) = (departure.at.section_factor, &outcome.section)
+        && section.factor.per_m() > was + 0.5
+    {
+        return Some(format!("the section factor was {was:.0} 1/m, now {:.0} 1/m", section.factor.per_m()));
+    }
+    let temperature = outcome.bare.and_then(|bare| bare.at_period);
+    let temperature = outcome.protected.as_ref().and_then(|state| state.at_period).or(temperature);
+    if let (Some(was), Some(is)) = (departure.at.temperature, temperature)
+        && is.celsius() > was.celsius() + 0.5
+    {
+        return Some(format!("the steel reached {:.0} °C, now {:.0} °C", was.celsius(), is.celsius()));
+    }
+    let resistance = outcome.protected.as_ref().map_or(outcome.bare.and_then(|bare| bare.resistance), |s| s.resistance);
+    if let (Some(was), Some(is)) = (departure.at.resistance, resistance)
+        && is.min() + 0.5 < was.min()
+    {
+        return Some(format!("it lasted {:.0} min, now {:.0} min", was.min(), is.min()));
+    }
+    None
+}
