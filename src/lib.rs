@@ -8,10 +8,13 @@
 
 pub mod analysis;
 pub mod check;
+pub mod cli;
 pub mod design;
+pub mod exchange;
 pub mod findings;
 pub mod heating;
 pub mod protection;
+pub mod report;
 pub mod resistance;
 pub mod scenario;
 pub mod section;

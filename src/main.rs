@@ -1,2 +1,5 @@
 //! The `scorchline` binary.
-fn main() {}
+
+fn main() -> std::process::ExitCode {
+    scorchline::cli::main()
+}

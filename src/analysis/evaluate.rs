@@ -2,9 +2,7 @@
 
 use crate::analysis::inputs::{Cover, Inputs, ProductInput, SectionInput};
 use crate::analysis::memo::Memo;
-use crate::analysis::outcome::{
-    BareState, Critical, ExposedSection, Gap, LimitFrom, Outcome, ProtectedState, Verdict,
-};
+use crate::analysis::outcome::{BareState, Critical, ExposedSection, Gap, LimitFrom, Outcome, ProtectedState, Verdict};
 use crate::design::model::head::Factors;
 use crate::design::model::member::{Load, Reduction, Role, Steel, Surface};
 use crate::heating::flux::{Bare, Emissivity, effective_factor};
@@ -29,12 +27,22 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
         protected: None,
     };
     outcome.gaps.extend(inputs.unread.iter().map(|key| Gap::Unread(key)));
-    outcome.gaps.extend(inputs.not_covered.iter().map(|(key, why)| Gap::NotCovered { key, why: (*why).to_owned() }));
-    let (Some(section), Some(fire)) = (&inputs.section, &inputs.fire) else { return outcome };
+    outcome
+        .gaps
+        .extend(inputs.not_covered.iter().map(|(key, why)| Gap::NotCovered {
+            key,
+            why: (*why).to_owned(),
+        }));
+    let (Some(section), Some(fire)) = (&inputs.section, &inputs.fire) else {
+        return outcome;
+    };
     let geometry = match section.shape.geometry() {
         Ok(geometry) => geometry,
         Err(error) => {
-            outcome.gaps.push(Gap::NotCovered { key: "section", why: error.to_string() });
+            outcome.gaps.push(Gap::NotCovered {
+                key: "section",
+                why: error.to_string(),
+            });
             return outcome;
         }
     };
@@ -133,7 +141,11 @@ fn shape_class(kind: Option<Kind>) -> ShapeClass {
 
 fn sides(exposure: Exposure, role: Option<Role>) -> u8 {
     let beam = role.is_some_and(Role::reads_as_beam);
-    if beam && matches!(exposure, Exposure::ThreeSides | Exposure::FlangeOnly) { 3 } else { 4 }
+    if beam && matches!(exposure, Exposure::ThreeSides | Exposure::FlangeOnly) {
+        3
+    } else {
+        4
+    }
 }
 
 /// The critical temperature with the cross-section class.
@@ -149,7 +161,9 @@ fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result
         };
         return Ok((critical, None));
     }
-    let Some(loading) = &inputs.loading else { return default_limit(inputs) };
+    let Some(loading) = &inputs.loading else {
+        return default_limit(inputs);
+    };
     let role = inputs.role.unwrap_or(Role::Beam);
     let member = critical::Member {
         shape: section.shape,
@@ -184,7 +198,9 @@ fn default_limit(inputs: &Inputs) -> Result<(Critical, Option<u8>), Unverified> 
             },
             None,
         )),
-        _ => Err(Unverified::NotCovered("neither a critical temperature nor `loading` is given")),
+        _ => Err(Unverified::NotCovered(
+            "neither a critical temperature nor `loading` is given",
+        )),
     }
 }
 
@@ -196,8 +212,9 @@ fn strength(inputs: &Inputs, geometry: &Geometry, section: &SectionInput) -> Res
                 .iter()
                 .find_map(|name| section.shape.dimension(name))
                 .unwrap_or_else(|| geometry.flange.map_or(Length::from_mm(40.0), |flange| flange.thickness));
-            yield_strength(name, thickest, inputs.yield_from_en10025)
-                .ok_or(Unverified::NotCovered("the yield strength at this thickness is not in the table; state `steel: {yield: ..}`"))
+            yield_strength(name, thickest, inputs.yield_from_en10025).ok_or(Unverified::NotCovered(
+                "the yield strength at this thickness is not in the table; state `steel: {yield: ..}`",
+            ))
         }
         None => Err(Unverified::Missing("steel")),
     }
@@ -209,24 +226,35 @@ fn resolve(
     inputs: &Inputs,
     role: Role,
 ) -> Result<Loading, Unverified> {
-    let Factors { permanent, variable, xi, .. } = inputs.factors;
+    let Factors {
+        permanent,
+        variable,
+        xi,
+        ..
+    } = inputs.factors;
     match load {
         Load::Utilisation(mu) => Ok(Loading::Utilisation(*mu)),
         Load::Ambient { utilisation, reduction } => Ok(Loading::Utilisation(
             utilisation
                 * match reduction {
                     Reduction::Factor(eta) => *eta,
-                    Reduction::Actions { permanent: gk, variable: qk, combination } => {
-                        critical::load_reduction(*gk, *qk, *combination, (permanent, variable), xi)
-                    }
+                    Reduction::Actions {
+                        permanent: gk,
+                        variable: qk,
+                        combination,
+                    } => critical::load_reduction(*gk, *qk, *combination, (permanent, variable), xi),
                 },
         )),
-        Load::Ratio(_) => Err(Unverified::NotCovered("a load ratio belongs to AS 4100, which is not yet computed")),
+        Load::Ratio(_) => Err(Unverified::NotCovered(
+            "a load ratio belongs to AS 4100, which is not yet computed",
+        )),
         Load::Effects(effects) => {
             let bending = effects.bending.filter(|moment| moment.knm() != 0.0);
             let axial = effects.axial.filter(|force| force.kn() != 0.0);
             if effects.bending_minor.is_some_and(|moment| moment.knm() != 0.0) {
-                return Err(Unverified::NotCovered("bending about the weak axis is not yet computed"));
+                return Err(Unverified::NotCovered(
+                    "bending about the weak axis is not yet computed",
+                ));
             }
             if effects.shear.is_some_and(|force| force.kn() != 0.0) {
                 return Err(Unverified::NotCovered("shear in fire is not yet computed"));
@@ -267,9 +295,15 @@ fn protect(input: &ProductInput, demand: &Demand<'_>, memo: &Memo) -> ProtectedS
     let layers = if stated {
         Some(input.layers.clone())
     } else {
-        requirement.as_ref().ok().and_then(|needed| needed.next.clone()).map(|up| up.layers)
+        requirement
+            .as_ref()
+            .ok()
+            .and_then(|needed| needed.next.clone())
+            .map(|up| up.layers)
     };
-    let provided = layers.as_ref().map(|layers| Length::from_mm(layers.iter().map(|layer| layer.mm()).sum()));
+    let provided = layers
+        .as_ref()
+        .map(|layers| Length::from_mm(layers.iter().map(|layer| layer.mm()).sum()));
     let performance = match (&requirement, provided) {
         (Ok(_) | Err(Refusal::TooSlender { .. }), Some(provided)) if provided.mm() > 0.0 => {
             Some(requirement::performance(product, demand, provided))
@@ -296,7 +330,11 @@ fn protect(input: &ProductInput, demand: &Demand<'_>, memo: &Memo) -> ProtectedS
 
 fn verdict(inputs: &Inputs, outcome: &Outcome, cold: bool) -> Verdict {
     let Some(period) = inputs.period else {
-        return if inputs.unread.contains(&"period") { Verdict::NotVerified } else { Verdict::NoPeriod };
+        return if inputs.unread.contains(&"period") {
+            Verdict::NotVerified
+        } else {
+            Verdict::NoPeriod
+        };
     };
     if inputs.incomplete() || matches!(inputs.cover, Cover::Unknown) {
         return Verdict::NotVerified;

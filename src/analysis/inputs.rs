@@ -202,7 +202,10 @@ fn note_unreadable(keys: &Inherited<'_>, unread: &mut Vec<&'static str>) {
     test(keys.get(|k| &k.exposure).given.is_unreadable(), "exposure");
     test(keys.get(|k| &k.shield).given.is_unreadable(), "shielded by");
     test(keys.get(|k| &k.fire).given.is_unreadable(), "fire");
-    test(keys.get(|k| &k.critical_temperature).given.is_unreadable(), "critical temperature");
+    test(
+        keys.get(|k| &k.critical_temperature).given.is_unreadable(),
+        "critical temperature",
+    );
     test(keys.get(|k| &k.loading).given.is_unreadable(), "loading");
     test(keys.get(|k| &k.protection).given.is_unreadable(), "protection");
     test(keys.get(|k| &k.group).given.is_unreadable(), "group");
@@ -216,15 +219,24 @@ fn section_input(
 ) -> Option<SectionInput> {
     match choice? {
         SectionChoice::Designation(_) => match row_of(choice, &names.options) {
-            Some(row) => Some(SectionInput { shape: row.shape, mass: Some(row.mass.kg_m()) }),
+            Some(row) => Some(SectionInput {
+                shape: row.shape,
+                mass: Some(row.mass.kg_m()),
+            }),
             None => {
                 unread.push("section");
                 None
             }
         },
-        SectionChoice::Shape(shape) => Some(SectionInput { shape: **shape, mass: None }),
+        SectionChoice::Shape(shape) => Some(SectionInput {
+            shape: **shape,
+            mass: None,
+        }),
         SectionChoice::NotCovered(_) => {
-            not_covered.push(("section", "this shape is read but its section factor is not yet computed"));
+            not_covered.push((
+                "section",
+                "this shape is read but its section factor is not yet computed",
+            ));
             None
         }
     }
@@ -233,15 +245,25 @@ fn section_input(
 fn cover(keys: &Inherited<'_>, design: &Design, fire: &str) -> Cover {
     let found = keys.get(|k| &k.protection);
     let Some(stated) = found.value() else {
-        return if found.given.is_unreadable() { Cover::Unknown } else { Cover::Bare };
+        return if found.given.is_unreadable() {
+            Cover::Unknown
+        } else {
+            Cover::Bare
+        };
     };
     if stated.unreadable {
         return Cover::Unknown;
     }
-    let Some(name) = &stated.product else { return Cover::Bare };
-    let Some((_, item)) = design.product(&name.value) else { return Cover::Unknown };
+    let Some(name) = &stated.product else {
+        return Cover::Bare;
+    };
+    let Some((_, item)) = design.product(&name.value) else {
+        return Cover::Unknown;
+    };
     let named = item.value();
-    let Some(product) = &named.product else { return Cover::Unknown };
+    let Some(product) = &named.product else {
+        return Cover::Unknown;
+    };
     let fire_assessed = if named.fires.is_empty() {
         fire == "standard"
     } else {
@@ -258,7 +280,11 @@ fn cover(keys: &Inherited<'_>, design: &Design, fire: &str) -> Cover {
         }
     };
     Cover::Product(ProductInput {
-        boxed: stated.boxed.value().copied().unwrap_or_else(|| product.boxes_by_default()),
+        boxed: stated
+            .boxed
+            .value()
+            .copied()
+            .unwrap_or_else(|| product.boxes_by_default()),
         product: Arc::clone(product),
         fire_assessed,
         layers,
@@ -269,7 +295,14 @@ impl Eq for Inputs {}
 
 impl Hash for Inputs {
     fn hash<H: Hasher>(&self, state: &mut H) {
-        (self.role, &self.unread, &self.not_covered, self.yield_from_en10025, self.surface).hash(state);
+        (
+            self.role,
+            &self.unread,
+            &self.not_covered,
+            self.yield_from_en10025,
+            self.surface,
+        )
+            .hash(state);
         if let Some(section) = &self.section {
             section.shape.hash_bits(state);
         }
@@ -301,7 +334,9 @@ fn hash_loading<H: Hasher>(loading: &Loading, state: &mut H) {
     match &loading.load {
         Load::Utilisation(value) | Load::Ratio(value) => value.to_bits().hash(state),
         Load::Ambient { utilisation, .. } => utilisation.to_bits().hash(state),
-        Load::Effects(Effects { axial, bending, shear, .. }) => {
+        Load::Effects(Effects {
+            axial, bending, shear, ..
+        }) => {
             (axial.map(|force| force.bits()), bending.map(|moment| moment.bits())).hash(state);
             shear.map(|force| force.bits()).hash(state);
         }

@@ -23,12 +23,18 @@ pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf,
             Err(trouble) => troubles.push((path.clone(), trouble)),
         }
     }
-    let designs: Vec<Design> = sources.iter().map(|source| assemble(files, Arc::clone(source))).collect();
+    let designs: Vec<Design> = sources
+        .iter()
+        .map(|source| assemble(files, Arc::clone(source)))
+        .collect();
     let taken: Vec<PathBuf> = designs
         .iter()
         .flat_map(|design| design.files.iter().skip(1).map(|file| file.path.to_path_buf()))
         .collect();
-    let designs = designs.into_iter().filter(|design| !taken.contains(&design.files[0].path)).collect();
+    let designs = designs
+        .into_iter()
+        .filter(|design| !taken.contains(&design.files[0].path))
+        .collect();
     (designs, troubles)
 }
 
@@ -47,10 +53,19 @@ fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
         design.fires.insert((*name).to_owned(), Some(Arc::new(fire.clone())));
     }
     for named in &head.head.fires {
-        design.fires.insert(named.name.value.clone(), named.fire.clone().map(Arc::new));
+        design
+            .fires
+            .insert(named.name.value.clone(), named.fire.clone().map(Arc::new));
     }
     for written in &head.head.parts {
-        if let Some(part) = follow(files, &mut design, &head, &written.value, written.span, FileKind::Steelwork) {
+        if let Some(part) = follow(
+            files,
+            &mut design,
+            &head,
+            &written.value,
+            written.span,
+            FileKind::Steelwork,
+        ) {
             let back = part.head.part_of.value().map(|name| files.follow(&part.path, name));
             let file = design.files.len();
             if back != Some(Ok(head.path.to_path_buf())) {
@@ -68,13 +83,29 @@ fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
     if let (Some(name), Some(span)) = (head.head.part_of.value(), head.head.part_of.span())
         && let Some(other) = follow(files, &mut design, &head, name, span, FileKind::Steelwork)
     {
-        let listed = other.head.parts.iter().any(|part| files.follow(&other.path, &part.value).as_deref() == Ok(&**head.path));
+        let listed = other
+            .head
+            .parts
+            .iter()
+            .any(|part| files.follow(&other.path, &part.value).as_deref() == Ok(&**head.path));
         if !listed {
-            design.troubles.push(LinkTrouble { file: 0, span, written: name.clone(), kind: LinkKind::HeadListsNoPart });
+            design.troubles.push(LinkTrouble {
+                file: 0,
+                span,
+                written: name.clone(),
+                kind: LinkKind::HeadListsNoPart,
+            });
         }
     }
     for written in &head.head.libraries {
-        if let Some(library) = follow(files, &mut design, &head, &written.value, written.span, FileKind::Protection) {
+        if let Some(library) = follow(
+            files,
+            &mut design,
+            &head,
+            &written.value,
+            written.span,
+            FileKind::Protection,
+        ) {
             design.files.push(library);
         }
     }
@@ -91,7 +122,12 @@ fn follow(
     wanted: FileKind,
 ) -> Option<Arc<SourceFile>> {
     let mut trouble = |kind| {
-        design.troubles.push(LinkTrouble { file: 0, span, written: written.to_owned(), kind });
+        design.troubles.push(LinkTrouble {
+            file: 0,
+            span,
+            written: written.to_owned(),
+            kind,
+        });
         None
     };
     let path = match files.follow(&from.path, written) {
@@ -104,7 +140,11 @@ fn follow(
     match files.read(&path) {
         Ok(text) => {
             let source = read(Arc::new(path), text);
-            if source.kind == wanted { Some(Arc::new(source)) } else { trouble(LinkKind::OtherKind(wanted)) }
+            if source.kind == wanted {
+                Some(Arc::new(source))
+            } else {
+                trouble(LinkKind::OtherKind(wanted))
+            }
         }
         Err(error) => trouble(LinkKind::Read(error)),
     }
@@ -126,10 +166,16 @@ fn index(design: &mut Design) {
             }
         }
         for (index, item) in source.groups.iter().enumerate() {
-            design.groups.entry(item.value().name.value.clone()).or_insert((file, index));
+            design
+                .groups
+                .entry(item.value().name.value.clone())
+                .or_insert((file, index));
         }
         for (index, item) in source.products.iter().enumerate() {
-            design.products.entry(item.value().name.value.clone()).or_insert((file, index));
+            design
+                .products
+                .entry(item.value().name.value.clone())
+                .or_insert((file, index));
         }
     }
 }

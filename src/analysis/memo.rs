@@ -28,7 +28,12 @@ impl Memo {
     /// The outcome of a member's inputs.
     #[must_use]
     pub fn outcome(&self, inputs: Inputs) -> Arc<Outcome> {
-        if let Some(known) = self.members.read().ok().and_then(|members| members.get(&inputs).cloned()) {
+        if let Some(known) = self
+            .members
+            .read()
+            .ok()
+            .and_then(|members| members.get(&inputs).cloned())
+        {
             return known;
         }
         self.evaluated.fetch_add(1, Ordering::Relaxed);
@@ -56,10 +61,21 @@ impl Families for Memo {
             range.1.bits(),
             insulation.clone(),
         );
-        if let Some(known) = self.families.read().ok().and_then(|families| families.get(&key).cloned()) {
+        if let Some(known) = self
+            .families
+            .read()
+            .ok()
+            .and_then(|families| families.get(&key).cloned())
+        {
             return known;
         }
-        let family = Arc::new(Family::new(demand.fire.clone(), demand.factor, insulation.clone(), demand.period, range));
+        let family = Arc::new(Family::new(
+            demand.fire.clone(),
+            demand.factor,
+            insulation.clone(),
+            demand.period,
+            range,
+        ));
         if let Ok(mut families) = self.families.write() {
             families.insert(key, Arc::clone(&family));
         }

@@ -33,13 +33,19 @@ pub struct Checked {
 #[must_use]
 pub fn run(files: &dyn Files, paths: &[PathBuf], on: Date, memo: &Memo) -> (Vec<Checked>, Vec<(PathBuf, ReadTrouble)>) {
     let (designs, troubles) = load(files, paths);
-    (designs.into_iter().map(|design| check(design, on, memo)).collect(), troubles)
+    (
+        designs.into_iter().map(|design| check(design, on, memo)).collect(),
+        troubles,
+    )
 }
 
 /// Checks one design.
 #[must_use]
 pub fn check(design: Design, on: Date, memo: &Memo) -> Checked {
-    let names = Names { design: &design, options: lookup_options(design.basis()) };
+    let names = Names {
+        design: &design,
+        options: lookup_options(design.basis()),
+    };
     let outcomes: Vec<Arc<Outcome>> = design
         .members
         .par_iter()
@@ -76,11 +82,20 @@ pub fn check(design: Design, on: Date, memo: &Memo) -> Checked {
         open.append(&mut own);
         agreed.append(&mut accepted);
     }
-    for finding in by_mark.into_iter().filter(|(mark, _)| !design.marks.contains_key(mark)).flat_map(|(_, f)| f) {
+    for finding in by_mark
+        .into_iter()
+        .filter(|(mark, _)| !design.marks.contains_key(mark))
+        .flat_map(|(_, f)| f)
+    {
         open.push(finding);
     }
     let order = |finding: &Finding| (finding.place.path.to_path_buf(), finding.place.span, finding.severity);
     open.sort_by_cached_key(order);
     agreed.sort_by_cached_key(order);
-    Checked { design, outcomes, findings: open, agreed }
+    Checked {
+        design,
+        outcomes,
+        findings: open,
+        agreed,
+    }
 }

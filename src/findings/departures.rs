@@ -30,7 +30,10 @@ pub fn apply(
     let mut holds = vec![false; departures.len()];
     for (n, departure) in departures.iter().enumerate() {
         let from = &departure.from;
-        let place = Place { path: Arc::clone(&design.files[at.file].path), span: item.place(from.span) };
+        let place = Place {
+            path: Arc::clone(&design.files[at.file].path),
+            span: item.place(from.span),
+        };
         let mut add = |name: &str, message: String| {
             if let Some(mut finding) = Finding::new(name, place.clone(), message) {
                 finding.mark = Some(mark.clone());
@@ -39,30 +42,50 @@ pub fn apply(
             }
         };
         let Some(declaration) = registry::find(&from.value) else {
-            add("departure-unused", format!("{mark} departs from `{}`, which is no finding", from.value));
+            add(
+                "departure-unused",
+                format!("{mark} departs from `{}`, which is no finding", from.value),
+            );
             continue;
         };
         let error = declaration.severity == Severity::Error;
         let lacks = |given: bool, key: &str| (!given).then(|| format!("`{key}`"));
-        let mut missing: Vec<String> = lacks(departure.because.value().is_some(), "because").into_iter().collect();
+        let mut missing: Vec<String> = lacks(departure.because.value().is_some(), "because")
+            .into_iter()
+            .collect();
         if error {
             missing.extend(lacks(departure.by.value().is_some(), "by"));
             missing.extend(lacks(departure.until.value().is_some(), "until"));
         }
         if !missing.is_empty() {
-            add("departure-without-reason", format!("{mark}: the departure from {} lacks {}", from.value, missing.join(", ")));
+            add(
+                "departure-without-reason",
+                format!("{mark}: the departure from {} lacks {}", from.value, missing.join(", ")),
+            );
         } else if departure.until.value().is_some_and(|until| *until < on) {
-            add("departure-expired", format!("{mark}: the departure from {} has run out", from.value));
+            add(
+                "departure-expired",
+                format!("{mark}: the departure from {} has run out", from.value),
+            );
         } else if let Some(worse) = outgrown(departure, outcome) {
-            add("departure-outgrown", format!("{mark}: the departure from {} is outgrown: {worse}", from.value));
+            add(
+                "departure-outgrown",
+                format!("{mark}: the departure from {} is outgrown: {worse}", from.value),
+            );
         } else if findings.iter().any(|finding| finding.name() == from.value) {
             holds[n] = true;
         } else {
-            add("departure-unused", format!("{mark} departs from {}, which was not found", from.value));
+            add(
+                "departure-unused",
+                format!("{mark} departs from {}, which was not found", from.value),
+            );
         }
     }
     for finding in findings {
-        let met = departures.iter().zip(&holds).any(|(departure, holds)| *holds && departure.from.value == finding.name());
+        let met = departures
+            .iter()
+            .zip(&holds)
+            .any(|(departure, holds)| *holds && departure.from.value == finding.name());
         if met { agreed.push(finding) } else { open.push(finding) }
     }
     open.append(&mut own);
@@ -71,7 +94,10 @@ pub fn apply(
 
 /// What has worsened since the departure was agreed.
 fn outgrown(departure: &Departure, outcome: &Outcome) -> Option<String> {
-    let needed = outcome.protected.as_ref().and_then(|state| state.requirement.as_ref().ok());
+    let needed = outcome
+        .protected
+        .as_ref()
+        .and_then(|state| state.requirement.as_ref().ok());
     if let (Some(was), Some(is)) = (departure.at.needs, needed.map(|needed| needed.exact))
         && is.mm() > was.mm() + 0.05
     {
@@ -80,16 +106,30 @@ fn outgrown(departure: &Departure, outcome: &Outcome) -> Option<String> {
     if let (Some(was), Some(section)) = (departure.at.section_factor, &outcome.section)
         && section.factor.per_m() > was + 0.5
     {
-        return Some(format!("the section factor was {was:.0} 1/m, now {:.0} 1/m", section.factor.per_m()));
+        return Some(format!(
+            "the section factor was {was:.0} 1/m, now {:.0} 1/m",
+            section.factor.per_m()
+        ));
     }
     let temperature = outcome.bare.and_then(|bare| bare.at_period);
-    let temperature = outcome.protected.as_ref().and_then(|state| state.at_period).or(temperature);
+    let temperature = outcome
+        .protected
+        .as_ref()
+        .and_then(|state| state.at_period)
+        .or(temperature);
     if let (Some(was), Some(is)) = (departure.at.temperature, temperature)
         && is.celsius() > was.celsius() + 0.5
     {
-        return Some(format!("the steel reached {:.0} °C, now {:.0} °C", was.celsius(), is.celsius()));
+        return Some(format!(
+            "the steel reached {:.0} °C, now {:.0} °C",
+            was.celsius(),
+            is.celsius()
+        ));
     }
-    let resistance = outcome.protected.as_ref().map_or(outcome.bare.and_then(|bare| bare.resistance), |s| s.resistance);
+    let resistance = outcome
+        .protected
+        .as_ref()
+        .map_or(outcome.bare.and_then(|bare| bare.resistance), |s| s.resistance);
     if let (Some(was), Some(is)) = (departure.at.resistance, resistance)
         && is.min() + 0.5 < was.min()
     {

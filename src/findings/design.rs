@@ -11,7 +11,10 @@ use crate::design::model::member::Period;
 use crate::text::Span;
 
 fn place(design: &Design, at: MemberAt, span: Span) -> Place {
-    Place { path: Arc::clone(&design.files[at.file].path), span: design.member(at).place(span) }
+    Place {
+        path: Arc::clone(&design.files[at.file].path),
+        span: design.member(at).place(span),
+    }
 }
 
 /// Every finding between members; outcomes in the order of the design's members.
@@ -33,7 +36,10 @@ fn duplicates(design: &Design, out: &mut Vec<Finding>) {
             if let Some(mut finding) = Finding::new("duplicate-mark", place(design, *at, span), message) {
                 finding.mark = Some(name.clone());
                 let other = design.member(*first).value().mark.span().unwrap_or_default();
-                finding.notes.push(Note { text: "it stands here first".to_owned(), place: Some(place(design, *first, other)) });
+                finding.notes.push(Note {
+                    text: "it stands here first".to_owned(),
+                    place: Some(place(design, *first, other)),
+                });
                 out.push(finding);
             }
         }
@@ -47,16 +53,32 @@ fn unused(design: &Design, out: &mut Vec<Finding>) {
         let member = design.member(*at).value();
         let keys = design.inherited(member);
         groups.extend(keys.get(|k| &k.group).value().map(String::as_str));
-        products.extend(keys.get(|k| &k.protection).value().and_then(|p| p.product.as_ref()).map(|p| p.value.as_str()));
+        products.extend(
+            keys.get(|k| &k.protection)
+                .value()
+                .and_then(|p| p.product.as_ref())
+                .map(|p| p.value.as_str()),
+        );
     }
     for file in &design.files {
-        let at = |item_base: u32, span: Span| Place { path: Arc::clone(&file.path), span: span.shift(item_base) };
-        for item in file.groups.iter().filter(|item| !groups.contains(item.value().name.value.as_str())) {
+        let at = |item_base: u32, span: Span| Place {
+            path: Arc::clone(&file.path),
+            span: span.shift(item_base),
+        };
+        for item in file
+            .groups
+            .iter()
+            .filter(|item| !groups.contains(item.value().name.value.as_str()))
+        {
             let name = &item.value().name;
             let message = format!("no member is of the group `{}`", name.value);
             out.extend(Finding::new("unused-group", at(item.base, name.span), message));
         }
-        for item in file.products.iter().filter(|item| !products.contains(item.value().name.value.as_str())) {
+        for item in file
+            .products
+            .iter()
+            .filter(|item| !products.contains(item.value().name.value.as_str()))
+        {
             let name = &item.value().name;
             let message = format!("no member uses the product `{}`", name.value);
             out.extend(Finding::new("unused-product", at(item.base, name.span), message));
@@ -73,11 +95,17 @@ fn supports(design: &Design, outcomes: &[Arc<Outcome>], index: &FxHashMap<Member
             Some(Period::Of(time)) => Some(time.min()),
             _ => None,
         };
-        let named = [("supported by", &member.keys.supported_by), ("steadies", &member.keys.steadies)];
+        let named = [
+            ("supported by", &member.keys.supported_by),
+            ("steadies", &member.keys.steadies),
+        ];
         for (key, given) in named {
             for name in given.value().into_iter().flatten() {
                 let Some(other) = design.marks.get(&name.value) else {
-                    let message = format!("{mark} is said to be held to `{}` (`{key}`), but no member carries that mark", name.value);
+                    let message = format!(
+                        "{mark} is said to be held to `{}` (`{key}`), but no member carries that mark",
+                        name.value
+                    );
                     if let Some(mut finding) = Finding::new("unknown-mark", place(design, *at, name.span), message) {
                         finding.mark = Some(mark.clone());
                         finding.key = Some(key.to_owned());
@@ -88,7 +116,9 @@ fn supports(design: &Design, outcomes: &[Arc<Outcome>], index: &FxHashMap<Member
                 if key != "supported by" {
                     continue;
                 }
-                let Some(support) = index.get(other).map(|n| &outcomes[*n]) else { continue };
+                let Some(support) = index.get(other).map(|n| &outcomes[*n]) else {
+                    continue;
+                };
                 let mut add = |finding: &str, message: String| {
                     if let Some(mut finding) = Finding::new(finding, place(design, *at, name.span), message) {
                         finding.mark = Some(mark.clone());
@@ -157,7 +187,13 @@ fn cycles(design: &Design, out: &mut Vec<Finding>) {
                 path.pop();
                 continue;
             }
-            let names = design.member(here).value().keys.supported_by.value().map_or(&[][..], Vec::as_slice);
+            let names = design
+                .member(here)
+                .value()
+                .keys
+                .supported_by
+                .value()
+                .map_or(&[][..], Vec::as_slice);
             let Some(name) = names.get(*next) else {
                 done.insert(here);
                 on_path.remove(&here);
@@ -165,7 +201,9 @@ fn cycles(design: &Design, out: &mut Vec<Finding>) {
                 continue;
             };
             *next += 1;
-            let Some(to) = design.marks.get(&name.value).copied() else { continue };
+            let Some(to) = design.marks.get(&name.value).copied() else {
+                continue;
+            };
             if on_path.contains(&to) {
                 let message = format!("`{}` closes a circle of members that support each other", name.value);
                 out.extend(Finding::new("support-cycle", place(design, here, name.span), message));

@@ -7,33 +7,33 @@ use jiff::civil::Date;
 use super::finding::{Finding, Fix, FixEdit, Place};
 use crate::analysis::design::{Design, MemberAt};
 use crate::analysis::exposure::{ShieldDoubt, reached};
-use crate::analysis::inputs::row_of;
-use crate::analysis::names::lookup_options;
 use crate::analysis::outcome::{Gap, LimitFrom, Outcome, ProtectedState, Verdict};
-use crate::design::model::member::{Environment, Period, Protection, SectionChoice, Surface};
+use crate::design::model::member::{Environment, Period, Protection, Surface};
 use crate::heating::fire::Fire;
 use crate::protection::product::Kind;
 use crate::protection::requirement::Refusal;
-use crate::section::catalogue::family_neighbours;
-use crate::section::{Casing, Exposure, heated};
+use crate::section::Exposure;
 use crate::text::Span;
 use crate::units::{Length, SectionFactor, significant};
 
 /// A member with all that its findings are made from.
-struct Context<'a> {
-    design: &'a Design,
-    at: MemberAt,
-    outcome: &'a Outcome,
-    mark: String,
+pub(super) struct Context<'a> {
+    pub(super) design: &'a Design,
+    pub(super) at: MemberAt,
+    pub(super) outcome: &'a Outcome,
+    pub(super) mark: String,
     out: &'a mut Vec<Finding>,
 }
 
 impl Context<'_> {
     /// Adds a finding at a key's value in the member itself, or at its mark.
-    fn add(&mut self, name: &str, key: &'static str, span: Option<Span>, message: String) {
+    pub(super) fn add(&mut self, name: &str, key: &'static str, span: Option<Span>, message: String) {
         let item = self.design.member(self.at);
         let span = span.or_else(|| item.value().mark.span()).unwrap_or_default();
-        let place = Place { path: Arc::clone(&self.design.files[self.at.file].path), span: item.place(span) };
+        let place = Place {
+            path: Arc::clone(&self.design.files[self.at.file].path),
+            span: item.place(span),
+        };
         if let Some(mut finding) = Finding::new(name, place, message) {
             finding.mark = Some(self.mark.clone());
             finding.key = Some(key.to_owned());
@@ -41,21 +41,36 @@ impl Context<'_> {
         }
     }
 
-    fn fix(&mut self, title: String, span: Span, text: String) {
+    pub(super) fn fix(&mut self, title: String, span: Span, text: String) {
         let item = self.design.member(self.at);
-        let place = Place { path: Arc::clone(&self.design.files[self.at.file].path), span: item.place(span) };
+        let place = Place {
+            path: Arc::clone(&self.design.files[self.at.file].path),
+            span: item.place(span),
+        };
         if let Some(finding) = self.out.last_mut() {
-            finding.fixes.push(Fix { title, safe: false, edits: vec![FixEdit { place, text }] });
+            finding.fixes.push(Fix {
+                title,
+                safe: false,
+                edits: vec![FixEdit { place, text }],
+            });
         }
     }
 }
 
-fn factor(value: SectionFactor) -> String {
-    format!("{:.0} 1/m (V/A {} mm)", value.per_m(), significant(value.effective_thickness().mm(), 1))
+pub(super) fn factor(value: SectionFactor) -> String {
+    format!(
+        "{:.0} 1/m (V/A {} mm)",
+        value.per_m(),
+        significant(value.effective_thickness().mm(), 1)
+    )
 }
 
 fn thickness(value: Length, film: bool) -> String {
-    if film { format!("{:.0} µm", value.um().ceil()) } else { format!("{} mm", significant(value.mm(), 1)) }
+    if film {
+        format!("{:.0} µm", (value.um() - 1e-6).ceil())
+    } else {
+        format!("{} mm", significant(value.mm(), 1))
+    }
 }
 
 /// Every finding of one member.
@@ -63,10 +78,20 @@ pub fn member(design: &Design, at: MemberAt, outcome: &Outcome, on: Date, out: &
     let member = design.member(at).value();
     let keys = design.inherited(member);
     let mark = member.mark.value().cloned().unwrap_or_else(|| "this member".to_owned());
-    let mut cx = Context { design, at, outcome, mark, out };
+    let mut cx = Context {
+        design,
+        at,
+        outcome,
+        mark,
+        out,
+    };
     let own = &member.keys;
     if !member.broken {
-        for key in outcome.gaps.iter().filter_map(|gap| if let Gap::Unread(key) = gap { Some(*key) } else { None }) {
+        for key in outcome
+            .gaps
+            .iter()
+            .filter_map(|gap| if let Gap::Unread(key) = gap { Some(*key) } else { None })
+        {
             let absent = match key {
                 "role" => keys.get(|k| &k.role).given.is_absent(),
                 "section" => keys.get(|k| &k.section).given.is_absent(),
@@ -85,12 +110,19 @@ pub fn member(design: &Design, at: MemberAt, outcome: &Outcome, on: Date, out: &
     let exposure = keys.get(|k| &k.exposure).value().copied().unwrap_or(Exposure::AllRound);
     if let Some(doubt) = reached(exposure, shield).doubt {
         let why = match doubt {
-            ShieldDoubt::NotStated => "nothing is said to cover the rest: state `shielded by` (computed as stated, κ1 = 1)".to_owned(),
+            ShieldDoubt::NotStated => {
+                "nothing is said to cover the rest: state `shielded by` (computed as stated, κ1 = 1)".to_owned()
+            }
             ShieldDoubt::NoShield => "bare sheeting or nothing is no shield: computed all round".to_owned(),
             ShieldDoubt::LowContact(share) => {
-                format!("the deck touches {:.0} % of the flange, less than 85 %, and its voids are not filled: computed all round", 100.0 * share)
+                format!(
+                    "the deck touches {:.0} % of the flange, less than 85 %, and its voids are not filled: computed all round",
+                    100.0 * share
+                )
             }
-            ShieldDoubt::VoidsOpen => "the deck's contact is not stated and its voids are not filled: computed all round".to_owned(),
+            ShieldDoubt::VoidsOpen => {
+                "the deck's contact is not stated and its voids are not filled: computed all round".to_owned()
+            }
         };
         let message = format!("{} is exposed on part of its faces, but {why}", cx.mark);
         cx.add("shield-not-stated", "exposure", own.exposure.span(), message);
@@ -117,14 +149,23 @@ pub fn member(design: &Design, at: MemberAt, outcome: &Outcome, on: Date, out: &
     }
     let fire_name = keys.get(|k| &k.fire).value().map_or("standard", String::as_str);
     fire(&mut cx, fire_name, own.fire.span());
-    if matches!(keys.get(|k| &k.surface).value(), Some(Surface::GalvanisedTo { category: 'A' | 'B' })) {
-        let message = format!("{} is computed with an emissivity of 0.35 up to 500 °C for its declared zinc coating", cx.mark);
+    if matches!(
+        keys.get(|k| &k.surface).value(),
+        Some(Surface::GalvanisedTo { category: 'A' | 'B' })
+    ) {
+        let message = format!(
+            "{} is computed with an emissivity of 0.35 up to 500 °C for its declared zinc coating",
+            cx.mark
+        );
         cx.add("galvanised-benefit-claimed", "surface", own.surface.span(), message);
     }
     let Some(minutes) = period else { return };
     let protection = keys.get(|k| &k.protection).value();
     let environment = keys.get(|k| &k.environment).value().copied();
-    match (&outcome.protected, protection.and_then(|p| p.product.as_ref().map(|name| (p, name)))) {
+    match (
+        &outcome.protected,
+        protection.and_then(|p| p.product.as_ref().map(|name| (p, name))),
+    ) {
         (Some(state), Some((stated, name))) => {
             protected(&mut cx, state, stated, &name.value, minutes);
             product(&mut cx, &name.value, environment, on);
@@ -139,15 +180,26 @@ fn gaps(cx: &mut Context<'_>, loading: Option<Span>) {
         match gap {
             Gap::Unread(_) => {}
             Gap::Missing(key) => {
-                let message = format!("{} has no `{key}` in its `loading`, which its resistance in fire depends on", cx.mark);
+                let message = format!(
+                    "{} has no `{key}` in its `loading`, which its resistance in fire depends on",
+                    cx.mark
+                );
                 cx.add("missing-key", key, loading, message);
             }
             Gap::FailsCold(utilisation) => {
-                let message = format!("{} fails at once: its load in fire is {utilisation:.2} of its resistance at 20 °C", cx.mark);
+                let message = format!(
+                    "{} fails at once: its load in fire is {utilisation:.2} of its resistance at 20 °C",
+                    cx.mark
+                );
                 cx.add("ambient-check-fails", "loading", loading, message);
             }
+            // Where no period is wanted no temperature is either.
+            Gap::CriticalTemperature(_) if cx.outcome.verdict == Verdict::NoPeriod => {}
             Gap::CriticalTemperature(why) => {
-                let message = format!("{} is not verified: its critical temperature is unknown, for {why}", cx.mark);
+                let message = format!(
+                    "{} is not verified: its critical temperature is unknown, for {why}",
+                    cx.mark
+                );
                 cx.add("critical-temperature-unknown", "loading", loading, message);
             }
             Gap::NotCovered { key, why } => {
@@ -166,7 +218,10 @@ fn gaps(cx: &mut Context<'_>, loading: Option<Span>) {
         cx.add("critical-temperature-assumed", "loading", loading, message);
     }
     if critical.governing.contains("class 4") {
-        let message = format!("{} is class 4 in fire, so at most 350 °C is taken ({})", cx.mark, critical.governing);
+        let message = format!(
+            "{} is class 4 in fire, so at most 350 °C is taken ({})",
+            cx.mark, critical.governing
+        );
         cx.add("class-4-temperature", "section", loading, message);
     }
 }
@@ -174,12 +229,18 @@ fn gaps(cx: &mut Context<'_>, loading: Option<Span>) {
 fn fire(cx: &mut Context<'_>, name: &str, span: Option<Span>) {
     match cx.design.fires.get(name).and_then(Option::as_deref) {
         Some(Fire::SlowHeating) => {
-            let message = format!("{} is computed in slow heating, which is a test exposure and no design fire", cx.mark);
+            let message = format!(
+                "{} is computed in slow heating, which is a test exposure and no design fire",
+                cx.mark
+            );
             cx.add("fire-outside-validity", "fire", span, message);
         }
         Some(Fire::Parametric(parametric)) => {
             for breach in parametric.outside_validity() {
-                let message = format!("{}: the fire `{name}` is outside its validity: {}, {} is covered", cx.mark, breach.what, breach.bound);
+                let message = format!(
+                    "{}: the fire `{name}` is outside its validity: {}, {} is covered",
+                    cx.mark, breach.what, breach.bound
+                );
                 cx.add("fire-outside-validity", "fire", span, message);
             }
         }
@@ -188,7 +249,8 @@ fn fire(cx: &mut Context<'_>, name: &str, span: Option<Span>) {
 }
 
 fn bare(cx: &mut Context<'_>, minutes: f64) {
-    let (Some(critical), Some(state), Some(section)) = (&cx.outcome.critical, cx.outcome.bare, &cx.outcome.section) else {
+    let (Some(critical), Some(state), Some(section)) = (&cx.outcome.critical, cx.outcome.bare, &cx.outcome.section)
+    else {
         return;
     };
     if cx.outcome.verdict != Verdict::Fails {
@@ -205,13 +267,23 @@ fn bare(cx: &mut Context<'_>, minutes: f64) {
 }
 
 fn protected(cx: &mut Context<'_>, state: &ProtectedState, stated: &Protection, name: &str, minutes: f64) {
-    let Some(section) = cx.outcome.section.clone() else { return };
-    let limit = cx.outcome.critical.as_ref().map_or(0.0, |critical| critical.protected.celsius());
-    let film = cx.design.product(name).and_then(|(_, item)| item.value().product.clone()).is_some_and(|p| p.kind == Kind::Coating);
+    let Some(section) = cx.outcome.section.clone() else {
+        return;
+    };
+    let limit = cx
+        .outcome
+        .critical
+        .as_ref()
+        .map_or(0.0, |critical| critical.protected.celsius());
+    let film = cx
+        .design
+        .product(name)
+        .and_then(|(_, item)| item.value().product.clone())
+        .is_some_and(|p| p.kind == Kind::Coating);
     let own = cx.design.member(cx.at).value();
     let span = own.keys.protection.span();
     match &state.requirement {
-        Err(Refusal::TooSlender { .. }) => too_slender(cx, state, name, minutes, limit, section.factor),
+        Err(Refusal::TooSlender { .. }) => super::slender::too_slender(cx, state, name, minutes, limit, section.factor),
         Err(refusal @ (Refusal::OutsideRange { .. } | Refusal::OrientationNotAssessed(_))) => {
             let message = format!("{} lies outside what `{name}` was assessed for: {refusal}", cx.mark);
             cx.add("outside-assessed-range", "protection", span, message);
@@ -251,20 +323,36 @@ fn protected(cx: &mut Context<'_>, state: &ProtectedState, stated: &Protection, 
             if let (true, Some(provided)) = (state.stated, state.provided) {
                 stated_thickness(cx, needed.exact, next, provided, stated, (name, film, minutes, limit));
             }
-            if let Some(reading) = stated.reading.value().filter(|reading| reading.mm() < needed.exact.mm()) {
+            if let Some(reading) = stated
+                .reading
+                .value()
+                .filter(|reading| reading.mm() < needed.exact.mm())
+            {
                 let message = format!(
                     "{}: the measured film of {} is below the {} needed",
                     cx.mark,
                     thickness(*reading, true),
                     thickness(needed.exact, true)
                 );
-                cx.add("reading-below-required", "reading", stated.reading.span().filter(|_| span.is_some()), message);
+                cx.add(
+                    "reading-below-required",
+                    "reading",
+                    stated.reading.span().filter(|_| span.is_some()),
+                    message,
+                );
             }
             if film && state.layers.is_some_and(|coats| coats > 3) {
-                let message = format!("{} takes {} coats of `{name}`", cx.mark, state.layers.unwrap_or_default());
+                let message = format!(
+                    "{} takes {} coats of `{name}`",
+                    cx.mark,
+                    state.layers.unwrap_or_default()
+                );
                 cx.add("too-many-coats", "protection", span, message);
             }
-            let lasts_bare = cx.outcome.bare.is_some_and(|bare| bare.resistance.is_none_or(|time| time.min() >= minutes));
+            let lasts_bare = cx
+                .outcome
+                .bare
+                .is_some_and(|bare| bare.resistance.is_none_or(|time| time.min() >= minutes));
             if lasts_bare {
                 let message = format!("{} would last its {minutes:.0} min bare", cx.mark);
                 cx.add("protection-not-needed", "protection", span, message);
@@ -283,10 +371,16 @@ fn stated_thickness(
     (name, film, minutes, limit): (&str, bool, f64, f64),
 ) {
     let own = cx.design.member(cx.at).value().keys.protection.span();
-    let value = if film { stated.dft.span() } else { stated.thickness.span() };
+    let value = if film {
+        stated.dft.span()
+    } else {
+        stated.thickness.span()
+    };
     let span = value.filter(|_| own.is_some());
     if provided.mm() + 1e-9 < exact.mm() {
-        let next_words = next.map_or(String::new(), |next| format!("; the next stock is {}", thickness(next, film)));
+        let next_words = next.map_or(String::new(), |next| {
+            format!("; the next stock is {}", thickness(next, film))
+        });
         let message = format!(
             "{}: {} of `{name}` is too thin for {minutes:.0} min at {limit:.0} °C; it needs {}{next_words}",
             cx.mark,
@@ -297,8 +391,16 @@ fn stated_thickness(
         let single = stated.thickness.value().is_none_or(|layers| layers.len() == 1)
             && stated.layers.value().copied().unwrap_or(1) == 1;
         if let (Some(span), Some(next), true) = (span, next, single) {
-            let text = if film { significant(next.um(), 0) } else { significant(next.mm(), 3) };
-            cx.fix(format!("use the next stock thickness, {}", thickness(next, film)), span, text);
+            let text = if film {
+                significant(next.um(), 0)
+            } else {
+                significant(next.mm(), 3)
+            };
+            cx.fix(
+                format!("use the next stock thickness, {}", thickness(next, film)),
+                span,
+                text,
+            );
         }
     } else if next.is_some_and(|next| provided.mm() > next.mm() + 1e-6) {
         let message = format!(
@@ -312,54 +414,25 @@ fn stated_thickness(
     }
 }
 
-fn too_slender(cx: &mut Context<'_>, state: &ProtectedState, name: &str, minutes: f64, limit: f64, own: SectionFactor) {
-    let member = cx.design.member(cx.at).value();
-    let keys = cx.design.inherited(member);
-    let choice = keys.get(|k| &k.section).value();
-    let row = row_of(choice, &lookup_options(cx.design.basis()));
-    let called = match (row, choice) {
-        (Some(row), _) => row.designation.to_string(),
-        (None, Some(SectionChoice::Designation(text))) => text.clone(),
-        _ => "the section".to_owned(),
-    };
-    let holds = match state.largest_factor {
-        Some(largest) => format!("holds at most {:.0} 1/m at {limit:.0} °C", largest.per_m()),
-        None => format!("holds nothing for so long at {limit:.0} °C"),
-    };
-    let casing = if cx.outcome.section.as_ref().is_some_and(|s| s.box_factor == Some(s.factor)) { Casing::Box } else { Casing::Profile };
-    let shield = keys.get(|k| &k.shield).value().copied();
-    let exposure = reached(keys.get(|k| &k.exposure).value().copied().unwrap_or(Exposure::AllRound), shield).exposure;
-    let better = state.largest_factor.and_then(|largest| {
-        let row = row?;
-        family_neighbours(row).into_iter().filter(|other| other.mass.kg_m() > row.mass.kg_m()).find_map(|other| {
-            let factor = heated(other.geometry(), exposure, casing).ok()?.factor;
-            (factor.per_m() <= largest.per_m()).then_some((other, factor))
-        })
-    });
-    let nearest = better.map_or(String::new(), |(other, factor)| {
-        format!(". The nearest of the family that it holds is {} ({:.0} 1/m)", other.designation, factor.per_m())
-    });
-    let message = format!(
-        "{} is too slender to protect at {minutes:.0} min: {called} has {}, but `{name}` {holds}{nearest}",
-        cx.mark,
-        factor(own)
-    );
-    let span = member.keys.section.span();
-    cx.add("too-slender-to-protect", "section", span, message);
-    if let (Some(span), Some((other, _)), Some(SectionChoice::Designation(_))) = (span, better, member.keys.section.value()) {
-        cx.fix(format!("swap to {}", other.designation), span, other.designation.to_string());
-    }
-}
-
 fn product(cx: &mut Context<'_>, name: &str, environment: Option<Environment>, on: Date) {
-    let Some((_, item)) = cx.design.product(name) else { return };
+    let Some((_, item)) = cx.design.product(name) else {
+        return;
+    };
     let named = item.value();
     let span = cx.design.member(cx.at).value().keys.protection.span();
-    let coating = named.product.as_ref().is_some_and(|product| product.kind == Kind::Coating);
+    let coating = named
+        .product
+        .as_ref()
+        .is_some_and(|product| product.kind == Kind::Coating);
     if let (Some(wanted), Some(serves), true) = (environment, named.environment, coating) {
         // A coating for a more severe environment serves the milder ones.
         if serves > wanted {
-            let message = format!("{} stands in {}, but `{name}` serves in {} at most", cx.mark, wanted.words(), serves.words());
+            let message = format!(
+                "{} stands in {}, but `{name}` serves in {} at most",
+                cx.mark,
+                wanted.words(),
+                serves.words()
+            );
             cx.add("coating-environment", "protection", span, message);
         }
     }

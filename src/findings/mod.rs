@@ -6,3 +6,4 @@ pub mod finding;
 pub mod member;
 pub mod reading;
 pub mod registry;
+mod slender;

@@ -33,19 +33,35 @@ const fn name_of(kind: SlipKind) -> &'static str {
 }
 
 fn slip_finding(path: &Arc<PathBuf>, slip: Slip, mark: Option<&str>) -> Option<Finding> {
-    let place = |span| Place { path: Arc::clone(path), span };
+    let place = |span| Place {
+        path: Arc::clone(path),
+        span,
+    };
     let mut finding = Finding::new(name_of(slip.kind), place(slip.span), slip.message)?;
     finding.mark = mark.map(str::to_owned);
     finding.key = slip.key.map(std::borrow::Cow::into_owned);
-    finding.notes =
-        slip.remarks.into_iter().map(|remark| Note { text: remark.text, place: remark.span.map(place) }).collect();
+    finding.notes = slip
+        .remarks
+        .into_iter()
+        .map(|remark| Note {
+            text: remark.text,
+            place: remark.span.map(place),
+        })
+        .collect();
     finding.fixes = slip
         .repairs
         .into_iter()
         .map(|repair| Fix {
             title: repair.title,
             safe: repair.safe,
-            edits: repair.edits.into_iter().map(|edit| FixEdit { place: place(edit.span), text: edit.text }).collect(),
+            edits: repair
+                .edits
+                .into_iter()
+                .map(|edit| FixEdit {
+                    place: place(edit.span),
+                    text: edit.text,
+                })
+                .collect(),
         })
         .collect();
     Some(finding)
@@ -57,20 +73,38 @@ fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -
         ErrorKind::Limit => "out-of-bounds",
         ErrorKind::NotYaml => "unreadable-yaml",
     };
-    let place = |span| Place { path: Arc::clone(path), span };
+    let place = |span| Place {
+        path: Arc::clone(path),
+        span,
+    };
     let mut finding = Finding::new(name, place(error.span), error.message)?;
     finding.mark = mark.map(str::to_owned);
     if let Some(repair) = error.repair {
-        let edit = FixEdit { place: place(repair.span), text: repair.text };
-        finding.fixes.push(Fix { title: repair.title, safe: false, edits: vec![edit] });
+        let edit = FixEdit {
+            place: place(repair.span),
+            text: repair.text,
+        };
+        finding.fixes.push(Fix {
+            title: repair.title,
+            safe: false,
+            edits: vec![edit],
+        });
     }
     Some(finding)
 }
 
 fn item_findings<T>(path: &Arc<PathBuf>, item: &Item<T>, mark: Option<&str>, out: &mut Vec<Finding>) {
     let Decoded { slips, errors, .. } = &*item.decoded;
-    out.extend(errors.iter().filter_map(|error| syntax_finding(path, error.clone().shifted(item.base), mark)));
-    out.extend(slips.iter().filter_map(|slip| slip_finding(path, slip.clone().shifted(item.base), mark)));
+    out.extend(
+        errors
+            .iter()
+            .filter_map(|error| syntax_finding(path, error.clone().shifted(item.base), mark)),
+    );
+    out.extend(
+        slips
+            .iter()
+            .filter_map(|slip| slip_finding(path, slip.clone().shifted(item.base), mark)),
+    );
 }
 
 /// Every finding of reading in a design.
@@ -78,12 +112,30 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
     let options = lookup_options(design.basis());
     for (index, file) in design.files.iter().enumerate() {
         let path = &file.path;
-        out.extend(file.errors.iter().filter_map(|error| syntax_finding(path, error.clone(), None)));
-        out.extend(file.slips.iter().filter_map(|slip| slip_finding(path, slip.clone(), None)));
+        out.extend(
+            file.errors
+                .iter()
+                .filter_map(|error| syntax_finding(path, error.clone(), None)),
+        );
+        out.extend(
+            file.slips
+                .iter()
+                .filter_map(|slip| slip_finding(path, slip.clone(), None)),
+        );
         if file.head.part_of.value().is_some() && index > 0 {
             for key in &file.head.head_only {
-                let message = format!("`{}` belongs to the head file; a part carries members and groups", key.value);
-                out.extend(Finding::new("unknown-key", Place { path: Arc::clone(path), span: key.span }, message));
+                let message = format!(
+                    "`{}` belongs to the head file; a part carries members and groups",
+                    key.value
+                );
+                out.extend(Finding::new(
+                    "unknown-key",
+                    Place {
+                        path: Arc::clone(path),
+                        span: key.span,
+                    },
+                    message,
+                ));
             }
         }
         let mut slips = Vec::new();
@@ -92,7 +144,11 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
         for item in &file.groups {
             item_findings(path, item, None, out);
             names::check(&item.value().keys, design, &options, &mut slips);
-            out.extend(slips.drain(..).filter_map(|slip| slip_finding(path, slip.shifted(item.base), None)));
+            out.extend(
+                slips
+                    .drain(..)
+                    .filter_map(|slip| slip_finding(path, slip.shifted(item.base), None)),
+            );
         }
         for item in &file.products {
             item_findings(path, item, None, out);
@@ -101,7 +157,11 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
             let mark = item.value().mark.value().map(String::as_str);
             item_findings(path, item, mark, out);
             names::check(&item.value().keys, design, &options, &mut slips);
-            out.extend(slips.drain(..).filter_map(|slip| slip_finding(path, slip.shifted(item.base), mark)));
+            out.extend(
+                slips
+                    .drain(..)
+                    .filter_map(|slip| slip_finding(path, slip.shifted(item.base), mark)),
+            );
         }
     }
     links(design, out);
@@ -111,19 +171,34 @@ fn links(design: &Design, out: &mut Vec<Finding>) {
     for trouble in &design.troubles {
         let written = &trouble.written;
         let (name, message) = match &trouble.kind {
-            LinkKind::Path(PathTrouble::Outside(how)) => {
-                ("library-outside-workspace", format!("`{written}` leads out of the workspace {how}"))
-            }
+            LinkKind::Path(PathTrouble::Outside(how)) => (
+                "library-outside-workspace",
+                format!("`{written}` leads out of the workspace {how}"),
+            ),
             LinkKind::Path(PathTrouble::Missing) => ("unreadable-library", format!("there is no file `{written}`")),
-            LinkKind::Path(PathTrouble::Unreadable(why)) => ("unreadable-library", format!("`{written}` can't be read: {why}")),
+            LinkKind::Path(PathTrouble::Unreadable(why)) => {
+                ("unreadable-library", format!("`{written}` can't be read: {why}"))
+            }
             LinkKind::Read(why) => ("unreadable-library", format!("`{written}` can't be read: {why}")),
             LinkKind::Cycle => ("library-cycle", format!("`{written}` closes a cycle of files")),
-            LinkKind::OtherKind(_) => ("unreadable-library", format!("`{written}` is a file of another kind than is wanted here")),
-            LinkKind::PartNamesNoHead => ("part-not-listed", format!("`{written}` does not name this file by `part of`")),
-            LinkKind::HeadListsNoPart => ("part-not-listed", format!("`{written}` does not list this file under `parts`")),
+            LinkKind::OtherKind(_) => (
+                "unreadable-library",
+                format!("`{written}` is a file of another kind than is wanted here"),
+            ),
+            LinkKind::PartNamesNoHead => (
+                "part-not-listed",
+                format!("`{written}` does not name this file by `part of`"),
+            ),
+            LinkKind::HeadListsNoPart => (
+                "part-not-listed",
+                format!("`{written}` does not list this file under `parts`"),
+            ),
             LinkKind::TwoHeads(other) => ("part-not-listed", format!("`{written}` belongs to `{other}` too")),
         };
-        let place = Place { path: Arc::clone(&design.files[trouble.file].path), span: trouble.span };
+        let place = Place {
+            path: Arc::clone(&design.files[trouble.file].path),
+            span: trouble.span,
+        };
         out.extend(Finding::new(name, place, message));
     }
 }

@@ -39,12 +39,22 @@ pub fn classify(shape: &Shape, fy: Stress, action: Action) -> Option<Classified>
     let e = epsilon(fy);
     let size = |name: &str| shape.dimension(name).map_or(0.0, |length| length.mm());
     let part = |name: &str, ratio: f64, limits: [f64; 3]| {
-        let class = limits.iter().position(|limit| ratio <= limit * e).map_or(4, |at| at as u8 + 1);
+        let class = limits
+            .iter()
+            .position(|limit| ratio <= limit * e)
+            .map_or(4, |at| at as u8 + 1);
         let bound = limits[usize::from(class.clamp(1, 3)) - 1];
         let sign = if class == 4 { ">" } else { "≤" };
-        Classified { class, governing: format!("{name} c/t {ratio:.1} {sign} {bound}ε = {:.1}", bound * e) }
+        Classified {
+            class,
+            governing: format!("{name} c/t {ratio:.1} {sign} {bound}ε = {:.1}", bound * e),
+        }
     };
-    let internal = if action == Action::Compression { INTERNAL_COMPRESSION } else { INTERNAL_BENDING };
+    let internal = if action == Action::Compression {
+        INTERNAL_COMPRESSION
+    } else {
+        INTERNAL_BENDING
+    };
     let worst = |parts: Vec<Classified>| parts.into_iter().max_by_key(|part| part.class);
     match shape {
         Shape::I(_) | Shape::TaperI(_) => {
@@ -58,8 +68,16 @@ pub fn classify(shape: &Shape, fy: Stress, action: Action) -> Option<Classified>
             let (tw, weld) = (i.tw.mm(), i.weld.mm());
             worst(vec![
                 part("flange", ((i.b_top.mm() - tw) / 2.0 - weld) / i.tf_top.mm(), OUTSTAND),
-                part("flange", ((i.b_bottom.mm() - tw) / 2.0 - weld) / i.tf_bottom.mm(), OUTSTAND),
-                part("web", (i.h.mm() - i.tf_top.mm() - i.tf_bottom.mm() - 2.0 * weld) / tw, internal),
+                part(
+                    "flange",
+                    ((i.b_bottom.mm() - tw) / 2.0 - weld) / i.tf_bottom.mm(),
+                    OUTSTAND,
+                ),
+                part(
+                    "web",
+                    (i.h.mm() - i.tf_top.mm() - i.tf_bottom.mm() - 2.0 * weld) / tw,
+                    internal,
+                ),
             ])
         }
         Shape::Channel(_) | Shape::TaperChannel(_) => {
@@ -84,7 +102,11 @@ pub fn classify(shape: &Shape, fy: Stress, action: Action) -> Option<Classified>
         }
         Shape::Angle(a) => {
             let (h, b, t) = (a.h.mm(), a.b.mm(), a.t.mm());
-            let class = if h.max(b) / t <= 15.0 * e && (h + b) / (2.0 * t) <= 11.5 * e { 3 } else { 4 };
+            let class = if h.max(b) / t <= 15.0 * e && (h + b) / (2.0 * t) <= 11.5 * e {
+                3
+            } else {
+                4
+            };
             let governing = format!("leg h/t {:.1} against 15ε = {:.1}", h.max(b) / t, 15.0 * e);
             Some(Classified { class, governing })
         }
@@ -95,7 +117,10 @@ pub fn classify(shape: &Shape, fy: Stress, action: Action) -> Option<Classified>
                 part("stem", (h - tf - r) / tw, OUTSTAND),
             ])
         }
-        Shape::Flat(_) | Shape::Round(_) => Some(Classified { class: 1, governing: "solid".to_owned() }),
+        Shape::Flat(_) | Shape::Round(_) => Some(Classified {
+            class: 1,
+            governing: "solid".to_owned(),
+        }),
         Shape::Stated(_) => None,
     }
 }

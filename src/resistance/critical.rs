@@ -80,7 +80,9 @@ pub fn from_utilisation(mu: f64) -> Result<Temperature, Unverified> {
         return Err(Unverified::FailsCold(mu));
     }
     let mu = mu.max(LEAST_UTILISATION);
-    Ok(Temperature::from_celsius(39.19 * (1.0 / (0.9674 * mu.powf(3.833)) - 1.0).ln() + 482.0))
+    Ok(Temperature::from_celsius(
+        39.19 * (1.0 / (0.9674 * mu.powf(3.833)) - 1.0).ln() + 482.0,
+    ))
 }
 
 /// ηfi = (Gk + ψ Qk)/(γG Gk + γQ Qk), EN 1993-1-2:2005 (2.5), ξ reducing the permanent action.
@@ -111,7 +113,11 @@ fn meets(load: f64, resistance: impl Fn(f64) -> f64) -> Result<Temperature, Unve
     }
     while high - low > 1e-4 {
         let middle = 0.5 * (low + high);
-        if resistance(middle) >= load { low = middle } else { high = middle }
+        if resistance(middle) >= load {
+            low = middle
+        } else {
+            high = middle
+        }
     }
     Ok(Temperature::from_celsius(low))
 }
@@ -123,8 +129,16 @@ fn meets(load: f64, resistance: impl Fn(f64) -> f64) -> Result<Temperature, Unve
 pub fn critical_temperature(member: &Member, loading: Loading) -> Result<Limit, Unverified> {
     let compression = member.compression || matches!(loading, Loading::Compression(..));
     let tension = member.tension || matches!(loading, Loading::Tension(_));
-    let action = if compression { Action::Compression } else { Action::Bending };
-    let class = if tension { None } else { classify(&member.shape, member.fy, action) };
+    let action = if compression {
+        Action::Compression
+    } else {
+        Action::Bending
+    };
+    let class = if tension {
+        None
+    } else {
+        classify(&member.shape, member.fy, action)
+    };
     let number = class.as_ref().map(|class| class.class);
     let properties = member.shape.properties().ok().flatten();
     let both = |t: Temperature, clause: &str| Limit {
@@ -146,9 +160,13 @@ pub fn critical_temperature(member: &Member, loading: Loading) -> Result<Limit, 
             let t = compression_limit(member, force, y, z.unwrap_or(y), properties.as_ref().ok_or(NO_FIGURES)?)?;
             both(t.0, t.1)
         }
-        Loading::Bending(moment, continuous) => {
-            bending_limit(member, moment, continuous, properties.as_ref().ok_or(NO_FIGURES)?, number)?
-        }
+        Loading::Bending(moment, continuous) => bending_limit(
+            member,
+            moment,
+            continuous,
+            properties.as_ref().ok_or(NO_FIGURES)?,
+            number,
+        )?,
     };
     if number == Some(4) {
         let governing = format!(
@@ -156,7 +174,12 @@ pub fn critical_temperature(member: &Member, loading: Loading) -> Result<Limit, 
             class.map(|class| class.governing).unwrap_or_default()
         );
         let held = |t: Temperature| Temperature::from_celsius(t.celsius().min(CLASS_4));
-        return Ok(Limit { bare: held(limit.bare), protected: held(limit.protected), governing, class: number });
+        return Ok(Limit {
+            bare: held(limit.bare),
+            protected: held(limit.protected),
+            governing,
+            class: number,
+        });
     }
     Ok(limit)
 }
@@ -205,7 +228,11 @@ fn bending_limit(
     let modulus = match class {
         Some(1 | 2) => properties.wpl_y_mm3,
         Some(3 | 4) => properties.wel_y_mm3,
-        _ => return Err(Unverified::NotCovered("the cross-section class in bending is not known")),
+        _ => {
+            return Err(Unverified::NotCovered(
+                "the cross-section class in bending is not known",
+            ));
+        }
     };
     let cold = modulus * member.fy.mpa() / 1e6 / member.gamma_m_fi;
     if moment.knm().abs() > cold {
@@ -213,9 +240,20 @@ fn bending_limit(
     }
     let kappa2 = if continuous { 0.85 } else { 1.0 };
     let at = |kappa1: f64| {
-        meets(moment.knm().abs(), |celsius| cold * (yield_factor(celsius) / (kappa1 * kappa2)).min(1.0))
+        meets(moment.knm().abs(), |celsius| {
+            cold * (yield_factor(celsius) / (kappa1 * kappa2)).min(1.0)
+        })
     };
-    let (bare, protected) = if member.slab { (at(0.70)?, at(0.85)?) } else { (at(1.0)?, at(1.0)?) };
+    let (bare, protected) = if member.slab {
+        (at(0.70)?, at(0.85)?)
+    } else {
+        (at(1.0)?, at(1.0)?)
+    };
     let governing = "EN 1993-1-2 4.2.3.3 (4.8), (4.10), bending, laterally restrained".to_owned();
-    Ok(Limit { bare, protected, governing, class })
+    Ok(Limit {
+        bare,
+        protected,
+        governing,
+        class,
+    })
 }

@@ -10,7 +10,10 @@ use scorchline::section::catalogue::{Lookup, LookupOptions, find};
 use scorchline::units::{Force, Length, Stress};
 
 fn close(found: f64, wanted: f64, tolerance: f64, what: &str) {
-    assert!((found - wanted).abs() <= tolerance, "{what}: found {found}, wanted {wanted} ± {tolerance}");
+    assert!(
+        (found - wanted).abs() <= tolerance,
+        "{what}: found {found}, wanted {wanted} ± {tolerance}"
+    );
 }
 
 fn shape(name: &str) -> Shape {
@@ -24,10 +27,25 @@ fn shape(name: &str) -> Shape {
 /// printed truncated.
 #[test]
 fn cte_table_d2() {
-    for (t, ky) in [(400.0, 1.0), (500.0, 0.78), (600.0, 0.47), (700.0, 0.23), (800.0, 0.11), (900.0, 0.06), (1000.0, 0.04)] {
+    for (t, ky) in [
+        (400.0, 1.0),
+        (500.0, 0.78),
+        (600.0, 0.47),
+        (700.0, 0.23),
+        (800.0, 0.11),
+        (900.0, 0.06),
+        (1000.0, 0.04),
+    ] {
         close(yield_factor(t), ky, 1e-12, "ky");
     }
-    for (t, root) in [(200.0, 1.05), (300.0, 1.11), (400.0, 1.19), (500.0, 1.14), (600.0, 1.23), (700.0, 1.33)] {
+    for (t, root) in [
+        (200.0, 1.05),
+        (300.0, 1.11),
+        (400.0, 1.19),
+        (500.0, 1.14),
+        (600.0, 1.23),
+        (700.0, 1.33),
+    ] {
         close((yield_factor(t) / modulus_factor(t)).sqrt(), root, 0.0101, "√(ky/kE)");
     }
 }
@@ -35,7 +53,15 @@ fn cte_table_d2() {
 /// EN 1993-1-2:2005 Table 4.1. Status: from memory, rounded to whole degrees.
 #[test]
 fn table_4_1() {
-    for (mu, t) in [(0.22, 711.0), (0.30, 664.0), (0.40, 620.0), (0.50, 585.0), (0.60, 554.0), (0.70, 526.0), (0.80, 496.0)] {
+    for (mu, t) in [
+        (0.22, 711.0),
+        (0.30, 664.0),
+        (0.40, 620.0),
+        (0.50, 585.0),
+        (0.60, 554.0),
+        (0.70, 526.0),
+        (0.80, 496.0),
+    ] {
         close(from_utilisation(mu).unwrap().celsius(), t, 0.8, "(4.22)");
     }
     assert_eq!(from_utilisation(1.2), Err(Unverified::FailsCold(1.2)));
@@ -50,7 +76,10 @@ fn load_factor() {
 /// EN 1993-1-2:2005 4.2.3.2. Status: formula from memory, values computed.
 #[test]
 fn buckling_factors() {
-    let table = [(355.0, [0.40225, 0.42558, 0.38766, 0.35058]), (235.0, [0.37446, 0.39579, 0.36115, 0.32737])];
+    let table = [
+        (355.0, [0.40225, 0.42558, 0.38766, 0.35058]),
+        (235.0, [0.37446, 0.39579, 0.36115, 0.32737]),
+    ];
     for (fy, values) in table {
         for (t, chi) in [400.0, 500.0, 600.0, 700.0].into_iter().zip(values) {
             close(buckling_factor(1.0, Stress::from_mpa(fy), t), chi, 6e-6, "χ");
@@ -88,7 +117,10 @@ fn he_200_b_in_compression() {
 fn ipe_360_is_class_4_in_compression() {
     let fy = Stress::from_mpa(355.0);
     let class = classify(&shape("IPE 360"), fy, Action::Compression).unwrap();
-    assert_eq!((class.class, class.governing.as_str()), (4, "web c/t 37.3 > 42ε = 29.0"));
+    assert_eq!(
+        (class.class, class.governing.as_str()),
+        (4, "web c/t 37.3 > 42ε = 29.0")
+    );
     assert!(classify(&shape("IPE 360"), fy, Action::Bending).unwrap().class < 3);
     assert_eq!(column("IPE 360", 355.0, 100.0, 1.0).unwrap().protected.celsius(), 350.0);
 }
@@ -107,6 +139,9 @@ fn slender_columns_fail_below_500() {
             let holds = buckling_factor(slenderness, fy, t) * yield_factor(t) >= 0.65 * cold;
             if holds { low = t } else { high = t }
         }
-        assert!(low < 500.0 && (low - wanted).abs() < 25.0, "λ {slenderness}: {low}, wanted about {wanted}");
+        assert!(
+            low < 500.0 && (low - wanted).abs() < 25.0,
+            "λ {slenderness}: {low}, wanted about {wanted}"
+        );
     }
 }

@@ -1,0 +1,4 @@
+//! Forms in which results leave: JSON, CSV, tables.
+
+pub mod json;
+pub mod table;

@@ -1,0 +1,3 @@
+//! Reports as plain data.
+
+pub mod schedule;
