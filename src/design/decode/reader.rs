@@ -9,6 +9,9 @@ use crate::syntax::{Entry, Node, Scalar, Style, Value};
 use crate::text::{Span, Spanned};
 use crate::units::{QuantityError, parse_duration, parse_quantity};
 
+/// The longest name or remark that is read, bytes: messages repeat them.
+const LONGEST_TEXT: usize = 2000;
+
 /// Collects what is wrong while values are read.
 #[derive(Debug, Default)]
 pub struct Reader {
@@ -143,6 +146,16 @@ impl Reader {
     /// Text, kept as it is written.
     pub fn text(&mut self, node: &Node, key: &'static Key) -> Given<String> {
         match self.scalar(node, key) {
+            Some(scalar) if scalar.text.len() > LONGEST_TEXT => {
+                let message = format!(
+                    "`{}` has {} bytes of text; at most {LONGEST_TEXT} are read",
+                    key.name,
+                    scalar.text.len()
+                );
+                self.slips
+                    .push(Slip::new(SlipKind::OutOfBounds, node.span, message).at_key(key.name));
+                Given::unreadable(node.span)
+            }
             Some(scalar) => Given::new(scalar.text.clone(), node.span),
             None => Given::unreadable(node.span),
         }
