@@ -13,7 +13,9 @@ const TOLERANCE: f64 = 20.0;
 const LONGEST: f64 = 20_000.0;
 /// Smallest step, s: below it the step is taken whatever its error.
 const SHORTEST: f64 = 1e-4;
-/// First step, s.
+/// How far behind its start the first rate of a step is taken, s.
+const BEHIND: f64 = 1e-6;
+/// First step, s, and after every corner of the curve.
 const FIRST: f64 = 1.0;
 
 thread_local! {
@@ -82,8 +84,10 @@ pub fn march(piece: &impl Heated, until: f64, mut each: impl FnMut(Step) -> Go) 
     let mut size = FIRST;
     for kink in kinks {
         let end = kink.min(until);
+        size = size.min(FIRST);
         while t < end {
-            let rate = piece.rate(t, heat.temperature(h));
+            // Right behind a corner of the curve its slope is that of the new branch.
+            let rate = piece.rate(t + BEHIND, heat.temperature(h));
             size = size.min(LONGEST / rate.abs().max(1e-9));
             let mut landing = None;
             if let Some(target) = next_landing(&landings, h, rate) {
@@ -139,7 +143,7 @@ fn next_landing(landings: &[f64], h: f64, rate: f64) -> Option<f64> {
 #[must_use]
 pub fn time_within(piece: &impl Heated, step: Step, wanted: f64) -> f64 {
     let heat = piece.specific_heat();
-    let rate = piece.rate(step.from, heat.temperature(step.enthalpy_from));
+    let rate = piece.rate(step.from + BEHIND, heat.temperature(step.enthalpy_from));
     let (mut low, mut high) = (0.0, step.to - step.from);
     let (mut h_low, mut h_high) = (step.enthalpy_from - wanted, step.enthalpy_to - wanted);
     for _ in 0..60 {
