@@ -1,4 +1,5 @@
 //! Forms in which results leave: JSON, CSV, tables.
 
 pub mod json;
+pub mod schema;
 pub mod table;
