@@ -150,20 +150,34 @@ fn sides(exposure: Exposure, role: Option<Role>) -> u8 {
 
 /// The critical temperature with the cross-section class.
 fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result<(Critical, Option<u8>), Unverified> {
-    let bare = matches!(inputs.cover, Cover::Bare);
     if let Some(stated) = inputs.stated {
+        let by_loading = inputs
+            .loading
+            .as_ref()
+            .and_then(|loading| by_loading(inputs, loading, section, geometry).ok());
         let critical = Critical {
             as_built: stated,
             bare: stated,
             protected: stated,
+            by_loading: by_loading.as_ref().map(|(critical, _)| critical.as_built),
             from: LimitFrom::Stated,
             governing: "stated".to_owned(),
         };
-        return Ok((critical, None));
+        return Ok((critical, by_loading.and_then(|(_, class)| class)));
     }
-    let Some(loading) = &inputs.loading else {
-        return default_limit(inputs);
-    };
+    match &inputs.loading {
+        Some(loading) => by_loading(inputs, loading, section, geometry),
+        None => default_limit(inputs),
+    }
+}
+
+fn by_loading(
+    inputs: &Inputs,
+    loading: &crate::design::model::member::Loading,
+    section: &SectionInput,
+    geometry: &Geometry,
+) -> Result<(Critical, Option<u8>), Unverified> {
+    let bare = matches!(inputs.cover, Cover::Bare);
     let role = inputs.role.unwrap_or(Role::Beam);
     let member = critical::Member {
         shape: section.shape,
@@ -178,6 +192,7 @@ fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result
         as_built: if bare { limit.bare } else { limit.protected },
         bare: limit.bare,
         protected: limit.protected,
+        by_loading: None,
         from: LimitFrom::Loading,
         governing: limit.governing,
     };
@@ -193,6 +208,7 @@ fn default_limit(inputs: &Inputs) -> Result<(Critical, Option<u8>), Unverified> 
                 as_built: t,
                 bare: t,
                 protected: t,
+                by_loading: None,
                 from: LimitFrom::Default,
                 governing: "the named default of the basis of design".to_owned(),
             },

@@ -64,6 +64,8 @@ pub struct Critical {
     pub bare: Temperature,
     /// If it were protected.
     pub protected: Temperature,
+    /// What the loading gives, where a temperature is stated beside a loading that it can be worked out from.
+    pub by_loading: Option<Temperature>,
     /// Where it comes from.
     pub from: LimitFrom,
     /// The clause that set it.

@@ -217,6 +217,19 @@ fn gaps(cx: &mut Context<'_>, loading: Option<Span>) {
         );
         cx.add("critical-temperature-assumed", "loading", loading, message);
     }
+    if let Some(derived) = critical
+        .by_loading
+        .filter(|derived| critical.as_built.celsius() > derived.celsius() + 0.5)
+    {
+        let message = format!(
+            "{} states a critical temperature of {:.0} °C, but its loading gives {:.0} °C",
+            cx.mark,
+            critical.as_built.celsius(),
+            derived.celsius()
+        );
+        let span = cx.design.member(cx.at).value().keys.critical_temperature.span();
+        cx.add("critical-temperature-too-high", "critical temperature", span, message);
+    }
     if critical.governing.contains("class 4") {
         let message = format!(
             "{} is class 4 in fire, so at most 350 °C is taken ({})",

@@ -314,6 +314,20 @@ pub static REGISTRY: &[Declaration] = &[
         "Take a stronger section.",
     ),
     declare(
+        "critical-temperature-too-high",
+        Error,
+        "EN 1993-1-2 4.2.4",
+        "The critical temperature stated is above the one that the loading gives.",
+        "State the lower one, or correct the loading.",
+    ),
+    declare(
+        "profile-board",
+        Warning,
+        PRACTICE,
+        "A board follows the profile instead of boxing it in.",
+        "Use the box form, unless the board is made for it.",
+    ),
+    declare(
         "section-factor-low",
         Information,
         "EN 1993-1-2 4.2.5.1 (5)",

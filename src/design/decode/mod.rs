@@ -8,3 +8,4 @@ pub mod member;
 pub mod protection;
 pub mod reader;
 pub mod section;
+mod typing;
