@@ -1,5 +1,5 @@
 //! Source: Australian design capacity tables for open sections, DCT/V1/03-1999, Tables 3.2-1(B) to 3.2-10(B): exposed
-//! surface area to mass ratio ksm in m²/t with a mass of 7850 A. Status: published (read in a transcription).
+//! surface area to mass ratio ksm in m²/t with a mass of 7850 A. Status: published (read in a typed copy).
 //! Tolerance: 0.6 %, for the tables print three digits of rounded perimeters.
 
 use crate::support::within;
