@@ -137,7 +137,7 @@ fn snippet(design: &Checked, finding: &Finding, lines: &[LineIndex], color: bool
     let mut text = String::new();
     let handler = GraphicalReportHandler::new_themed(theme)
         .with_width(110)
-        .with_context_lines(0);
+        .with_context_lines(1);
     if handler.render_report(&mut text, report.as_ref()).is_err() {
         text.clone_from(&finding.message);
     }
