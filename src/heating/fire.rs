@@ -117,8 +117,7 @@ impl Fire {
             Self::Standard => 20.0 + 345.0 * (8.0 * t + 1.0).log10(),
             Self::External => 20.0 + 660.0 * (1.0 - 0.687 * (-0.32 * t).exp() - 0.313 * (-3.8 * t).exp()),
             Self::Hydrocarbon => 20.0 + 1080.0 * (1.0 - 0.325 * (-0.167 * t).exp() - 0.675 * (-2.5 * t).exp()),
-            Self::SlowHeating if t <= SLOW_END => 20.0 + 154.0 * t.sqrt().sqrt(),
-            Self::SlowHeating => 20.0 + 345.0 * (8.0 * (t - 20.0) + 1.0).log10(),
+            Self::SlowHeating => slow_heating(t),
             Self::Parametric(fire) => fire.gas_celsius(t),
             Self::Points(points) => points.gas(t),
         }
@@ -134,6 +133,9 @@ impl Fire {
             Self::Hydrocarbon => 1080.0 * (0.325 * 0.167 * (-0.167 * t).exp() + 0.675 * 2.5 * (-2.5 * t).exp()),
             // The curve starts vertically; the first second stands for it.
             Self::SlowHeating if t <= SLOW_END => 38.5 * t.max(1.0 / 60.0).powf(-0.75),
+            Self::SlowHeating if t <= SLOW_JOINED => {
+                (slow_heating(SLOW_JOINED) - slow_heating(SLOW_END)) / (SLOW_JOINED - SLOW_END)
+            }
             Self::SlowHeating => log10_rate(t - 20.0),
             Self::Parametric(fire) => fire.gas_rate(t),
             Self::Points(points) => points.rate(t),
@@ -173,7 +175,7 @@ impl Fire {
     /// Minutes at which the curve has a corner; a march lands on each.
     pub(super) fn kinks(&self) -> Vec<f64> {
         match self {
-            Self::SlowHeating => vec![SLOW_END],
+            Self::SlowHeating => vec![SLOW_END, SLOW_JOINED],
             Self::Parametric(fire) => fire.kinks(),
             Self::Points(points) => points.points.iter().map(|point| point.0).filter(|t| *t > 0.0).collect(),
             _ => Vec::new(),
@@ -183,6 +185,22 @@ impl Fire {
 
 /// Where the slow heating curve goes over to the standard one, min.
 const SLOW_END: f64 = 21.0;
+/// The two branches miss each other by 0.44 °C there. (4.27) counts a fall of the gas, however short, so it is taken
+/// as a straight line over these 60 ms.
+const SLOW_JOINED: f64 = SLOW_END + 1e-3;
+
+fn slow_heating(t: f64) -> f64 {
+    let late = |t: f64| 20.0 + 345.0 * (8.0 * (t - 20.0) + 1.0).log10();
+    let early = |t: f64| 20.0 + 154.0 * t.sqrt().sqrt();
+    if t <= SLOW_END {
+        early(t)
+    } else if t >= SLOW_JOINED {
+        late(t)
+    } else {
+        let share = (t - SLOW_END) / (SLOW_JOINED - SLOW_END);
+        early(SLOW_END) + share * (late(SLOW_JOINED) - early(SLOW_END))
+    }
+}
 
 impl Eq for Fire {}
 

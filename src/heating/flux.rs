@@ -3,7 +3,7 @@
 use std::hash::{Hash, Hasher};
 
 use super::fire::Fire;
-use super::march::{Go, Heated, march, time_within};
+use super::march::{Go, Heated, Step, march, time_within};
 use super::steel::{DENSITY, SpecificHeat};
 use crate::units::{Conductivity, Density, Length, SectionFactor, SpecificHeat as HeatCapacity, Temperature, Time};
 
@@ -154,8 +154,6 @@ pub struct Protected<'a> {
     insulation: &'a Insulation,
     factor: f64,
     thickness: f64,
-    /// When the steel starts to warm, s.
-    start: f64,
     /// How long the steel is held at 100 °C, s.
     delay: f64,
 }
@@ -168,16 +166,13 @@ impl<'a> Protected<'a> {
         let delay = insulation
             .moisture_delay
             .map_or(0.0, |percent| 60.0 * moisture_delay(insulation, thickness, percent));
-        let mut piece = Self {
+        Self {
             fire,
             insulation,
             factor: factor.per_m(),
             thickness,
-            start: 0.0,
             delay,
-        };
-        piece.start = piece.first_warming();
-        piece
+        }
     }
 
     /// (4.27) as a rate of enthalpy, before it is held at zero.
@@ -194,62 +189,75 @@ impl<'a> Protected<'a> {
         inflow - heat * ((phi / 10.0).exp() - 1.0) * self.fire.gas_rate(minutes) / 60.0
     }
 
-    /// When the rate first turns positive. Until then the rise of the gas is taken up by the protection, and (4.27)
-    /// holds the steel at its temperature.
-    fn first_warming(&self) -> f64 {
-        let positive = |t: f64| self.raw_rate(t, 20.0) > 0.0;
-        let mut before = 0.0;
-        let mut t = 1.0;
-        while !positive(t) && t < 60.0 * HORIZON {
-            before = t;
-            t *= 1.25;
-        }
-        let mut after = t;
-        while after - before > 1e-3 {
-            let middle = 0.5 * (before + after);
-            if positive(middle) {
-                after = middle
-            } else {
-                before = middle
-            }
-        }
-        after
+    /// (4.27) as a rate of enthalpy, W/kg: not below zero while the gas heats, for the protection takes up that heat.
+    fn rate(&self, seconds: f64, celsius: f64) -> f64 {
+        let raw = self.raw_rate(seconds, celsius);
+        let heating = self.fire.gas_rate(seconds / 60.0) > 0.0;
+        if heating { raw.max(0.0) } else { raw }
     }
 
     /// The highest steel temperature up to a time. It is that at the time itself unless the fire cools.
     #[must_use]
     pub fn hottest_until(&self, time: Time) -> Temperature {
-        let mut top: f64 = 0.0;
-        self.run(time.s(), |_, _, h| {
-            top = top.max(h);
-            Go::On
-        });
-        Temperature::from_celsius(SpecificHeat::En1993.temperature(top))
+        celsius(self.top(time).1)
     }
 
-    /// Marches, holding the steel at 100 °C for the moisture delay; shows each step's start, its piece and its end.
-    fn run(&self, until: f64, mut each: impl FnMut(super::march::Step, f64, f64) -> Go) {
+    /// When the steel is hottest within 360 min, and how hot; for fires that never cool that is the end.
+    #[must_use]
+    pub fn peak(&self) -> (Time, Temperature) {
+        let (seconds, h) = self.top(Time::from_min(HORIZON));
+        (Time::from_s(seconds), celsius(h))
+    }
+
+    /// When the enthalpy is highest up to a time, s, and how high, J/kg.
+    fn top(&self, time: Time) -> (f64, f64) {
+        let mut top = (0.0, 0.0);
+        self.run(time.s(), |_, step| {
+            if step.enthalpy_to > top.1 {
+                top = (step.to, step.enthalpy_to);
+            }
+            Go::On
+        });
+        top
+    }
+
+    /// Marches, holding the steel at 100 °C for the moisture delay; shows each step with what was marched.
+    fn run(&self, until: f64, mut each: impl FnMut(&Stage<'_>, Step) -> Go) {
+        let mut stage = Stage {
+            piece: self,
+            start: 0.0,
+            enthalpy: 0.0,
+        };
         if self.delay <= 0.0 {
-            march(self, until, |step| each(step, 0.0, step.enthalpy_to));
+            march(&stage, until, |step| each(&stage, step));
             return;
         }
         let held = SpecificHeat::En1993.enthalpy(100.0);
         let mut reached = None;
-        march(self, until, |step| {
+        let mut stopped = false;
+        march(&stage, until, |step| {
+            let mut step = step;
             if step.enthalpy_to >= held {
-                reached = Some(time_within(self, step, held));
-                return Go::Stop;
+                step.to = time_within(&stage, step, held);
+                step.enthalpy_to = held;
+                reached = Some(step.to);
             }
-            each(step, 0.0, step.enthalpy_to)
+            stopped = each(&stage, step) == Go::Stop;
+            if stopped || reached.is_some() { Go::Stop } else { Go::On }
         });
-        let Some(reached) = reached else { return };
-        let after = After {
-            piece: self,
-            start: reached + self.delay,
-            base: held,
+        let Some(reached) = reached.filter(|_| !stopped) else {
+            return;
         };
-        if after.start < until {
-            march(&after, until, |step| each(step, held, held + step.enthalpy_to));
+        stage.start = (reached + self.delay).min(until);
+        stage.enthalpy = held;
+        let waiting = Step {
+            from: reached,
+            enthalpy_from: held,
+            to: stage.start,
+            enthalpy_to: held,
+        };
+        if each(&stage, waiting) == Go::On && stage.start < until {
+            march(&stage, until, |step| each(&stage, step));
         }
     }
 
@@ -257,27 +265,11 @@ impl<'a> Protected<'a> {
     #[must_use]
     pub fn temperature_at(&self, time: Time) -> Temperature {
         let mut last = 0.0;
-        let mut held = false;
-        self.run(time.s(), |_, base, h| {
-            held = base > 0.0;
-            last = h;
+        self.run(time.s(), |_, step| {
+            last = step.enthalpy_to;
             Go::On
         });
-        if self.delay > 0.0 && !held {
-            last = last.max(self.at_hold(time));
-        }
-        Temperature::from_celsius(SpecificHeat::En1993.temperature(last))
-    }
-
-    /// The enthalpy at 100 °C if the steel is held there at a time, else 0.
-    fn at_hold(&self, time: Time) -> f64 {
-        let held = SpecificHeat::En1993.enthalpy(100.0);
-        let mut reached = false;
-        march(self, time.s(), |step| {
-            reached = step.enthalpy_to >= held;
-            if reached { Go::Stop } else { Go::On }
-        });
-        if reached { held } else { 0.0 }
+        celsius(last)
     }
 
     /// The time at which the steel first reaches a temperature; `None` if not within 360 min.
@@ -285,19 +277,9 @@ impl<'a> Protected<'a> {
     pub fn time_to(&self, temperature: Temperature) -> Option<Time> {
         let wanted = SpecificHeat::En1993.enthalpy(temperature.celsius());
         let mut found = None;
-        self.run(60.0 * HORIZON, |step, base, h| {
-            if h >= wanted {
-                let seconds = if base > 0.0 {
-                    let after = After {
-                        piece: self,
-                        start: step.from,
-                        base,
-                    };
-                    time_within(&after, step, wanted - base)
-                } else {
-                    time_within(self, step, wanted)
-                };
-                found = Some(Time::from_s(seconds));
+        self.run(60.0 * HORIZON, |stage, step| {
+            if step.enthalpy_to >= wanted {
+                found = Some(Time::from_s(time_within(stage, step, wanted)));
                 return Go::Stop;
             }
             Go::On
@@ -306,18 +288,16 @@ impl<'a> Protected<'a> {
     }
 }
 
-/// Protected steel after its moisture has gone: the same rates from 100 °C on.
-struct After<'a> {
+/// Protected steel from some moment on.
+struct Stage<'a> {
     piece: &'a Protected<'a>,
     start: f64,
-    base: f64,
+    enthalpy: f64,
 }
 
-impl Heated for After<'_> {
+impl Heated for Stage<'_> {
     fn rate(&self, seconds: f64, celsius: f64) -> f64 {
-        // The march counts enthalpy from its own start; the temperature is that of the sum.
-        let sum = SpecificHeat::En1993.enthalpy(celsius) + self.base;
-        self.piece.rate(seconds, SpecificHeat::En1993.temperature(sum))
+        self.piece.rate(seconds, celsius)
     }
 
     fn specific_heat(&self) -> SpecificHeat {
@@ -325,40 +305,16 @@ impl Heated for After<'_> {
     }
 
     fn kinks(&self) -> Vec<f64> {
-        self.piece
-            .kinks()
-            .into_iter()
-            .filter(|kink| *kink > self.start)
-            .collect()
+        let kinks = self.piece.fire.kinks().into_iter().map(|minutes| 60.0 * minutes);
+        kinks.filter(|kink| *kink > self.start).collect()
     }
 
     fn start(&self) -> f64 {
         self.start
     }
-}
 
-impl Heated for Protected<'_> {
-    fn rate(&self, seconds: f64, celsius: f64) -> f64 {
-        let raw = self.raw_rate(seconds, celsius);
-        let heating = self.fire.gas_rate(seconds / 60.0) > 0.0;
-        if heating { raw.max(0.0) } else { raw }
-    }
-
-    fn specific_heat(&self) -> SpecificHeat {
-        SpecificHeat::En1993
-    }
-
-    fn kinks(&self) -> Vec<f64> {
-        self.fire
-            .kinks()
-            .into_iter()
-            .map(|minutes| 60.0 * minutes)
-            .filter(|kink| *kink > self.start)
-            .collect()
-    }
-
-    fn start(&self) -> f64 {
-        self.start
+    fn start_enthalpy(&self) -> f64 {
+        self.enthalpy
     }
 }
 
@@ -391,19 +347,33 @@ impl Bare<'_> {
         found
     }
 
-    /// When the steel is hottest, and how hot; for fires that never cool that is the end of 360 min.
+    /// The highest steel temperature up to a time. It is that at the time itself unless the fire cools.
+    #[must_use]
+    pub fn hottest_until(&self, time: Time) -> Temperature {
+        celsius(self.top(time).1)
+    }
+
+    /// When the steel is hottest within 360 min, and how hot; for fires that never cool that is the end.
     #[must_use]
     pub fn peak(&self) -> (Time, Temperature) {
+        let (seconds, h) = self.top(Time::from_min(HORIZON));
+        (Time::from_s(seconds), celsius(h))
+    }
+
+    /// When the enthalpy is highest up to a time, s, and how high, J/kg.
+    fn top(&self, time: Time) -> (f64, f64) {
         let mut top = (0.0, 0.0);
-        march(self, 60.0 * HORIZON, |step| {
+        march(self, time.s(), |step| {
             if step.enthalpy_to > top.1 {
                 top = (step.to, step.enthalpy_to);
             }
             Go::On
         });
-        (
-            Time::from_s(top.0),
-            Temperature::from_celsius(SpecificHeat::En1993.temperature(top.1)),
-        )
+        top
     }
+}
+
+/// The temperature of an enthalpy in J/kg.
+fn celsius(enthalpy: f64) -> Temperature {
+    Temperature::from_celsius(SpecificHeat::En1993.temperature(enthalpy))
 }

@@ -7,16 +7,20 @@ use std::cell::Cell;
 
 use super::steel::SpecificHeat;
 
-/// Largest error of a step, J/kg (about 0.05 °C where the specific heat is least).
-const TOLERANCE: f64 = 20.0;
+/// Largest error of a step, J/kg (about 0.01 °C where the specific heat is least).
+const TOLERANCE: f64 = 5.0;
 /// Largest change of enthalpy in a step, J/kg (at most some 45 °C).
 const LONGEST: f64 = 20_000.0;
 /// Smallest step, s: below it the step is taken whatever its error.
 const SHORTEST: f64 = 1e-4;
-/// How far behind its start the first rate of a step is taken, s.
-const BEHIND: f64 = 1e-6;
-/// First step, s, and after every corner of the curve.
+/// First step, s.
 const FIRST: f64 = 1.0;
+/// By how much a stage at either end of a step is moved inside, s: at a corner of the fire the rate jumps, and the
+/// stage has to see the side that its step lies on. The estimate of error hardly weighs the first stage, so a slope
+/// from before the corner would pass unseen.
+const INSIDE: f64 = 1e-7;
+/// Halvings that find the top of a step in which the steel turns from warming to cooling.
+const HALVINGS: usize = 16;
 
 thread_local! {
     static MARCHES: Cell<u64> = const { Cell::new(0) };
@@ -44,13 +48,19 @@ pub trait Heated {
         &[600.0, 735.0, 900.0]
     }
 
-    /// When the march begins, s: before it the steel stays at 20 °C.
+    /// When the march begins, s: before it the steel stays as it is.
     fn start(&self) -> f64 {
+        0.0
+    }
+
+    /// Enthalpy at the start, J/kg above 20 °C.
+    fn start_enthalpy(&self) -> f64 {
         0.0
     }
 }
 
-/// A step of a march: time in s and enthalpy in J/kg at both ends.
+/// A step of a march: time in s and enthalpy in J/kg at both ends. Within a step the steel is nowhere hotter than at
+/// the hotter of its ends.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub struct Step {
     /// Time at the start, s.
@@ -72,6 +82,12 @@ pub enum Go {
     Stop,
 }
 
+/// dH/dt at a time and an enthalpy; steel is not followed below 20 °C.
+fn rate_at(piece: &impl Heated, heat: SpecificHeat, t: f64, h: f64) -> f64 {
+    let rate = piece.rate(t, heat.temperature(h));
+    if h <= 0.0 { rate.max(0.0) } else { rate }
+}
+
 /// Marches to `until` s, showing every step to `each`, which may stop it. Answers the enthalpy reached.
 pub fn march(piece: &impl Heated, until: f64, mut each: impl FnMut(Step) -> Go) -> f64 {
     MARCHES.with(|count| count.set(count.get() + 1));
@@ -80,14 +96,30 @@ pub fn march(piece: &impl Heated, until: f64, mut each: impl FnMut(Step) -> Go) 
     let mut kinks = piece.kinks();
     kinks.push(until);
     let mut t = piece.start().min(until);
-    let mut h = 0.0;
+    let mut h = piece.start_enthalpy();
     let mut size = FIRST;
     for kink in kinks {
         let end = kink.min(until);
+        // Behind a corner the rate may be another: begin carefully.
         size = size.min(FIRST);
         while t < end {
-            // Right behind a corner of the curve its slope is that of the new branch.
-            let rate = piece.rate(t + BEHIND, heat.temperature(h));
+            let rate = rate_at(piece, heat, t + INSIDE, h);
+            if rate == 0.0 {
+                // Held as it is, as behind protection that takes up the heat itself: on to where that ends.
+                let to = release(|t| rate_at(piece, heat, t, h), t, end);
+                let step = Step {
+                    from: t,
+                    enthalpy_from: h,
+                    to,
+                    enthalpy_to: h,
+                };
+                t = to;
+                size = FIRST;
+                if each(step) == Go::Stop {
+                    return h;
+                }
+                continue;
+            }
             size = size.min(LONGEST / rate.abs().max(1e-9));
             let mut landing = None;
             if let Some(target) = next_landing(&landings, h, rate) {
@@ -97,25 +129,30 @@ pub fn march(piece: &impl Heated, until: f64, mut each: impl FnMut(Step) -> Go) 
                     landing = Some(target);
                 }
             }
-            let last = t + size >= end;
+            let mut last = t + size >= end;
             if last {
                 size = end - t;
             }
-            let (next, error) = pair(piece, heat, t, h, size, rate);
-            let scale = error / TOLERANCE;
+            let mut stride = pair(piece, heat, t, h, size, rate);
+            let scale = stride.error / TOLERANCE;
             if scale > 1.0 && size > SHORTEST {
                 size = (size * (0.9 * scale.powf(-0.2)).clamp(0.1, 0.9)).max(SHORTEST);
                 continue;
             }
-            let to = if last { end } else { t + size };
+            let mut taken = size;
+            if rate > 0.0 && stride.rate < 0.0 && size > SHORTEST {
+                (taken, stride) = to_top(piece, heat, (t, h), (size, stride), rate);
+                last = last && taken >= size;
+            }
+            let to = if last { end } else { t + taken };
             let step = Step {
                 from: t,
                 enthalpy_from: h,
                 to,
-                enthalpy_to: next,
+                enthalpy_to: stride.enthalpy.max(0.0),
             };
             t = to;
-            h = next;
+            h = step.enthalpy_to;
             if each(step) == Go::Stop {
                 return h;
             }
@@ -128,6 +165,57 @@ pub fn march(piece: &impl Heated, until: f64, mut each: impl FnMut(Step) -> Go) 
         }
     }
     h
+}
+
+/// When a rate that is zero ceases to be so between two corners of the fire, to 1 ms after; the end if it does not.
+/// Searched to the very end: a short flare between two corners must not be overlooked.
+fn release(rate: impl Fn(f64) -> f64, from: f64, end: f64) -> f64 {
+    let inside = end - INSIDE;
+    if inside <= from + INSIDE {
+        return end;
+    }
+    let (mut before, mut reach) = (from, FIRST);
+    loop {
+        let t = (from + reach).min(inside);
+        if rate(t) != 0.0 {
+            let mut after = t;
+            while after - before > 1e-3 {
+                let middle = 0.5 * (before + after);
+                if rate(middle) == 0.0 {
+                    before = middle;
+                } else {
+                    after = middle;
+                }
+            }
+            return after;
+        }
+        if t >= inside {
+            return end;
+        }
+        before = t;
+        reach *= 1.25;
+    }
+}
+
+/// The part of a step up to just past its top, where the rate turns negative.
+fn to_top(
+    piece: &impl Heated,
+    heat: SpecificHeat,
+    (t, h): (f64, f64),
+    (size, whole): (f64, Stride),
+    rate: f64,
+) -> (f64, Stride) {
+    let (mut low, mut high, mut stride) = (0.0, size, whole);
+    for _ in 0..HALVINGS {
+        let middle = 0.5 * (low + high);
+        let part = pair(piece, heat, t, h, middle, rate);
+        if part.rate < 0.0 {
+            (high, stride) = (middle, part);
+        } else {
+            low = middle;
+        }
+    }
+    (high, stride)
 }
 
 /// The enthalpy at which the rate has its next corner, in the direction of the march.
@@ -143,7 +231,7 @@ fn next_landing(landings: &[f64], h: f64, rate: f64) -> Option<f64> {
 #[must_use]
 pub fn time_within(piece: &impl Heated, step: Step, wanted: f64) -> f64 {
     let heat = piece.specific_heat();
-    let rate = piece.rate(step.from + BEHIND, heat.temperature(step.enthalpy_from));
+    let rate = rate_at(piece, heat, step.from + INSIDE, step.enthalpy_from);
     let (mut low, mut high) = (0.0, step.to - step.from);
     let (mut h_low, mut h_high) = (step.enthalpy_from - wanted, step.enthalpy_to - wanted);
     for _ in 0..60 {
@@ -153,7 +241,7 @@ pub fn time_within(piece: &impl Heated, step: Step, wanted: f64) -> f64 {
         // A secant held inside the bracket.
         let share = (h_low / (h_low - h_high)).clamp(0.05, 0.95);
         let middle = low + share * (high - low);
-        let h = pair(piece, heat, step.from, step.enthalpy_from, middle, rate).0 - wanted;
+        let h = pair(piece, heat, step.from, step.enthalpy_from, middle, rate).enthalpy - wanted;
         if (h > 0.0) == (h_high > 0.0) {
             (high, h_high) = (middle, h);
         } else {
@@ -163,10 +251,20 @@ pub fn time_within(piece: &impl Heated, step: Step, wanted: f64) -> f64 {
     step.from + if h_low.abs() < h_high.abs() { low } else { high }
 }
 
-/// One step of the pair of Dormand and Prince (J. Comp. Appl. Math. 6 (1980) 19, RK5(4)7M): the value of order 5 and
-/// the difference to that of order 4.
-fn pair(piece: &impl Heated, heat: SpecificHeat, t: f64, h: f64, size: f64, k1: f64) -> (f64, f64) {
-    let at = |share: f64, h: f64| piece.rate(t + share * size, heat.temperature(h));
+/// What a step of the pair comes to.
+#[derive(Clone, Copy)]
+struct Stride {
+    /// Enthalpy at its end, of order 5, J/kg.
+    enthalpy: f64,
+    /// Difference to that of order 4, J/kg.
+    error: f64,
+    /// Rate at its end, W/kg.
+    rate: f64,
+}
+
+/// One step of the pair of Dormand and Prince (J. Comp. Appl. Math. 6 (1980) 19, RK5(4)7M).
+fn pair(piece: &impl Heated, heat: SpecificHeat, t: f64, h: f64, size: f64, k1: f64) -> Stride {
+    let at = |share: f64, h: f64| rate_at(piece, heat, t + share * size, h);
     let k2 = at(0.2, h + size * 0.2 * k1);
     let k3 = at(0.3, h + size * (3.0 / 40.0 * k1 + 9.0 / 40.0 * k2));
     let k4 = at(0.8, h + size * (44.0 / 45.0 * k1 - 56.0 / 15.0 * k2 + 32.0 / 9.0 * k3));
@@ -174,18 +272,25 @@ fn pair(piece: &impl Heated, heat: SpecificHeat, t: f64, h: f64, size: f64, k1: 
         8.0 / 9.0,
         h + size * (19372.0 / 6561.0 * k1 - 25360.0 / 2187.0 * k2 + 64448.0 / 6561.0 * k3 - 212.0 / 729.0 * k4),
     );
-    let k6 = at(
-        1.0,
+    let end = t + (size - INSIDE).max(0.0);
+    let k6 = rate_at(
+        piece,
+        heat,
+        end,
         h + size
             * (9017.0 / 3168.0 * k1 - 355.0 / 33.0 * k2 + 46732.0 / 5247.0 * k3 + 49.0 / 176.0 * k4
                 - 5103.0 / 18656.0 * k5),
     );
     let next = h + size
         * (35.0 / 384.0 * k1 + 500.0 / 1113.0 * k3 + 125.0 / 192.0 * k4 - 2187.0 / 6784.0 * k5 + 11.0 / 84.0 * k6);
-    let k7 = at(1.0, next);
+    let k7 = rate_at(piece, heat, end, next);
     let error = size
         * (71.0 / 57600.0 * k1 - 71.0 / 16695.0 * k3 + 71.0 / 1920.0 * k4 - 17253.0 / 339_200.0 * k5
             + 22.0 / 525.0 * k6
             - 1.0 / 40.0 * k7);
-    (next, error.abs())
+    Stride {
+        enthalpy: next,
+        error: error.abs(),
+        rate: k7,
+    }
 }

@@ -3,6 +3,8 @@
 //! independently from the stated formula) or `memory` (of the source, not read again).
 
 mod heating;
+mod heating_grid;
+mod reference;
 mod resistance;
 mod support;
 
