@@ -258,13 +258,25 @@ fn why(name: Option<&str>) -> Result<ExitCode, Trouble> {
         return Err(format!("no finding is called `{name}`{near}"));
     };
     let text = format!(
-        "{} ({}; {})\n{}\n{}\n",
+        "{} ({}; {})\n{}\n{}\nFix: {}\n\nBefore:\n{}\n\nAfter:\n{}\n",
         found.name,
         found.severity.word(),
         found.clause,
         found.summary,
-        found.answer
+        found.answer,
+        found.fix,
+        indented(found.before),
+        indented(found.after)
     );
     write(None, &text)?;
     Ok(ExitCode::SUCCESS)
+}
+
+/// An example, set off from the text around it.
+fn indented(example: &str) -> String {
+    example
+        .lines()
+        .map(|line| format!("    {line}"))
+        .collect::<Vec<_>>()
+        .join("\n")
 }

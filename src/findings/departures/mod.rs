@@ -1,14 +1,19 @@
 //! Agreed departures: they move a finding to a list of their own and never change a verdict.
 
+pub mod departure_expired;
+pub mod departure_outgrown;
+pub mod departure_unused;
+pub mod departure_without_reason;
+
 use std::sync::Arc;
 
 use jiff::civil::Date;
 
-use super::finding::{Finding, Place, Severity};
-use super::registry;
 use crate::analysis::design::{Design, MemberAt};
 use crate::analysis::outcome::Outcome;
 use crate::design::model::member::Departure;
+use crate::findings::finding::{Finding, Place, Severity};
+use crate::findings::registry;
 
 /// Splits the findings of a member into open and agreed ones, and reports departures that don't hold.
 pub fn apply(

@@ -1,14 +1,38 @@
 //! Findings of reading: what is no YAML, what the format does not know, and paths that lead nowhere.
 
+pub mod ambiguous_section;
+pub mod duplicate_mark;
+pub mod library_cycle;
+pub mod library_outside_workspace;
+pub mod method_not_supported;
+pub mod missing_key;
+pub mod not_covered;
+pub mod out_of_bounds;
+pub mod part_not_listed;
+pub mod several_documents;
+pub mod unknown_fire;
+pub mod unknown_group;
+pub mod unknown_key;
+pub mod unknown_mark;
+pub mod unknown_product;
+pub mod unknown_section;
+pub mod unknown_steel;
+pub mod unreadable_library;
+pub mod unreadable_yaml;
+pub mod unused_group;
+pub mod unused_product;
+pub mod wrong_kind;
+pub mod wrong_unit;
+
 use std::path::PathBuf;
 use std::sync::Arc;
 
-use super::finding::{Finding, Fix, FixEdit, Note, Place};
 use crate::analysis::design::{Design, LinkKind};
 use crate::analysis::files::PathTrouble;
 use crate::analysis::names::{self, lookup_options};
 use crate::analysis::source::{Decoded, Item};
 use crate::design::slip::{Slip, SlipKind};
+use crate::findings::finding::{Finding, Fix, FixEdit, Note, Place};
 use crate::syntax::{ErrorKind, SyntaxError};
 
 /// The name of a slip's finding.

@@ -1,0 +1,16 @@
+//! The product was not assessed for the fire.
+
+use crate::findings::finding::Severity;
+use crate::findings::registry::Declaration;
+
+/// What is known of it before any design is read.
+pub static DECLARATION: Declaration = Declaration {
+    name: "fire-not-assessed",
+    severity: Severity::Error,
+    clause: "EN 13381-4, EN 13381-8: scope of the assessment",
+    summary: "The product was not assessed for the fire.",
+    answer: "Take a product that was assessed for it.",
+    fix: "None: which product serves is a choice.",
+    before: r"- { mark: B1, section: IPE 300, critical temperature: 550, fire: hydrocarbon, protection: grey board }",
+    after: r"- { mark: B1, section: IPE 300, critical temperature: 550, fire: standard, protection: grey board }",
+};

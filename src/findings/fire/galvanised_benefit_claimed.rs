@@ -1,0 +1,16 @@
+//! The lower emissivity of a declared zinc coating is used.
+
+use crate::findings::finding::Severity;
+use crate::findings::registry::Declaration;
+
+/// What is known of it before any design is read.
+pub static DECLARATION: Declaration = Declaration {
+    name: "galvanised-benefit-claimed",
+    severity: Severity::Information,
+    clause: "EN 1993-1-2, second generation",
+    summary: "The lower emissivity of a declared zinc coating is used.",
+    answer: "See that the declaration holds for what is delivered.",
+    fix: "None: nothing is wrong.",
+    before: r"- { mark: B1, section: IPE 300, critical temperature: 550, period: 15, surface: { galvanised: { to: EN ISO 1461, category: A } } }",
+    after: r"- { mark: B1, section: IPE 300, critical temperature: 550, period: 15, surface: galvanised }   # no benefit",
+};

@@ -1,0 +1,16 @@
+//! The film takes more than three coats.
+
+use crate::findings::finding::Severity;
+use crate::findings::registry::Declaration;
+
+/// What is known of it before any design is read.
+pub static DECLARATION: Declaration = Declaration {
+    name: "too-many-coats",
+    severity: Severity::Warning,
+    clause: "common practice",
+    summary: "The film takes more than three coats.",
+    answer: "Consider a heavier section or a board.",
+    fix: "None: what to take instead is a choice.",
+    before: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: red film, dft: 2400 } }   # at most 500 µm a coat",
+    after: r"- { mark: B1, section: HE 300 B, critical temperature: 550, protection: { product: red film, dft: 1400 } }",
+};

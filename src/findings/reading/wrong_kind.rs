@@ -1,0 +1,16 @@
+//! A value is of another kind than its key wants.
+
+use crate::findings::finding::Severity;
+use crate::findings::registry::Declaration;
+
+/// What is known of it before any design is read.
+pub static DECLARATION: Declaration = Declaration {
+    name: "wrong-kind",
+    severity: Severity::Error,
+    clause: "format of the design file",
+    summary: "A value is of another kind than its key wants.",
+    answer: "Write a value of the kind named.",
+    fix: "Offered where the value can be guessed, such as a word that is near.",
+    before: "- { mark: B1, section: IPE 300, count: two }",
+    after: "- { mark: B1, section: IPE 300, count: 2 }",
+};
