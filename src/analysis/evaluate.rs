@@ -151,10 +151,14 @@ fn sides(exposure: Exposure, role: Option<Role>) -> u8 {
 /// The critical temperature with the cross-section class.
 fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result<(Critical, Option<u8>), Unverified> {
     if let Some(stated) = inputs.stated {
-        let by_loading = inputs
-            .loading
-            .as_ref()
-            .and_then(|loading| by_loading(inputs, loading, section, geometry).ok());
+        let by_loading = match &inputs.loading {
+            Some(loading) => match by_loading(inputs, loading, section, geometry) {
+                // No stated temperature saves a member that fails cold.
+                Err(Unverified::FailsCold(utilisation)) => return Err(Unverified::FailsCold(utilisation)),
+                derived => derived.ok(),
+            },
+            None => None,
+        };
         let critical = Critical {
             as_built: stated,
             bare: stated,

@@ -12,6 +12,7 @@ use crate::design::model::member::{Environment, Period, Protection, Surface};
 use crate::heating::fire::Fire;
 use crate::protection::product::Kind;
 use crate::protection::requirement::Refusal;
+use crate::protection::stock::BuildUp;
 use crate::section::Exposure;
 use crate::text::Span;
 use crate::units::{Length, SectionFactor, significant};
@@ -168,9 +169,9 @@ pub fn member(design: &Design, at: MemberAt, outcome: &Outcome, on: Date, out: &
     ) {
         (Some(state), Some((stated, name))) => {
             protected(&mut cx, state, stated, &name.value, minutes);
-            product(&mut cx, &name.value, environment, on);
+            product(&mut cx, stated, &name.value, environment, on);
         }
-        (None, Some((_, name))) => product(&mut cx, &name.value, environment, on),
+        (None, Some((stated, name))) => product(&mut cx, stated, &name.value, environment, on),
         _ => bare(&mut cx, minutes),
     }
 }
@@ -322,7 +323,6 @@ fn protected(cx: &mut Context<'_>, state: &ProtectedState, stated: &Protection, 
                 );
                 cx.add("outside-assessed-range", "protection", span, message);
             }
-            let next = needed.next.as_ref().map(crate::protection::stock::BuildUp::total);
             if let (Some((least, most)), Some(provided)) = (state.outside_thickness, state.provided) {
                 let message = format!(
                     "{}: {} of `{name}` lies outside the assessed {} to {}",
@@ -334,7 +334,14 @@ fn protected(cx: &mut Context<'_>, state: &ProtectedState, stated: &Protection, 
                 cx.add("outside-assessed-range", "protection", span, message);
             }
             if let (true, Some(provided)) = (state.stated, state.provided) {
-                stated_thickness(cx, needed.exact, next, provided, stated, (name, film, minutes, limit));
+                stated_thickness(
+                    cx,
+                    needed.exact,
+                    needed.next.as_ref(),
+                    provided,
+                    stated,
+                    (name, film, minutes, limit),
+                );
             }
             if let Some(reading) = stated
                 .reading
@@ -378,7 +385,7 @@ fn protected(cx: &mut Context<'_>, state: &ProtectedState, stated: &Protection, 
 fn stated_thickness(
     cx: &mut Context<'_>,
     exact: Length,
-    next: Option<Length>,
+    next: Option<&BuildUp>,
     provided: Length,
     stated: &Protection,
     (name, film, minutes, limit): (&str, bool, f64, f64),
@@ -390,10 +397,12 @@ fn stated_thickness(
         stated.thickness.span()
     };
     let span = value.filter(|_| own.is_some());
+    let past_next = next.is_some_and(|next| provided.mm() > next.total().mm() + 1e-6);
     if provided.mm() + 1e-9 < exact.mm() {
-        let next_words = next.map_or(String::new(), |next| {
-            format!("; the next stock is {}", thickness(next, film))
-        });
+        let next_words = match next {
+            Some(next) => format!("; the next stock is {}", build_up(next, film)),
+            None => "; no build-up of its stock is so thick".to_owned(),
+        };
         let message = format!(
             "{}: {} of `{name}` is too thin for {minutes:.0} min at {limit:.0} °C; it needs {}{next_words}",
             cx.mark,
@@ -401,33 +410,47 @@ fn stated_thickness(
             thickness(exact, film)
         );
         cx.add("protection-too-thin", "thickness", span, message);
-        let single = stated.thickness.value().is_none_or(|layers| layers.len() == 1)
-            && stated.layers.value().copied().unwrap_or(1) == 1;
-        if let (Some(span), Some(next), true) = (span, next, single) {
-            let text = if film {
-                significant(next.um(), 0)
-            } else {
-                significant(next.mm(), 3)
-            };
-            cx.fix(
-                format!("use the next stock thickness, {}", thickness(next, film)),
-                span,
-                text,
-            );
-        }
-    } else if next.is_some_and(|next| provided.mm() > next.mm() + 1e-6) {
+    } else if let Some(next) = next.filter(|_| past_next) {
         let message = format!(
             "{}: {} of `{name}` is more than needed ({}); the next stock is {}",
             cx.mark,
             thickness(provided, film),
             thickness(exact, film),
-            next.map_or_else(String::new, |next| thickness(next, film))
+            build_up(next, film)
         );
         cx.add("protection-over-thick", "thickness", span, message);
+    } else {
+        return;
+    }
+    // Where `layers` multiplies the thickness, two keys would have to change together.
+    if let (Some(span), Some(next), None | Some(1)) = (span, next, stated.layers.value()) {
+        let text = match next.layers.as_slice() {
+            [film_or_layer] if film => significant(film_or_layer.um(), 0),
+            [layer] => significant(layer.mm(), 3),
+            layers => {
+                let layers: Vec<String> = layers.iter().map(|layer| significant(layer.mm(), 3)).collect();
+                format!("[{}]", layers.join(", "))
+            }
+        };
+        cx.fix(
+            format!("use the next stock thickness, {}", build_up(next, film)),
+            span,
+            text,
+        );
     }
 }
 
-fn product(cx: &mut Context<'_>, name: &str, environment: Option<Environment>, on: Date) {
+/// A build-up with its layers, where there are several: `35 mm (20 + 15)`.
+fn build_up(next: &BuildUp, film: bool) -> String {
+    let total = thickness(next.total(), film);
+    if next.layers.len() < 2 {
+        return total;
+    }
+    let layers: Vec<String> = next.layers.iter().map(|layer| significant(layer.mm(), 1)).collect();
+    format!("{total} ({})", layers.join(" + "))
+}
+
+fn product(cx: &mut Context<'_>, stated: &Protection, name: &str, environment: Option<Environment>, on: Date) {
     let Some((_, item)) = cx.design.product(name) else {
         return;
     };
@@ -447,6 +470,21 @@ fn product(cx: &mut Context<'_>, name: &str, environment: Option<Environment>, o
                 serves.words()
             );
             cx.add("coating-environment", "protection", span, message);
+        }
+    }
+    let board = named
+        .product
+        .as_ref()
+        .is_some_and(|product| product.kind == Kind::Board);
+    if board && stated.boxed.value() == Some(&false) {
+        let own = stated.boxed.span().filter(|_| span.is_some());
+        let message = format!(
+            "{}: `{name}` is a board, and boards box the section in: take the box form, or a spray that follows the profile",
+            cx.mark
+        );
+        cx.add("profile-board", "form", own, message);
+        if let Some(span) = own {
+            cx.fix("write `box`".to_owned(), span, "box".to_owned());
         }
     }
     if let Some(expires) = named.evidence.expires.as_ref().filter(|date| date.value < on) {

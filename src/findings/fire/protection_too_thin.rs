@@ -12,5 +12,5 @@ pub static DECLARATION: Declaration = Declaration {
     answer: "Take the next stock thickness.",
     fix: "Writes the next stock thickness, where the member states a single one itself.",
     before: r"- { mark: B1, section: IPE 200, critical temperature: 500, period: 90, protection: { product: grey board, thickness: 15 } }",
-    after: r"- { mark: B1, section: IPE 200, critical temperature: 500, period: 90, protection: { product: grey board, thickness: 30 } }",
+    after: r"- { mark: B1, section: IPE 200, critical temperature: 500, period: 90, protection: { product: grey board, thickness: [20, 15] } }",
 };
