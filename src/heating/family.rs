@@ -13,14 +13,17 @@ const NODES: usize = 16;
 /// A root is polished until its thickness is this exact, m (0.005 mm).
 const EXACT: f64 = 5e-6;
 
+/// The largest section factor looked for, 1/m.
+const LARGEST: f64 = 2000.0;
+
 /// What thickness is needed.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub enum Needed {
     /// This, exactly (within 0.02 mm, and never less than the root by more).
     Thickness(Length),
-    /// The thinnest of the range is more than enough.
+    /// The thinnest of the range is more than enough, and so is every thicker one.
     Thinnest,
-    /// The thickest of the range is not enough; the temperature that the steel reaches behind it.
+    /// The thickest of the range does not hold; the temperature that the steel reaches behind it.
     NotAttained(Temperature),
 }
 
@@ -72,17 +75,17 @@ impl Family {
     #[must_use]
     pub fn needed(&self, limit: Temperature) -> Needed {
         let wanted = SpecificHeat::En1993.enthalpy(limit.celsius());
-        let (first, last) = (self.nodes[0], self.nodes[self.nodes.len() - 1]);
-        if first.1 <= wanted {
+        // Behind a thick, heavy protection (4.27) gives its stored heat back while the gas cools, and steel can be hotter
+        // behind more of it. So the thickness is the one from which on every thicker node of the range holds.
+        let Some(fails) = self.nodes.iter().rposition(|node| node.1 > wanted) else {
             return Needed::Thinnest;
+        };
+        let after = fails + 1;
+        if after == self.nodes.len() {
+            return Needed::NotAttained(Temperature::from_celsius(
+                SpecificHeat::En1993.temperature(self.nodes[fails].1),
+            ));
         }
-        if last.1 > wanted {
-            return Needed::NotAttained(Temperature::from_celsius(SpecificHeat::En1993.temperature(last.1)));
-        }
-        let after = self
-            .nodes
-            .partition_point(|node| node.1 > wanted)
-            .clamp(1, self.nodes.len() - 1);
         let (mut thin, mut thick) = (self.nodes[after - 1], self.nodes[after]);
         let mut guess = self.seed(after, wanted);
         // A secant on ln d over the enthalpy, held inside the bracket.
@@ -137,8 +140,12 @@ impl Family {
     }
 }
 
-/// The largest section factor whose steel stays at or below `limit` up to the period behind a thickness; `None` where
-/// not even 1 1/m does. Looked for up to 2000 1/m.
+/// The largest section factor up to which steel stays at or below `limit` up to the period behind a thickness; `None`
+/// where not even 1 1/m does. Looked for up to 2000 1/m.
+///
+/// The temperature is not monotonic in the factor: behind heavy protection the term of (4.27) for the heat stored grows
+/// faster than the inflow, and very slender steel comes out cool again. That is beyond what the equation was made for, so
+/// factors are tried from below, a tenth more each time, and the first that fails ends the search.
 #[must_use]
 pub fn largest_factor(
     fire: &Fire,
@@ -151,12 +158,17 @@ pub fn largest_factor(
         let piece = Protected::new(fire, SectionFactor::from_per_m(factor), insulation, thickness);
         piece.hottest_until(period).celsius() <= limit.celsius()
     };
-    let (mut low, mut high) = (1.0, 2000.0);
+    let mut low = 1.0;
     if !holds(low) {
         return None;
     }
-    if holds(high) {
-        return Some(SectionFactor::from_per_m(high));
+    let mut high = 10.0;
+    while holds(high) {
+        if high >= LARGEST {
+            return Some(SectionFactor::from_per_m(LARGEST));
+        }
+        low = high;
+        high = (1.1 * high).min(LARGEST);
     }
     while high - low > 0.05 {
         let middle: f64 = 0.5 * (low + high);

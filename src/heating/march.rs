@@ -230,6 +230,9 @@ fn next_landing(landings: &[f64], h: f64, rate: f64) -> Option<f64> {
 /// The time in s within a step at which the enthalpy is `wanted`, by steps of the same pair from its start.
 #[must_use]
 pub fn time_within(piece: &impl Heated, step: Step, wanted: f64) -> f64 {
+    if step.enthalpy_to == wanted {
+        return step.to;
+    }
     let heat = piece.specific_heat();
     let rate = rate_at(piece, heat, step.from + INSIDE, step.enthalpy_from);
     let (mut low, mut high) = (0.0, step.to - step.from);
