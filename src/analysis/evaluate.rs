@@ -362,7 +362,12 @@ fn verdict(inputs: &Inputs, outcome: &Outcome, cold: bool) -> Verdict {
     if cold {
         return Verdict::Fails;
     }
-    if outcome.critical.is_none() {
+    // A stated temperature that the loading contradicts proves nothing.
+    if outcome
+        .critical
+        .as_ref()
+        .is_none_or(|critical| critical.contradicted_by().is_some())
+    {
         return Verdict::NotVerified;
     }
     if let Some(protected) = &outcome.protected {

@@ -72,6 +72,15 @@ pub struct Critical {
     pub governing: String,
 }
 
+impl Critical {
+    /// What the loading gives, where it lies below the temperature that is stated: one of the two is wrong.
+    #[must_use]
+    pub fn contradicted_by(&self) -> Option<Temperature> {
+        self.by_loading
+            .filter(|derived| self.as_built.celsius() > derived.celsius() + 0.5)
+    }
+}
+
 /// Why a member is not verified; each reads as a sentence.
 #[derive(Debug, Clone, PartialEq)]
 pub enum Gap {

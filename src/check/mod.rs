@@ -14,7 +14,7 @@ use crate::analysis::memo::Memo;
 use crate::analysis::names::lookup_options;
 use crate::analysis::outcome::Outcome;
 use crate::findings::finding::Finding;
-use crate::findings::{departures, design as across, member, reading};
+use crate::findings::{self, departures, reading};
 
 /// A design that was checked.
 #[derive(Debug)]
@@ -53,7 +53,7 @@ pub fn check(design: Design, on: Date, memo: &Memo) -> Checked {
         .collect();
     let mut findings = Vec::new();
     reading::reading(&design, &mut findings);
-    across::design(&design, &outcomes, &mut findings);
+    findings::design(&design, &outcomes, &mut findings);
     let mut by_mark: rustc_hash::FxHashMap<String, Vec<Finding>> = rustc_hash::FxHashMap::default();
     let mut open = Vec::new();
     for finding in findings {
@@ -68,7 +68,7 @@ pub fn check(design: Design, on: Date, memo: &Memo) -> Checked {
         .zip(&outcomes)
         .map(|(at, outcome)| {
             let mut own = Vec::new();
-            member::member(&design, *at, outcome, on, &mut own);
+            findings::member(&design, *at, outcome, on, &mut own);
             let mark = design.member(*at).value().mark.value();
             let first = mark.is_some_and(|mark| design.marks.get(mark) == Some(at));
             if first && let Some(more) = mark.and_then(|mark| by_mark.get(mark)) {

@@ -94,11 +94,10 @@ pub struct Finding {
 }
 
 impl Finding {
-    /// A finding of the registry; `None` for a name that it does not have.
+    /// A finding as grave as it is declared, without notes or fixes.
     #[must_use]
-    pub fn new(name: &str, place: Place, message: String) -> Option<Self> {
-        let declaration = super::registry::find(name)?;
-        Some(Self {
+    pub fn new(declaration: &'static super::registry::Declaration, place: Place, message: String) -> Self {
+        Self {
             declaration,
             severity: declaration.severity,
             message,
@@ -107,7 +106,7 @@ impl Finding {
             mark: None,
             key: None,
             fixes: Vec::new(),
-        })
+        }
     }
 
     /// The stable name: `too-slender-to-protect`.

@@ -39,16 +39,15 @@ pub fn apply(
             path: Arc::clone(&design.files[at.file].path),
             span: item.place(from.span),
         };
-        let mut add = |name: &str, message: String| {
-            if let Some(mut finding) = Finding::new(name, place.clone(), message) {
-                finding.mark = Some(mark.clone());
-                finding.key = Some("departures".to_owned());
-                own.push(finding);
-            }
+        let mut add = |declaration, message: String| {
+            let mut finding = Finding::new(declaration, place.clone(), message);
+            finding.mark = Some(mark.clone());
+            finding.key = Some("departures".to_owned());
+            own.push(finding);
         };
         let Some(declaration) = registry::find(&from.value) else {
             add(
-                "departure-unused",
+                &departure_unused::DECLARATION,
                 format!("{mark} departs from `{}`, which is no finding", from.value),
             );
             continue;
@@ -64,24 +63,24 @@ pub fn apply(
         }
         if !missing.is_empty() {
             add(
-                "departure-without-reason",
+                &departure_without_reason::DECLARATION,
                 format!("{mark}: the departure from {} lacks {}", from.value, missing.join(", ")),
             );
         } else if departure.until.value().is_some_and(|until| *until < on) {
             add(
-                "departure-expired",
+                &departure_expired::DECLARATION,
                 format!("{mark}: the departure from {} has run out", from.value),
             );
         } else if let Some(worse) = outgrown(departure, outcome) {
             add(
-                "departure-outgrown",
+                &departure_outgrown::DECLARATION,
                 format!("{mark}: the departure from {} is outgrown: {worse}", from.value),
             );
         } else if findings.iter().any(|finding| finding.name() == from.value) {
             holds[n] = true;
         } else {
             add(
-                "departure-unused",
+                &departure_unused::DECLARATION,
                 format!("{mark} departs from {}, which was not found", from.value),
             );
         }

@@ -1,5 +1,7 @@
 //! The load in fire exceeds the resistance at 20 °C.
 
+use crate::analysis::outcome::Gap;
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +16,17 @@ pub static DECLARATION: Declaration = Declaration {
     before: "- { mark: B1, section: IPE 300, loading: { utilisation: 1.2 } }",
     after: "- { mark: B1, section: IPE 300, loading: { utilisation: 0.6 } }",
 };
+
+/// A member that fails before it is heated.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let outcome = cx.outcome;
+    for gap in &outcome.gaps {
+        if let Gap::FailsCold(utilisation) = gap {
+            let message = format!(
+                "{} fails at once: its load in fire is {utilisation:.2} of its resistance at 20 °C",
+                cx.mark
+            );
+            cx.add(&DECLARATION, "loading", cx.own().loading.span(), message);
+        }
+    }
+}

@@ -1,5 +1,7 @@
 //! The bare member reaches its critical temperature before its period ends.
 
+use crate::analysis::outcome::Verdict;
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +16,26 @@ pub static DECLARATION: Declaration = Declaration {
     before: "- { mark: B1, section: IPE 300, critical temperature: 550 }",
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: grey board }",
 };
+
+/// A bare member that does not last.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let (Some(critical), Some(state), Some(section), Some(period)) =
+        (&cx.outcome.critical, cx.outcome.bare, &cx.outcome.section, cx.period)
+    else {
+        return;
+    };
+    if cx.product.is_some() || cx.outcome.protected.is_some() || cx.outcome.verdict != Verdict::Fails {
+        return;
+    }
+    let lasts = state
+        .resistance
+        .map_or_else(String::new, |time| format!(" after {:.0} min", time.min().floor()));
+    let message = format!(
+        "{} is bare and reaches its critical temperature of {}{lasts}, but must last {:.0} min: it has {}. Protect it, or take a heavier section",
+        cx.mark,
+        cx.temperature(critical.bare),
+        period.min(),
+        cx.factor(section.bare_factor)
+    );
+    cx.add(&DECLARATION, "protection", cx.own().protection.span(), message);
+}

@@ -1,7 +1,10 @@
 //! The section is class 4 in fire: 350 °C is taken.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
+use crate::resistance::critical::CLASS_4;
+use crate::units::Temperature;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -14,3 +17,17 @@ pub static DECLARATION: Declaration = Declaration {
     before: "- { mark: C1, role: column, section: IPE 360, loading: { utilisation: 0.5 } }",
     after: "- { mark: C1, role: column, section: HE 200 B, loading: { utilisation: 0.5 } }",
 };
+
+/// A member that is held to the temperature of class 4.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let governs = |critical: &&crate::analysis::outcome::Critical| critical.governing.contains("class 4");
+    if cx.outcome.critical.as_ref().filter(governs).is_none() {
+        return;
+    }
+    let message = format!(
+        "{} is class 4 in fire, so at most {} is taken: its section is too slender in itself to be followed further",
+        cx.mark,
+        cx.temperature(Temperature::from_celsius(CLASS_4))
+    );
+    cx.add(&DECLARATION, "section", cx.own().section.span(), message);
+}

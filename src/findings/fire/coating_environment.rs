@@ -1,5 +1,6 @@
 //! The coating may not serve in the member's environment.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +15,24 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: IPE 300, critical temperature: 550, environment: X, protection: red film }   # serves in Z2",
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, environment: Z2, protection: red film }",
 };
+
+/// A coating outside the environments that it serves in. One for a more severe environment serves the milder ones.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let Some(product) = cx.product.filter(|product| product.film) else {
+        return;
+    };
+    let wanted = cx.keys.get(|keys| &keys.environment).value().copied();
+    let (Some(wanted), Some(serves)) = (wanted, product.named.environment) else {
+        return;
+    };
+    if serves > wanted {
+        let message = format!(
+            "{} stands in {}, but `{}` serves in {} at most",
+            cx.mark,
+            wanted.words(),
+            product.name,
+            serves.words()
+        );
+        cx.add(&DECLARATION, "protection", cx.own().protection.span(), message);
+    }
+}

@@ -1,5 +1,7 @@
 //! The named default of the basis is taken as critical temperature.
 
+use crate::analysis::outcome::LimitFrom;
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +16,19 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: IPE 300, exposure: three sides, shielded by: slab, protection: grey board }",
     after: r"- { mark: B1, section: IPE 300, exposure: three sides, shielded by: slab, protection: grey board, loading: { utilisation: 0.6 } }",
 };
+
+/// A member that takes the named default.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let assumed = cx
+        .outcome
+        .critical
+        .as_ref()
+        .filter(|critical| critical.from == LimitFrom::Default);
+    let Some(critical) = assumed else { return };
+    let message = format!(
+        "{} states neither loading nor a critical temperature: the named default of {} is taken",
+        cx.mark,
+        cx.temperature(critical.as_built)
+    );
+    cx.add(&DECLARATION, "loading", cx.own().loading.span(), message);
+}

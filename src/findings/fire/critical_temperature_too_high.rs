@@ -1,7 +1,9 @@
 //! The critical temperature stated is above the one that the loading gives.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
+use crate::units::significant;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -14,3 +16,23 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: IPE 300, critical temperature: 650, loading: { utilisation: 0.6 }, protection: grey board }",
     after: r"- { mark: B1, section: IPE 300, loading: { utilisation: 0.6 }, protection: grey board }",
 };
+
+/// A stated temperature that the loading contradicts; the member is not verified while it does.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let Some(critical) = &cx.outcome.critical else { return };
+    let Some(derived) = critical.contradicted_by() else {
+        return;
+    };
+    let message = format!(
+        "{} is not verified: it states a critical temperature of {}, but its loading gives {}",
+        cx.mark,
+        cx.temperature(critical.as_built),
+        cx.temperature(derived)
+    );
+    let span = cx.own().critical_temperature.span();
+    cx.add(&DECLARATION, "critical temperature", span, message);
+    if let Some(span) = span {
+        let value = significant(derived.celsius().floor(), 0);
+        cx.fix(format!("state {value} °C, which the loading gives"), span, value);
+    }
+}

@@ -1,5 +1,7 @@
 //! The lower emissivity of a declared zinc coating is used.
 
+use crate::design::model::member::Surface;
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +16,15 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: IPE 300, critical temperature: 550, period: 15, surface: { galvanised: { to: EN ISO 1461, category: A } } }",
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, period: 15, surface: galvanised }   # no benefit",
 };
+
+/// A member whose zinc coating is counted on.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let surface = cx.keys.get(|keys| &keys.surface).value();
+    if matches!(surface, Some(Surface::GalvanisedTo { category: 'A' | 'B' })) {
+        let message = format!(
+            "{} is computed with an emissivity of 0.35 up to 500 °C for its declared zinc coating",
+            cx.mark
+        );
+        cx.add(&DECLARATION, "surface", cx.own().surface.span(), message);
+    }
+}

@@ -21,3 +21,30 @@ pub mod section_factor_low;
 pub mod shape_not_assessed;
 pub mod too_many_coats;
 pub mod too_slender_to_protect;
+
+use crate::findings::context::Context;
+
+/// Everything that the outcome of a member tells.
+pub(super) fn member(cx: &mut Context<'_>) {
+    ambient_check_fails::check(cx);
+    critical_temperature_unknown::check(cx);
+    critical_temperature_assumed::check(cx);
+    critical_temperature_too_high::check(cx);
+    class_4_temperature::check(cx);
+    section_factor_low::check(cx);
+    fire_outside_validity::check(cx);
+    galvanised_benefit_claimed::check(cx);
+    bare_steel_fails::check(cx);
+    too_slender_to_protect::check(cx);
+    outside_assessed_range::check(cx);
+    fire_not_assessed::check(cx);
+    shape_not_assessed::check(cx);
+    protection_too_thin::check(cx);
+    protection_over_thick::check(cx);
+    reading_below_required::check(cx);
+    too_many_coats::check(cx);
+    protection_not_needed::check(cx);
+    profile_board::check(cx);
+    coating_environment::check(cx);
+    evidence_expired::check(cx);
+}

@@ -1,7 +1,9 @@
 //! The member lies outside what was assessed, or the range is not stated.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
+use crate::protection::requirement::Refusal;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -14,3 +16,40 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: IPE 300, critical temperature: 550, period: 240, protection: grey board }   # assessed up to 180 min",
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, period: 60, protection: grey board }",
 };
+
+/// A member, or a thickness, outside what the product was assessed for.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let (Some(state), Some(product)) = (&cx.outcome.protected, cx.product) else {
+        return;
+    };
+    let (name, span) = (product.name, cx.own().protection.span());
+    match &state.requirement {
+        Err(refusal @ (Refusal::OutsideRange { .. } | Refusal::OrientationNotAssessed(_))) => {
+            let message = format!(
+                "{} is not verified, for it lies outside what `{name}` was assessed for: {refusal}",
+                cx.mark
+            );
+            cx.add(&DECLARATION, "protection", span, message);
+        }
+        Ok(needed) if !needed.unstated.is_empty() => {
+            let message = format!(
+                "{} is not verified: `{name}` states no assessed range of {}",
+                cx.mark,
+                needed.unstated.join(", ")
+            );
+            cx.add(&DECLARATION, "protection", span, message);
+        }
+        _ => {}
+    }
+    if let (Ok(_), Some((least, most)), Some(provided)) = (&state.requirement, state.outside_thickness, state.provided)
+    {
+        let message = format!(
+            "{} is not verified: {} of `{name}` lies outside the assessed {} to {}",
+            cx.mark,
+            cx.thickness(provided, product.film),
+            cx.thickness(least, product.film),
+            cx.thickness(most, product.film)
+        );
+        cx.add(&DECLARATION, "protection", span, message);
+    }
+}

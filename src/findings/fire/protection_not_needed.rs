@@ -1,5 +1,6 @@
 //! The member would last its period bare.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +15,24 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: IPE 600, critical temperature: 600, period: 15, protection: { product: grey board, thickness: 15 } }",
     after: "- { mark: B1, section: IPE 600, critical temperature: 600, period: 15 }",
 };
+
+/// A protected member that would last bare.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let (Some(_), Some(critical), Some(bare), Some(period)) =
+        (&cx.outcome.protected, &cx.outcome.critical, cx.outcome.bare, cx.period)
+    else {
+        return;
+    };
+    if bare.resistance.is_some_and(|time| time.min() < period.min()) {
+        return;
+    }
+    let reaches = bare.at_period.map_or_else(String::new, |steel| {
+        format!(
+            ": its steel would reach {}, and may reach {}",
+            cx.temperature(steel),
+            cx.temperature(critical.bare)
+        )
+    });
+    let message = format!("{} would last its {:.0} min bare{reaches}", cx.mark, period.min());
+    cx.add(&DECLARATION, "protection", cx.own().protection.span(), message);
+}

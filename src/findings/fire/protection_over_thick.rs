@@ -1,5 +1,6 @@
 //! The thickness stated is past the next stock size.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +15,30 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, thickness: 30 } }",
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, thickness: 15 } }",
 };
+
+/// A stated thickness past the next stock size.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let (Some(state), Some(product)) = (&cx.outcome.protected, cx.product) else {
+        return;
+    };
+    let (Ok(needed), true, Some(provided)) = (&state.requirement, state.stated, state.provided) else {
+        return;
+    };
+    let Some(next) = needed
+        .next
+        .as_ref()
+        .filter(|next| provided.mm() > next.total().mm() + 1e-6)
+    else {
+        return;
+    };
+    let message = format!(
+        "{}: {} of `{}` is more than the {} needed; the next stock is {}",
+        cx.mark,
+        cx.thickness(provided, product.film),
+        product.name,
+        cx.needed(needed.exact, product.film),
+        product.build_up(cx, next)
+    );
+    cx.add(&DECLARATION, "thickness", product.thickness_span(cx), message);
+    product.offer(cx, next);
+}

@@ -1,5 +1,6 @@
 //! The section factor is below 10 1/m, so 10 is used.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
 
@@ -14,3 +15,12 @@ pub static DECLARATION: Declaration = Declaration {
     before: "- { mark: T1, role: tie, section: { shape: round, d: 500 } }",
     after: "- { mark: T1, role: tie, section: { shape: round, d: 50 } }",
 };
+
+/// A section so stocky that the least factor is used instead of its own.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let Some(section) = cx.outcome.section.as_ref().filter(|section| section.below_ten) else {
+        return;
+    };
+    let message = format!("{} has {}: 10 1/m is used", cx.mark, cx.factor(section.factor));
+    cx.add(&DECLARATION, "section", cx.own().section.span(), message);
+}

@@ -1,7 +1,9 @@
 //! The product was not assessed for the shape.
 
+use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
+use crate::protection::requirement::Refusal;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -14,3 +16,19 @@ pub static DECLARATION: Declaration = Declaration {
     before: r"- { mark: B1, section: SHS HF 150x150x8, critical temperature: 550, protection: red film }   # open sections only",
     after: r"- { mark: B1, section: SHS HF 150x150x8, critical temperature: 550, protection: grey board }",
 };
+
+/// A product on a shape that it was not assessed for.
+pub(super) fn check(cx: &mut Context<'_>) {
+    let (Some(state), Some(product)) = (&cx.outcome.protected, cx.product) else {
+        return;
+    };
+    if let Err(Refusal::ShapeNotAssessed(shape)) = &state.requirement {
+        let message = format!(
+            "{} is not verified: `{}` was not assessed for {} sections",
+            cx.mark,
+            product.name,
+            shape.words()
+        );
+        cx.add(&DECLARATION, "protection", cx.own().protection.span(), message);
+    }
+}

@@ -1,7 +1,9 @@
 //! A mark stands twice in the design.
 
-use crate::findings::finding::Severity;
+use crate::analysis::design::Design;
+use crate::findings::finding::{Finding, Note, Place, Severity};
 use crate::findings::registry::Declaration;
+use std::sync::Arc;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -16,3 +18,28 @@ pub static DECLARATION: Declaration = Declaration {
     after: r"- { mark: B1, section: IPE 300 }
 - { mark: B2, section: IPE 330 }",
 };
+
+/// Members after the first that carry a mark.
+pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
+    let place = |at: crate::analysis::design::MemberAt, span| Place {
+        path: Arc::clone(&design.files[at.file].path),
+        span: design.member(at).place(span),
+    };
+    for at in &design.members {
+        let mark = &design.member(*at).value().mark;
+        if let (Some(name), Some(span)) = (mark.value(), mark.span())
+            && let Some(first) = design.marks.get(name).filter(|first| *first != at)
+        {
+            let message = format!("the mark {name} stands twice in the design");
+            let mut finding = Finding::new(&DECLARATION, place(*at, span), message);
+            finding.mark = Some(name.clone());
+            finding.key = Some("mark".to_owned());
+            let other = design.member(*first).value().mark.span().unwrap_or_default();
+            finding.notes.push(Note {
+                text: format!("{name} stands here first"),
+                place: Some(place(*first, other)),
+            });
+            out.push(finding);
+        }
+    }
+}

@@ -32,36 +32,38 @@ use crate::analysis::files::PathTrouble;
 use crate::analysis::names::{self, lookup_options};
 use crate::analysis::source::{Decoded, Item};
 use crate::design::slip::{Slip, SlipKind};
+use crate::findings::context::Context;
 use crate::findings::finding::{Finding, Fix, FixEdit, Note, Place};
+use crate::findings::registry::Declaration;
 use crate::syntax::{ErrorKind, SyntaxError};
 
-/// The name of a slip's finding.
-const fn name_of(kind: SlipKind) -> &'static str {
+/// The declaration of a slip's finding.
+const fn declared(kind: SlipKind) -> &'static Declaration {
     match kind {
-        SlipKind::UnknownKey => "unknown-key",
-        SlipKind::MissingKey => "missing-key",
-        SlipKind::WrongKind => "wrong-kind",
-        SlipKind::WrongUnit => "wrong-unit",
-        SlipKind::OutOfBounds => "out-of-bounds",
-        SlipKind::NotYaml => "unreadable-yaml",
-        SlipKind::DuplicateMark => "duplicate-mark",
-        SlipKind::UnknownSection => "unknown-section",
-        SlipKind::AmbiguousSection => "ambiguous-section",
-        SlipKind::UnknownProduct => "unknown-product",
-        SlipKind::UnknownGroup => "unknown-group",
-        SlipKind::UnknownSteel => "unknown-steel",
-        SlipKind::UnknownFire => "unknown-fire",
-        SlipKind::UnknownMark => "unknown-mark",
-        SlipKind::MethodNotSupported => "method-not-supported",
+        SlipKind::UnknownKey => &unknown_key::DECLARATION,
+        SlipKind::MissingKey => &missing_key::DECLARATION,
+        SlipKind::WrongKind => &wrong_kind::DECLARATION,
+        SlipKind::WrongUnit => &wrong_unit::DECLARATION,
+        SlipKind::OutOfBounds => &out_of_bounds::DECLARATION,
+        SlipKind::NotYaml => &unreadable_yaml::DECLARATION,
+        SlipKind::DuplicateMark => &duplicate_mark::DECLARATION,
+        SlipKind::UnknownSection => &unknown_section::DECLARATION,
+        SlipKind::AmbiguousSection => &ambiguous_section::DECLARATION,
+        SlipKind::UnknownProduct => &unknown_product::DECLARATION,
+        SlipKind::UnknownGroup => &unknown_group::DECLARATION,
+        SlipKind::UnknownSteel => &unknown_steel::DECLARATION,
+        SlipKind::UnknownFire => &unknown_fire::DECLARATION,
+        SlipKind::UnknownMark => &unknown_mark::DECLARATION,
+        SlipKind::MethodNotSupported => &method_not_supported::DECLARATION,
     }
 }
 
-fn slip_finding(path: &Arc<PathBuf>, slip: Slip, mark: Option<&str>) -> Option<Finding> {
+fn slip_finding(path: &Arc<PathBuf>, slip: Slip, mark: Option<&str>) -> Finding {
     let place = |span| Place {
         path: Arc::clone(path),
         span,
     };
-    let mut finding = Finding::new(name_of(slip.kind), place(slip.span), slip.message)?;
+    let mut finding = Finding::new(declared(slip.kind), place(slip.span), slip.message);
     finding.mark = mark.map(str::to_owned);
     finding.key = slip.key.map(std::borrow::Cow::into_owned);
     finding.notes = slip
@@ -88,20 +90,20 @@ fn slip_finding(path: &Arc<PathBuf>, slip: Slip, mark: Option<&str>) -> Option<F
                 .collect(),
         })
         .collect();
-    Some(finding)
+    finding
 }
 
-fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -> Option<Finding> {
-    let name = match error.kind {
-        ErrorKind::SeveralDocuments => "several-documents",
-        ErrorKind::Limit => "out-of-bounds",
-        ErrorKind::NotYaml => "unreadable-yaml",
+fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -> Finding {
+    let declaration = match error.kind {
+        ErrorKind::SeveralDocuments => &several_documents::DECLARATION,
+        ErrorKind::Limit => &out_of_bounds::DECLARATION,
+        ErrorKind::NotYaml => &unreadable_yaml::DECLARATION,
     };
     let place = |span| Place {
         path: Arc::clone(path),
         span,
     };
-    let mut finding = Finding::new(name, place(error.span), error.message)?;
+    let mut finding = Finding::new(declaration, place(error.span), error.message);
     finding.mark = mark.map(str::to_owned);
     if let Some(repair) = error.repair {
         let edit = FixEdit {
@@ -114,7 +116,7 @@ fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -
             edits: vec![edit],
         });
     }
-    Some(finding)
+    finding
 }
 
 fn item_findings<T>(path: &Arc<PathBuf>, item: &Item<T>, mark: Option<&str>, out: &mut Vec<Finding>) {
@@ -122,12 +124,12 @@ fn item_findings<T>(path: &Arc<PathBuf>, item: &Item<T>, mark: Option<&str>, out
     out.extend(
         errors
             .iter()
-            .filter_map(|error| syntax_finding(path, error.clone().shifted(item.base), mark)),
+            .map(|error| syntax_finding(path, error.clone().shifted(item.base), mark)),
     );
     out.extend(
         slips
             .iter()
-            .filter_map(|slip| slip_finding(path, slip.clone().shifted(item.base), mark)),
+            .map(|slip| slip_finding(path, slip.clone().shifted(item.base), mark)),
     );
 }
 
@@ -139,21 +141,17 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
         out.extend(
             file.errors
                 .iter()
-                .filter_map(|error| syntax_finding(path, error.clone(), None)),
+                .map(|error| syntax_finding(path, error.clone(), None)),
         );
-        out.extend(
-            file.slips
-                .iter()
-                .filter_map(|slip| slip_finding(path, slip.clone(), None)),
-        );
+        out.extend(file.slips.iter().map(|slip| slip_finding(path, slip.clone(), None)));
         if file.head.part_of.value().is_some() && index > 0 {
             for key in &file.head.head_only {
                 let message = format!(
                     "`{}` belongs to the head file; a part carries members and groups",
                     key.value
                 );
-                out.extend(Finding::new(
-                    "unknown-key",
+                out.push(Finding::new(
+                    &unknown_key::DECLARATION,
                     Place {
                         path: Arc::clone(path),
                         span: key.span,
@@ -164,14 +162,14 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
         }
         let mut slips = Vec::new();
         names::check(&file.head.defaults, design, &options, &mut slips);
-        out.extend(slips.drain(..).filter_map(|slip| slip_finding(path, slip, None)));
+        out.extend(slips.drain(..).map(|slip| slip_finding(path, slip, None)));
         for item in &file.groups {
             item_findings(path, item, None, out);
             names::check(&item.value().keys, design, &options, &mut slips);
             out.extend(
                 slips
                     .drain(..)
-                    .filter_map(|slip| slip_finding(path, slip.shifted(item.base), None)),
+                    .map(|slip| slip_finding(path, slip.shifted(item.base), None)),
             );
         }
         for item in &file.products {
@@ -184,7 +182,7 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
             out.extend(
                 slips
                     .drain(..)
-                    .filter_map(|slip| slip_finding(path, slip.shifted(item.base), mark)),
+                    .map(|slip| slip_finding(path, slip.shifted(item.base), mark)),
             );
         }
     }
@@ -194,35 +192,62 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
 fn links(design: &Design, out: &mut Vec<Finding>) {
     for trouble in &design.troubles {
         let written = &trouble.written;
-        let (name, message) = match &trouble.kind {
+        let (declaration, message) = match &trouble.kind {
             LinkKind::Path(PathTrouble::Outside(how)) => (
-                "library-outside-workspace",
+                &library_outside_workspace::DECLARATION,
                 format!("`{written}` leads out of the workspace {how}"),
             ),
-            LinkKind::Path(PathTrouble::Missing) => ("unreadable-library", format!("there is no file `{written}`")),
-            LinkKind::Path(PathTrouble::Unreadable(why)) => {
-                ("unreadable-library", format!("`{written}` can't be read: {why}"))
-            }
-            LinkKind::Read(why) => ("unreadable-library", format!("`{written}` can't be read: {why}")),
-            LinkKind::Cycle => ("library-cycle", format!("`{written}` closes a cycle of files")),
+            LinkKind::Path(PathTrouble::Missing) => (
+                &unreadable_library::DECLARATION,
+                format!("there is no file `{written}`"),
+            ),
+            LinkKind::Path(PathTrouble::Unreadable(why)) => (
+                &unreadable_library::DECLARATION,
+                format!("`{written}` can't be read: {why}"),
+            ),
+            LinkKind::Read(why) => (
+                &unreadable_library::DECLARATION,
+                format!("`{written}` can't be read: {why}"),
+            ),
+            LinkKind::Cycle => (
+                &library_cycle::DECLARATION,
+                format!("`{written}` closes a cycle of files"),
+            ),
             LinkKind::OtherKind(_) => (
-                "unreadable-library",
+                &unreadable_library::DECLARATION,
                 format!("`{written}` is a file of another kind than is wanted here"),
             ),
             LinkKind::PartNamesNoHead => (
-                "part-not-listed",
+                &part_not_listed::DECLARATION,
                 format!("`{written}` does not name this file by `part of`"),
             ),
             LinkKind::HeadListsNoPart => (
-                "part-not-listed",
+                &part_not_listed::DECLARATION,
                 format!("`{written}` does not list this file under `parts`"),
             ),
-            LinkKind::TwoHeads(other) => ("part-not-listed", format!("`{written}` belongs to `{other}` too")),
+            LinkKind::TwoHeads(other) => (
+                &part_not_listed::DECLARATION,
+                format!("`{written}` belongs to `{other}` too"),
+            ),
         };
         let place = Place {
             path: Arc::clone(&design.files[trouble.file].path),
             span: trouble.span,
         };
-        out.extend(Finding::new(name, place, message));
+        out.push(Finding::new(declaration, place, message));
     }
+}
+
+/// What a member lacks or the methods do not reach.
+pub(super) fn member(cx: &mut Context<'_>) {
+    missing_key::check(cx);
+    not_covered::check(cx);
+}
+
+/// Marks that stand twice or nowhere, and what nobody uses.
+pub(super) fn design(design: &Design, out: &mut Vec<Finding>) {
+    duplicate_mark::check(design, out);
+    unknown_mark::check(design, out);
+    unused_group::check(design, out);
+    unused_product::check(design, out);
 }

@@ -1,7 +1,10 @@
 //! No member is of the group.
 
-use crate::findings::finding::Severity;
+use crate::analysis::design::Design;
+use crate::findings::finding::{Finding, Place, Severity};
 use crate::findings::registry::Declaration;
+use rustc_hash::FxHashSet;
+use std::sync::Arc;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -21,3 +24,25 @@ groups:
 members:
   - { mark: B1, group: floors, section: IPE 300 }",
 };
+
+/// Groups that no member names.
+pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
+    let mut used: FxHashSet<&str> = FxHashSet::default();
+    for at in &design.members {
+        let keys = design.inherited(design.member(*at).value());
+        used.extend(keys.get(|keys| &keys.group).value().map(String::as_str));
+    }
+    for file in &design.files {
+        for item in &file.groups {
+            let name = &item.value().name;
+            if !used.contains(name.value.as_str()) {
+                let message = format!("no member is of the group `{}`", name.value);
+                let place = Place {
+                    path: Arc::clone(&file.path),
+                    span: item.place(name.span),
+                };
+                out.push(Finding::new(&DECLARATION, place, message));
+            }
+        }
+    }
+}
