@@ -10,7 +10,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "format of the design file",
     summary: "The method or its edition is not supported.",
     answer: "Name a supported edition.",
-    fix: "None: another edition is another verification.",
+    fix: "Writes the nearest supported edition: another edition is another verification, so it wants a decision.",
     before: r#"steelwork: 1
 basis: { method: "EN 1993-1-2:1995" }"#,
     after: r#"steelwork: 1

@@ -10,7 +10,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "YAML 1.2",
     summary: "The text is not YAML 1.2.",
     answer: "Repair the characters shown; the other members are checked meanwhile.",
-    fix: "Offered where the repair can be guessed, such as a quote or bracket that is not closed.",
-    before: r#"- { mark: B1, section: "IPE 300 }"#,
-    after: r#"- { mark: B1, section: "IPE 300" }"#,
+    fix: "Offered where the repair is plain, such as spaces for a tab.",
+    before: "- mark: B1\n\tsection: IPE 300",
+    after: "- mark: B1\n  section: IPE 300",
 };

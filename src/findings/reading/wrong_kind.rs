@@ -10,7 +10,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "format of the design file",
     summary: "A value is of another kind than its key wants.",
     answer: "Write a value of the kind named.",
-    fix: "Offered where the value can be guessed, such as a word that is near.",
-    before: "- { mark: B1, section: IPE 300, count: two }",
-    after: "- { mark: B1, section: IPE 300, count: 2 }",
+    fix: "Writes the nearest word, or a decimal point for a comma, where that is what was meant.",
+    before: "- { mark: B1, section: IPE 300, length: 7,5 }",
+    after: "- { mark: B1, section: IPE 300, length: 7.5 }",
 };

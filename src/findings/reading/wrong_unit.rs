@@ -10,7 +10,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "format of the design file",
     summary: "A unit measures something else, or is not known.",
     answer: "Write the value in a unit of the kind named.",
-    fix: "None: the number that belongs to the right unit is not known.",
+    fix: "Writes the number with the unit of the key: a guess that wants a look.",
     before: "- { mark: B1, section: IPE 300, length: 20 min }",
     after: "- { mark: B1, section: IPE 300, length: 7.5 m }",
 };
