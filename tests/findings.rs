@@ -276,3 +276,99 @@ members:
     let message = &one(&checked, "bare-steel-fails").message;
     assert!(message.contains("1000 °F") && message.contains(" in)"), "{message}");
 }
+
+const GROUPED: &str = "steelwork: 1
+libraries: [demo.protection.yaml]
+defaults: { role: beam, steel: S355, period: 90, critical temperature: 500 }
+groups:
+  floors: { section: IPE 200, protection: { product: grey board, thickness: 15 } }
+members:
+";
+
+/// The text of the head file after the first fix of a finding.
+fn fixed(member: &str, name: &str) -> String {
+    let checked = check(&format!("{GROUPED}{member}"));
+    let fix = one(&checked, name)
+        .fixes
+        .first()
+        .unwrap_or_else(|| panic!("no fix of {name}"))
+        .clone();
+    let files = mended(&checked, &fix);
+    let after = check_files(files.clone());
+    assert!(!names(&after).contains(&name), "{:#?}", messages(&after));
+    assert!(!names(&after).contains(&"unreadable-yaml"));
+    files[0].1[GROUPED.len()..].to_owned()
+}
+
+#[test]
+fn an_inherited_value_is_overridden_in_the_member_in_its_own_style() {
+    let name = "protection-too-thin";
+    assert_eq!(
+        fixed("  - { mark: B1, group: floors }\n", name),
+        "  - { mark: B1, protection: { product: grey board, thickness: [20, 15] }, group: floors }\n"
+    );
+    assert_eq!(
+        fixed("  - mark: B1   # first\n    group: floors\n", name),
+        "  - mark: B1   # first\n    protection: { product: grey board, thickness: [20, 15] }\n    group: floors\n"
+    );
+    assert_eq!(
+        fixed("  - group: floors\n    mark: B1", name),
+        "  - group: floors\n    mark: B1\n    protection: { product: grey board, thickness: [20, 15] }\n"
+    );
+}
+
+#[test]
+fn nothing_is_offered_through_an_alias() {
+    let text = "steelwork: 1
+libraries: [demo.protection.yaml]
+defaults: { role: beam, steel: S355, period: 90, critical temperature: 500 }
+members:
+  - { mark: B1, section: &s IPE 200, protection: &p { product: grey board, thickness: 15 } }
+  - { mark: B2, section: *s, protection: *p }";
+    let checked = check(text);
+    let thin: Vec<_> = checked
+        .findings
+        .iter()
+        .filter(|finding| finding.name() == "protection-too-thin")
+        .collect();
+    assert_eq!(thin.len(), 2, "{:#?}", messages(&checked));
+    assert!(!thin[0].fixes.is_empty());
+    assert!(thin[1].fixes.is_empty(), "{:?}", thin[1].fixes);
+}
+
+#[test]
+fn a_departure_lapses_when_its_figures_worsen_or_vanish() {
+    let member = |needs: &str, period: u32| {
+        check(&format!(
+            "- {{ mark: B1, section: IPE 200, critical temperature: 500, period: {period}, protection: {{ product: grey board, thickness: 15 }}, departures: [ {{ from: protection-too-thin, because: agreed, by: checker, until: 2027-06-30, at: {{ needs: {needs} }} }} ] }}"
+        ))
+    };
+    let agreed = member("33.3 mm", 90);
+    assert!(
+        agreed
+            .agreed
+            .iter()
+            .any(|finding| finding.name() == "protection-too-thin")
+    );
+    assert_eq!(
+        agreed.outcomes[0].verdict,
+        scorchline::analysis::outcome::Verdict::Fails
+    );
+    let worse = member("30 mm", 90);
+    assert!(names(&worse).contains(&"departure-outgrown") && names(&worse).contains(&"protection-too-thin"));
+    let message = &one(&worse, "departure-outgrown").message;
+    assert!(message.contains("it needed 30 mm, now 33.2 mm"), "{message}");
+    let gone = member("33.3 mm", 240);
+    assert!(names(&gone).contains(&"departure-outgrown"), "{:#?}", messages(&gone));
+}
+
+#[test]
+fn protection_is_not_judged_where_no_period_is_wanted() {
+    let checked =
+        check("- { mark: R1, section: IPE 140, period: { none: yes, because: off the route }, protection: old spray }");
+    assert!(
+        !names(&checked).contains(&"evidence-expired"),
+        "{:#?}",
+        messages(&checked)
+    );
+}

@@ -5,11 +5,12 @@ use std::sync::Arc;
 use jiff::civil::Date;
 
 use crate::analysis::design::{Design, MemberAt};
-use crate::analysis::outcome::Outcome;
+use crate::analysis::outcome::{Outcome, Verdict};
 use crate::design::inherit::Inherited;
 use crate::design::model::library::NamedProduct;
 use crate::design::model::member::{MemberKeys, Period, Protection};
 use crate::findings::finding::{Finding, Fix, FixEdit, Note, Place};
+use crate::findings::insert;
 use crate::findings::registry::Declaration;
 use crate::protection::product::Kind;
 use crate::protection::stock::BuildUp;
@@ -71,16 +72,13 @@ impl<'a> Context<'a> {
             on,
             keys,
             mark: member.mark.value().map_or("this member", String::as_str),
-            units: if design.basis().imperial {
-                DisplayUnits::Imperial
-            } else {
-                DisplayUnits::Metric
-            },
+            units: units(design),
             period: match keys.get(|keys| &keys.period).value() {
                 Some(Period::Of(time)) => Some(*time),
                 _ => None,
             },
-            product,
+            // Where no fire resistance is wanted, what protects it is not judged.
+            product: product.filter(|_| outcome.verdict != Verdict::NoPeriod),
             out,
         }
     }
@@ -117,6 +115,20 @@ impl<'a> Context<'a> {
     /// defaults, for other members live by them.
     pub fn fix(&mut self, title: String, own: Span, text: String) {
         let place = self.place(own);
+        if !insert::through_alias(&self.design.files[self.at.file].text, place.span) {
+            self.offer(title, place, text);
+        }
+    }
+
+    /// Gives it a fix that states a key in the member, which otherwise inherits it.
+    pub fn state(&mut self, title: String, key: &str, value: &str) {
+        if let Some((span, text)) = insert::key(self.design, self.at, key, value) {
+            let path = Arc::clone(&self.design.files[self.at.file].path);
+            self.offer(title, Place { path, span }, text);
+        }
+    }
+
+    fn offer(&mut self, title: String, place: Place, text: String) {
         if let Some(finding) = self.out.last_mut() {
             finding.fixes.push(Fix {
                 title,
@@ -222,12 +234,12 @@ impl Stated<'_> {
         format!("{total} ({})", layers.join(" + "))
     }
 
-    /// Offers a build-up instead of the thickness that the member states itself. Where `layers` multiplies the
-    /// thickness two keys would have to change together, so nothing is offered.
+    /// Offers a build-up instead of the stated thickness. Where `layers` multiplies the thickness two keys would have to
+    /// change together, so nothing is offered.
     pub fn offer(&self, cx: &mut Context<'_>, next: &BuildUp) {
-        let (Some(span), None | Some(1)) = (self.thickness_span(cx), self.stated.layers.value()) else {
+        if !matches!(self.stated.layers.value(), None | Some(1)) {
             return;
-        };
+        }
         let text = match next.layers.as_slice() {
             [film] if self.film => significant(film.um(), 0),
             [layer] => significant(layer.mm(), 3),
@@ -237,7 +249,42 @@ impl Stated<'_> {
             }
         };
         let title = format!("use the next stock thickness, {}", self.build_up(cx, next));
-        cx.fix(title, span, text);
+        if let Some(span) = self.thickness_span(cx) {
+            cx.fix(title, span, text);
+        } else if self.only_thickness() {
+            let key = if self.film { "dft" } else { "thickness" };
+            let value = format!("{{ product: {}, {key}: {text} }}", insert::scalar(self.name));
+            cx.state(title, "protection", &value);
+        }
+    }
+
+    /// Whether product and thickness are all that is stated: mappings are inherited whole, so that the rest would be
+    /// lost.
+    fn only_thickness(&self) -> bool {
+        let Protection {
+            boxed,
+            layers,
+            reading,
+            primer,
+            topcoat,
+            on_site,
+            ..
+        } = self.stated;
+        boxed.is_absent()
+            && layers.is_absent()
+            && reading.is_absent()
+            && primer.is_none()
+            && topcoat.is_none()
+            && on_site.is_none()
+    }
+}
+
+/// The units that a design's messages are in.
+pub(super) fn units(design: &Design) -> DisplayUnits {
+    if design.basis().imperial {
+        DisplayUnits::Imperial
+    } else {
+        DisplayUnits::Metric
     }
 }
 

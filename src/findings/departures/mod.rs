@@ -11,9 +11,12 @@ use jiff::civil::Date;
 
 use crate::analysis::design::{Design, MemberAt};
 use crate::analysis::outcome::Outcome;
+use crate::design::keys::nearest;
 use crate::design::model::member::Departure;
+use crate::findings::context;
 use crate::findings::finding::{Finding, Place, Severity};
 use crate::findings::registry;
+use crate::units::{DisplayUnits, Length, SectionFactor};
 
 /// Splits the findings of a member into open and agreed ones, and reports departures that don't hold.
 pub fn apply(
@@ -48,7 +51,16 @@ pub fn apply(
         let Some(declaration) = registry::find(&from.value) else {
             add(
                 &departure_unused::DECLARATION,
-                format!("{mark} departs from `{}`, which is no finding", from.value),
+                match nearest(
+                    &from.value,
+                    registry::REGISTRY.iter().map(|declaration| declaration.name),
+                ) {
+                    Some(near) => format!(
+                        "{mark} departs from `{}`, which is no finding; perhaps `{near}`",
+                        from.value
+                    ),
+                    None => format!("{mark} departs from `{}`, which is no finding", from.value),
+                },
             );
             continue;
         };
@@ -69,9 +81,16 @@ pub fn apply(
         } else if departure.until.value().is_some_and(|until| *until < on) {
             add(
                 &departure_expired::DECLARATION,
-                format!("{mark}: the departure from {} has run out", from.value),
+                format!(
+                    "{mark}: the departure from {} ran out{}",
+                    from.value,
+                    departure
+                        .until
+                        .value()
+                        .map_or_else(String::new, |until| format!(" on {until}"))
+                ),
             );
-        } else if let Some(worse) = outgrown(departure, outcome) {
+        } else if let Some(worse) = outgrown(departure, outcome, context::units(design)) {
             add(
                 &departure_outgrown::DECLARATION,
                 format!("{mark}: the departure from {} is outgrown: {worse}", from.value),
@@ -97,22 +116,34 @@ pub fn apply(
 }
 
 /// What has worsened since the departure was agreed.
-fn outgrown(departure: &Departure, outcome: &Outcome) -> Option<String> {
-    let needed = outcome
-        .protected
-        .as_ref()
-        .and_then(|state| state.requirement.as_ref().ok());
-    if let (Some(was), Some(is)) = (departure.at.needs, needed.map(|needed| needed.exact))
-        && is.mm() > was.mm() + 0.05
-    {
-        return Some(format!("it needed {:.1} mm, now {:.1} mm", was.mm(), is.mm()));
+fn outgrown(departure: &Departure, outcome: &Outcome, units: DisplayUnits) -> Option<String> {
+    let requirement = outcome.protected.as_ref().map(|state| &state.requirement);
+    if let Some(was) = departure.at.needs {
+        // Films are agreed to the micrometre, boards and sprays to a tenth of a millimetre.
+        let film = was.mm() < 5.0;
+        let show = |value: Length| {
+            if film {
+                units.film(value)
+            } else {
+                units.thickness(value)
+            }
+        };
+        let tolerance = if film { 5e-4 } else { 0.05 };
+        match requirement {
+            Some(Ok(needed)) if needed.exact.mm() > was.mm() + tolerance => {
+                return Some(format!("it needed {}, now {}", show(was), show(needed.exact)));
+            }
+            Some(Err(refusal)) => return Some(format!("it needed {}, now {refusal}", show(was))),
+            _ => {}
+        }
     }
     if let (Some(was), Some(section)) = (departure.at.section_factor, &outcome.section)
         && section.factor.per_m() > was + 0.5
     {
         return Some(format!(
-            "the section factor was {was:.0} 1/m, now {:.0} 1/m",
-            section.factor.per_m()
+            "the section factor was {}, now {}",
+            units.section_factor(SectionFactor::from_per_m(was)),
+            units.section_factor(section.factor)
         ));
     }
     let temperature = outcome.bare.and_then(|bare| bare.at_period);
@@ -125,9 +156,9 @@ fn outgrown(departure: &Departure, outcome: &Outcome) -> Option<String> {
         && is.celsius() > was.celsius() + 0.5
     {
         return Some(format!(
-            "the steel reached {:.0} °C, now {:.0} °C",
-            was.celsius(),
-            is.celsius()
+            "the steel reached {}, now {}",
+            units.temperature(was),
+            units.temperature(is)
         ));
     }
     let resistance = outcome

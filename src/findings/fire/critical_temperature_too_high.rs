@@ -12,7 +12,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "EN 1993-1-2:2005 4.2.4",
     summary: "The critical temperature stated is above the one that the loading gives.",
     answer: "Correct one of the two; without a stated temperature the loading's is used.",
-    fix: "Writes the temperature that the loading gives, where the member states its own.",
+    fix: "Writes the temperature that the loading gives into the member.",
     before: r"- { mark: B1, section: IPE 300, critical temperature: 650, loading: { utilisation: 0.6 }, protection: grey board }",
     after: r"- { mark: B1, section: IPE 300, loading: { utilisation: 0.6 }, protection: grey board }",
 };
@@ -31,8 +31,10 @@ pub(super) fn check(cx: &mut Context<'_>) {
     );
     let span = cx.own().critical_temperature.span();
     cx.add(&DECLARATION, "critical temperature", span, message);
-    if let Some(span) = span {
-        let value = significant(derived.celsius().floor(), 0);
-        cx.fix(format!("state {value} °C, which the loading gives"), span, value);
+    let value = significant(derived.celsius().floor(), 0);
+    let title = format!("state {value} °C, which the loading gives");
+    match span {
+        Some(span) => cx.fix(title, span, value),
+        None => cx.state(title, "critical temperature", &value),
     }
 }

@@ -6,6 +6,7 @@ use crate::analysis::names::lookup_options;
 use crate::design::model::member::SectionChoice;
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
+use crate::findings::insert;
 use crate::findings::registry::Declaration;
 use crate::protection::requirement::Refusal;
 use crate::section::catalogue::{CatalogueRow, family_neighbours};
@@ -19,7 +20,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "EN 13381-4, EN 13381-8: scope of the assessment",
     summary: "No assessed thickness of the product holds the section for the period.",
     answer: "Take a heavier section, box it in, or take another product.",
-    fix: "Swaps to the nearest section of the family that the product holds, where the member names its designation itself. It changes the design, so it wants a decision.",
+    fix: "Swaps to the nearest section of the family that the product holds. It changes the design, so it wants a decision.",
     before: r"- { mark: B1, section: IPE 80, critical temperature: 550, period: 120, protection: white spray }",
     after: r"- { mark: B1, section: IPE 450, critical temperature: 550, period: 120, protection: white spray }",
 };
@@ -71,14 +72,11 @@ pub(super) fn check(cx: &mut Context<'_>) {
     );
     let span = cx.own().section.span();
     cx.add(&DECLARATION, "section", span, message);
-    if let (Some(span), Some((other, _)), Some(SectionChoice::Designation(_))) =
-        (span, better, cx.own().section.value())
-    {
-        cx.fix(
-            format!("swap to {}", other.designation),
-            span,
-            other.designation.to_string(),
-        );
+    let Some((other, _)) = better else { return };
+    let title = format!("swap to {}", other.designation);
+    match span {
+        Some(span) => cx.fix(title, span, insert::scalar(&other.designation)),
+        None => cx.state(title, "section", &insert::scalar(&other.designation)),
     }
 }
 

@@ -30,10 +30,11 @@ use std::sync::Arc;
 use crate::analysis::design::{Design, LinkKind};
 use crate::analysis::files::PathTrouble;
 use crate::analysis::names::{self, lookup_options};
-use crate::analysis::source::{Decoded, Item};
-use crate::design::slip::{Slip, SlipKind};
+use crate::analysis::source::{Decoded, Item, SourceFile};
+use crate::design::slip::{Edit, Slip, SlipKind};
 use crate::findings::context::Context;
 use crate::findings::finding::{Finding, Fix, FixEdit, Note, Place};
+use crate::findings::insert;
 use crate::findings::registry::Declaration;
 use crate::syntax::{ErrorKind, SyntaxError};
 
@@ -58,9 +59,9 @@ const fn declared(kind: SlipKind) -> &'static Declaration {
     }
 }
 
-fn slip_finding(path: &Arc<PathBuf>, slip: Slip, mark: Option<&str>) -> Finding {
+fn slip_finding(file: &SourceFile, slip: Slip, mark: Option<&str>) -> Finding {
     let place = |span| Place {
-        path: Arc::clone(path),
+        path: Arc::clone(&file.path),
         span,
     };
     let mut finding = Finding::new(declared(slip.kind), place(slip.span), slip.message);
@@ -77,6 +78,10 @@ fn slip_finding(path: &Arc<PathBuf>, slip: Slip, mark: Option<&str>) -> Finding 
     finding.fixes = slip
         .repairs
         .into_iter()
+        .filter(|repair| {
+            let alias = |edit: &Edit| insert::through_alias(&file.text, edit.span);
+            !repair.edits.iter().any(alias)
+        })
         .map(|repair| Fix {
             title: repair.title,
             safe: repair.safe,
@@ -119,17 +124,17 @@ fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -
     finding
 }
 
-fn item_findings<T>(path: &Arc<PathBuf>, item: &Item<T>, mark: Option<&str>, out: &mut Vec<Finding>) {
+fn item_findings<T>(file: &SourceFile, item: &Item<T>, mark: Option<&str>, out: &mut Vec<Finding>) {
     let Decoded { slips, errors, .. } = &*item.decoded;
     out.extend(
         errors
             .iter()
-            .map(|error| syntax_finding(path, error.clone().shifted(item.base), mark)),
+            .map(|error| syntax_finding(&file.path, error.clone().shifted(item.base), mark)),
     );
     out.extend(
         slips
             .iter()
-            .map(|slip| slip_finding(path, slip.clone().shifted(item.base), mark)),
+            .map(|slip| slip_finding(file, slip.clone().shifted(item.base), mark)),
     );
 }
 
@@ -143,7 +148,7 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
                 .iter()
                 .map(|error| syntax_finding(path, error.clone(), None)),
         );
-        out.extend(file.slips.iter().map(|slip| slip_finding(path, slip.clone(), None)));
+        out.extend(file.slips.iter().map(|slip| slip_finding(file, slip.clone(), None)));
         if file.head.part_of.value().is_some() && index > 0 {
             for key in &file.head.head_only {
                 let message = format!(
@@ -162,27 +167,27 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
         }
         let mut slips = Vec::new();
         names::check(&file.head.defaults, design, &options, &mut slips);
-        out.extend(slips.drain(..).map(|slip| slip_finding(path, slip, None)));
+        out.extend(slips.drain(..).map(|slip| slip_finding(file, slip, None)));
         for item in &file.groups {
-            item_findings(path, item, None, out);
+            item_findings(file, item, None, out);
             names::check(&item.value().keys, design, &options, &mut slips);
             out.extend(
                 slips
                     .drain(..)
-                    .map(|slip| slip_finding(path, slip.shifted(item.base), None)),
+                    .map(|slip| slip_finding(file, slip.shifted(item.base), None)),
             );
         }
         for item in &file.products {
-            item_findings(path, item, None, out);
+            item_findings(file, item, None, out);
         }
         for item in &file.members {
             let mark = item.value().mark.value().map(String::as_str);
-            item_findings(path, item, mark, out);
+            item_findings(file, item, mark, out);
             names::check(&item.value().keys, design, &options, &mut slips);
             out.extend(
                 slips
                     .drain(..)
-                    .map(|slip| slip_finding(path, slip.shifted(item.base), mark)),
+                    .map(|slip| slip_finding(file, slip.shifted(item.base), mark)),
             );
         }
     }
