@@ -372,3 +372,22 @@ fn protection_is_not_judged_where_no_period_is_wanted() {
         messages(&checked)
     );
 }
+
+#[test]
+fn a_support_verified_in_another_fire_is_no_proof() {
+    let with = |fire: &str| {
+        check(&format!(
+            "- {{ mark: B1, section: IPE 300, critical temperature: 550, protection: grey board, supported by: [C1] }}
+- {{ mark: C1, role: column, section: HE 200 B, critical temperature: 1000, protection: none, fire: {fire} }}"
+        ))
+    };
+    let other = with("external");
+    let finding = one(&other, "support-rating-lower");
+    assert!(
+        finding.message.contains("in the fire `external` only"),
+        "{}",
+        finding.message
+    );
+    assert_eq!(finding.severity, scorchline::findings::finding::Severity::Warning);
+    assert!(!names(&with("standard")).contains(&"support-rating-lower"));
+}

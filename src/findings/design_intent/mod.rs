@@ -36,6 +36,8 @@ pub(super) struct Support<'a> {
     outcome: &'a Outcome,
     /// The support's own period.
     support_period: Option<Time>,
+    /// The fires of the member and of its support, where they differ.
+    fires: Option<(&'a str, &'a str)>,
     out: &'a mut Vec<Finding>,
 }
 
@@ -81,6 +83,11 @@ fn period(design: &Design, at: MemberAt) -> Option<Time> {
     }
 }
 
+fn fire(design: &Design, at: MemberAt) -> &str {
+    let keys = design.inherited(design.member(at).value());
+    keys.get(|keys| &keys.fire).value().map_or("standard", String::as_str)
+}
+
 /// What members do to each other; outcomes in the order of the design's members.
 pub(super) fn design(design: &Design, outcomes: &[Arc<Outcome>], out: &mut Vec<Finding>) {
     let index: FxHashMap<MemberAt, usize> = design.members.iter().enumerate().map(|(n, at)| (*at, n)).collect();
@@ -103,6 +110,7 @@ pub(super) fn design(design: &Design, outcomes: &[Arc<Outcome>], out: &mut Vec<F
                 span: name.span,
                 outcome,
                 support_period: period(design, *support),
+                fires: Some((fire(design, *at), fire(design, *support))).filter(|(own, other)| own != other),
                 out: &mut *out,
             };
             support_rating_lower::check(&mut link);

@@ -56,5 +56,11 @@ pub(super) fn check(link: &mut Support<'_>) {
             lasts.floor()
         );
         link.add(&DECLARATION, message);
+    } else if let Some((own, other)) = link.fires {
+        let message = format!(
+            "{must} in the fire `{own}`, but {}, which supports it, is verified in the fire `{other}` only",
+            link.name
+        );
+        link.warn(&DECLARATION, message);
     }
 }
