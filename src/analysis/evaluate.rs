@@ -9,11 +9,12 @@ use crate::heating::flux::{Bare, Emissivity, effective_factor};
 use crate::protection::product::{Kind as ProductKind, ShapeClass};
 use crate::protection::requirement::{self, Demand, Refusal};
 use crate::protection::stock;
-use crate::resistance::critical::{self, Loading, Unverified, critical_temperature};
-use crate::resistance::grade::yield_strength;
+use crate::resistance::critical::{self, Actions, Loading, Unverified, critical_temperature};
+use crate::resistance::grade::{Grade, YieldSource, governing_thickness, yield_strength};
+use crate::resistance::utilisation::{ActionMix, from_ambient, reduction_factor};
 use crate::section::shadow::shadow_factor;
 use crate::section::{Casing, Exposure, Geometry, Kind, heated};
-use crate::units::{Length, Stress, Temperature, Time};
+use crate::units::{Force, Length, Stress, Temperature, Time};
 
 /// Works out a member. Nothing is claimed that its inputs do not carry.
 #[must_use]
@@ -68,12 +69,12 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
             }
             outcome.critical = Some(critical.0);
         }
-        Err(Unverified::FailsCold(utilisation)) => {
+        Err(Unverified::FailsCold { utilisation, .. }) => {
             cold = true;
             outcome.gaps.push(Gap::FailsCold(utilisation));
         }
         Err(Unverified::Missing(key)) => outcome.gaps.push(Gap::Missing(key)),
-        Err(Unverified::NotCovered(why)) => outcome.gaps.push(Gap::CriticalTemperature(why.to_owned())),
+        Err(Unverified::NotCovered(why)) => outcome.gaps.push(Gap::CriticalTemperature(why)),
     }
     let emissivity = match inputs.surface {
         Surface::GalvanisedTo { category: 'A' | 'B' } => Emissivity::Galvanised,
@@ -154,7 +155,7 @@ fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result
         let by_loading = match &inputs.loading {
             Some(loading) => match by_loading(inputs, loading, section, geometry) {
                 // No stated temperature saves a member that fails cold.
-                Err(Unverified::FailsCold(utilisation)) => return Err(Unverified::FailsCold(utilisation)),
+                Err(fails @ Unverified::FailsCold { .. }) => return Err(fails),
                 derived => derived.ok(),
             },
             None => None,
@@ -187,18 +188,19 @@ fn by_loading(
         shape: section.shape,
         fy: strength(inputs, geometry, section)?,
         gamma_m_fi: inputs.factors.gamma_m_fi,
-        compression: matches!(role, Role::Column | Role::Brace),
-        tension: role.is_tie(),
-        slab: inputs.reached.slab,
+        gamma_m0: inputs.factors.gamma_m0,
+        compression_member: matches!(role, Role::Column | Role::Brace),
+        tension_member: role.is_tie(),
+        slab_on_three_sides: inputs.reached.slab,
     };
-    let limit = critical_temperature(&member, resolve(&loading.load, &loading.restraint, inputs, role)?)?;
+    let limit = critical_temperature(&member, &resolve(&loading.load, &loading.restraint, inputs, role)?)?;
     let critical = Critical {
         as_built: if bare { limit.bare } else { limit.protected },
         bare: limit.bare,
         protected: limit.protected,
         by_loading: None,
         from: LimitFrom::Loading,
-        governing: limit.governing,
+        governing: if bare { limit.governing_bare } else { limit.governing },
     };
     Ok((critical, limit.class))
 }
@@ -219,7 +221,7 @@ fn default_limit(inputs: &Inputs) -> Result<(Critical, Option<u8>), Unverified> 
             None,
         )),
         _ => Err(Unverified::NotCovered(
-            "neither a critical temperature nor `loading` is given",
+            "neither a critical temperature nor `loading` is given".to_owned(),
         )),
     }
 }
@@ -228,13 +230,17 @@ fn strength(inputs: &Inputs, geometry: &Geometry, section: &SectionInput) -> Res
     match &inputs.steel {
         Some(Steel::Yield(fy)) => Ok(*fy),
         Some(Steel::Grade(name)) => {
-            let thickest = ["tf", "t", "tw", "tf top", "tf bottom", "d"]
-                .iter()
-                .find_map(|name| section.shape.dimension(name))
-                .unwrap_or_else(|| geometry.flange.map_or(Length::from_mm(40.0), |flange| flange.thickness));
-            yield_strength(name, thickest, inputs.yield_from_en10025).ok_or(Unverified::NotCovered(
-                "the yield strength at this thickness is not in the table; state `steel: {yield: ..}`",
-            ))
+            let refused = |why: &str| Unverified::NotCovered(why.to_owned());
+            let grade = Grade::from_name(name).ok_or_else(|| refused("the grade of steel is not known"))?;
+            let thickness = governing_thickness(&section.shape)
+                .or_else(|| geometry.flange.map(|flange| flange.thickness))
+                .ok_or_else(|| refused("the yield strength goes by a thickness; state `steel: {yield: ..}`"))?;
+            let source = if inputs.yield_from_en10025 {
+                YieldSource::En10025
+            } else {
+                YieldSource::Table31
+            };
+            yield_strength(grade, thickness, source).map_err(|error| Unverified::NotCovered(error.to_string()))
         }
         None => Err(Unverified::Missing("steel")),
     }
@@ -250,55 +256,55 @@ fn resolve(
         permanent,
         variable,
         xi,
-        ..
+        gamma_m_fi,
+        gamma_m0,
     } = inputs.factors;
     match load {
         Load::Utilisation(mu) => Ok(Loading::Utilisation(*mu)),
-        Load::Ambient { utilisation, reduction } => Ok(Loading::Utilisation(
-            utilisation
-                * match reduction {
-                    Reduction::Factor(eta) => *eta,
-                    Reduction::Actions {
-                        permanent: gk,
-                        variable: qk,
-                        combination,
-                    } => critical::load_reduction(*gk, *qk, *combination, (permanent, variable), xi),
-                },
-        )),
+        Load::Ambient { utilisation, reduction } => {
+            let eta = match reduction {
+                Reduction::Factor(eta) => Some(*eta),
+                Reduction::Actions {
+                    permanent: gk,
+                    variable: qk,
+                    combination,
+                } => reduction_factor(&ActionMix {
+                    permanent: *gk,
+                    variable: *qk,
+                    combination: *combination,
+                    gamma_permanent: permanent,
+                    gamma_variable: variable,
+                    xi,
+                }),
+            };
+            let eta =
+                eta.ok_or_else(|| Unverified::NotCovered("the design load at 20 °C is not positive".to_owned()))?;
+            Ok(Loading::Utilisation(from_ambient(
+                *utilisation,
+                eta,
+                gamma_m_fi,
+                gamma_m0,
+            )))
+        }
         Load::Ratio(_) => Err(Unverified::NotCovered(
-            "a load ratio belongs to AS 4100, which is not yet computed",
+            "a load ratio belongs to AS 4100, which is not yet computed".to_owned(),
         )),
         Load::Effects(effects) => {
-            let bending = effects.bending.filter(|moment| moment.knm() != 0.0);
-            let axial = effects.axial.filter(|force| force.kn() != 0.0);
-            if effects.bending_minor.is_some_and(|moment| moment.knm() != 0.0) {
-                return Err(Unverified::NotCovered(
-                    "bending about the weak axis is not yet computed",
-                ));
-            }
-            if effects.shear.is_some_and(|force| force.kn() != 0.0) {
-                return Err(Unverified::NotCovered("shear in fire is not yet computed"));
-            }
-            match (axial, bending) {
-                (Some(_), Some(_)) => Err(Unverified::NotCovered("axial force with bending is not yet computed")),
-                (Some(force), None) if role.is_tie() == (force.kn() > 0.0) => Ok(Loading::Tension(force)),
-                (Some(force), None) => Ok(Loading::Compression(
-                    crate::units::Force::from_kn(force.kn().abs()),
-                    restraint.buckling_length,
-                    restraint.buckling_length_minor,
-                )),
-                (None, Some(moment)) => {
-                    let restrained = inputs.reached.slab || restraint.lateral_length.is_some_and(|l| l.mm() == 0.0);
-                    if restrained {
-                        Ok(Loading::Bending(moment, restraint.continuous))
-                    } else if restraint.lateral_length.is_none() {
-                        Err(Unverified::Missing("lateral length"))
-                    } else {
-                        Err(Unverified::NotCovered("lateral-torsional buckling is not yet computed"))
-                    }
-                }
-                (None, None) => Err(Unverified::NotCovered("the effects in fire are all zero")),
-            }
+            // Compression is positive, in ties and hangers tension.
+            let pulls = |force: Force| role.is_tie() == (force.kn() > 0.0);
+            let size = |force: Force| Force::from_kn(force.kn().abs());
+            Ok(Loading::Effects(Actions {
+                axial_compression: effects.axial.filter(|force| !pulls(*force)).map(size),
+                axial_tension: effects.axial.filter(|force| pulls(*force)).map(size),
+                bending: effects.bending,
+                bending_minor: effects.bending_minor,
+                shear: effects.shear,
+                buckling_length: restraint.buckling_length,
+                buckling_length_minor: restraint.buckling_length_minor,
+                lateral_length: restraint.lateral_length,
+                laterally_restrained: inputs.reached.slab,
+                continuous: restraint.continuous,
+            }))
         }
     }
 }

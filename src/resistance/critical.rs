@@ -1,19 +1,51 @@
-//! Critical temperature from the loading (EN 1993-1-2:2005 4.2.3 and 4.2.4; from memory).
+//! The critical temperature of a member from its loading, EN 1993-1-2:2005 4.2.3 and 4.2.4.
 //!
-//! What is not covered is [`Unverified`], never a pass: lateral-torsional buckling, axial force with bending, bending
-//! about the weak axis and shear are refused for now.
+//! What is not covered is [`Unverified`], never a pass.
 
-use crate::resistance::class::{Action, classify};
-use crate::resistance::reduction::{modulus_factor, yield_factor};
+use crate::resistance::bending::{self, Bent, Kappa};
+use crate::resistance::buckling::{self, Lengths};
+use crate::resistance::class::{Action, Classified, classify};
+use crate::resistance::search::meets;
+use crate::resistance::{shear, tension, utilisation};
 use crate::section::{Properties, Shape};
 use crate::units::{Force, Length, Moment, Stress, Temperature};
 
-/// Critical temperature of class 4 sections where nothing better is known (4.2.3.6 (2)), °C.
+/// Critical temperature of class 4 sections, 4.2.3.6 (2), °C; a recommended value that national annexes may change.
 pub const CLASS_4: f64 = 350.0;
-/// Young's modulus at 20 °C in MPa (EN 1993-1-1:2005 3.2.6).
-const MODULUS: f64 = 210_000.0;
-/// The least utilisation for which (4.22) holds.
-const LEAST_UTILISATION: f64 = 0.013;
+
+/// The effects of actions in the fire situation, as magnitudes, with what holds the member.
+#[derive(Debug, Clone, Copy, PartialEq, Default)]
+pub struct Actions {
+    /// Axial compression, positive.
+    pub axial_compression: Option<Force>,
+    /// Axial tension, positive.
+    pub axial_tension: Option<Force>,
+    /// Moment about y-y.
+    pub bending: Option<Moment>,
+    /// Moment about z-z.
+    pub bending_minor: Option<Moment>,
+    /// Shear along the web.
+    pub shear: Option<Force>,
+    /// Buckling length about y-y; zero means held throughout.
+    pub buckling_length: Option<Length>,
+    /// Buckling length about z-z; that about y-y unless given.
+    pub buckling_length_minor: Option<Length>,
+    /// Length between lateral restraints of the compression flange; zero means held throughout.
+    pub lateral_length: Option<Length>,
+    /// Whether the compression flange is held throughout, as by a slab.
+    pub laterally_restrained: bool,
+    /// Whether it is a continuous beam, for κ2.
+    pub continuous: bool,
+}
+
+/// How the loading is known.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub enum Loading {
+    /// The degree of utilisation μ0 in the fire situation at 20 °C, 4.2.4 (4.23).
+    Utilisation(f64),
+    /// Effects of actions, which resistances at temperature are held against.
+    Effects(Actions),
+}
 
 /// The steel of a member and how it stands.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -24,25 +56,14 @@ pub struct Member {
     pub fy: Stress,
     /// γM,fi.
     pub gamma_m_fi: f64,
-    /// Whether it works in compression (columns, braces, chords): its class is that of compression.
-    pub compression: bool,
-    /// Whether it works in tension, which class 4 does not touch.
-    pub tension: bool,
-    /// Whether a slab covers it on three sides: κ1 is 0.70 bare and 0.85 protected.
-    pub slab: bool,
-}
-
-/// The loading in the fire situation.
-#[derive(Debug, Clone, Copy, PartialEq)]
-pub enum Loading {
-    /// Degree of utilisation μ0.
-    Utilisation(f64),
-    /// Axial compression with the buckling lengths about y-y and z-z.
-    Compression(Force, Option<Length>, Option<Length>),
-    /// Axial tension.
-    Tension(Force),
-    /// Bending of a laterally restrained beam; whether it is continuous over its supports.
-    Bending(Moment, bool),
+    /// γM0.
+    pub gamma_m0: f64,
+    /// Whether it works in compression (columns, braces): with a utilisation alone, its class is that of compression.
+    pub compression_member: bool,
+    /// Whether it works in tension: with a utilisation alone, it has no class.
+    pub tension_member: bool,
+    /// Whether it is exposed on three sides with a slab on the fourth: κ1 is 0.70 bare and 0.85 protected.
+    pub slab_on_three_sides: bool,
 }
 
 /// A critical temperature with what set it.
@@ -52,208 +73,299 @@ pub struct Limit {
     pub bare: Temperature,
     /// If protected.
     pub protected: Temperature,
-    /// The clause.
+    /// The clause that sets it if bare.
+    pub governing_bare: String,
+    /// The clause that sets it if protected: `EN 1993-1-2 4.2.3.2 (4.5), buckling about z-z`.
     pub governing: String,
-    /// Cross-section class, where known.
+    /// Cross-section class in fire; none in tension and shear.
     pub class: Option<u8>,
+    /// What sets the class: `web c/t 37.3 > 42ε = 29.0`.
+    pub class_note: Option<String>,
 }
 
 /// Why there is no critical temperature.
 #[derive(Debug, Clone, PartialEq)]
 pub enum Unverified {
-    /// The load exceeds the resistance at 20 °C; the utilisation.
-    FailsCold(f64),
-    /// A key is missing.
+    /// The load exceeds the resistance at 20 °C: the member fails at once.
+    FailsCold {
+        /// Load over resistance at 20 °C.
+        utilisation: f64,
+        /// The clause of the resistance.
+        clause: String,
+    },
+    /// A key of the loading is missing; its name.
     Missing(&'static str),
-    /// Not covered; why, as a sentence.
-    NotCovered(&'static str),
+    /// Not covered; why, as a clause that may follow "because".
+    NotCovered(String),
 }
 
-/// (4.22): the critical temperature of a degree of utilisation, classes 1 to 3.
-///
-/// Below 0.013 the temperature of 0.013 is taken, on the safe side.
-///
-/// # Errors
-/// A utilisation above 1 fails at once.
-pub fn from_utilisation(mu: f64) -> Result<Temperature, Unverified> {
-    if mu > 1.0 {
-        return Err(Unverified::FailsCold(mu));
-    }
-    let mu = mu.max(LEAST_UTILISATION);
-    Ok(Temperature::from_celsius(
-        39.19 * (1.0 / (0.9674 * mu.powf(3.833)) - 1.0).ln() + 482.0,
-    ))
-}
-
-/// ηfi = (Gk + ψ Qk)/(γG Gk + γQ Qk), EN 1993-1-2:2005 (2.5), ξ reducing the permanent action.
-#[must_use]
-pub fn load_reduction(permanent: f64, variable: f64, combination: f64, gamma: (f64, f64), xi: f64) -> f64 {
-    (permanent + combination * variable) / (xi * gamma.0 * permanent + gamma.1 * variable)
-}
-
-/// χfi of (4.5) and (4.6) for a slenderness at 20 °C.
-#[must_use]
-pub fn buckling_factor(slenderness: f64, fy: Stress, celsius: f64) -> f64 {
-    let (ky, ke) = (yield_factor(celsius), modulus_factor(celsius));
-    let bar = slenderness * (ky / ke).sqrt();
-    let alpha = 0.65 * (235.0 / fy.mpa()).sqrt();
-    let phi = 0.5 * (1.0 + alpha * bar + bar * bar);
-    (1.0 / (phi + (phi * phi - bar * bar).sqrt())).min(1.0)
-}
-
-/// The temperature at which a falling resistance meets a load; the highest looked at is 1200 °C.
-fn meets(load: f64, resistance: impl Fn(f64) -> f64) -> Result<Temperature, Unverified> {
-    let cold = resistance(20.0);
-    if load > cold {
-        return Err(Unverified::FailsCold(load / cold));
-    }
-    let (mut low, mut high) = (20.0, 1199.0);
-    if resistance(high) >= load {
-        return Ok(Temperature::from_celsius(high));
-    }
-    while high - low > 1e-4 {
-        let middle = 0.5 * (low + high);
-        if resistance(middle) >= load {
-            low = middle
-        } else {
-            high = middle
-        }
-    }
-    Ok(Temperature::from_celsius(low))
+/// Refuses with a reason.
+fn not_covered<T>(why: &str) -> Result<T, Unverified> {
+    Err(Unverified::NotCovered(why.to_owned()))
 }
 
 /// The critical temperature of a member.
 ///
+/// With a utilisation (4.22) is used, κ1 and κ2 never. With effects every effect is held against its resistance at
+/// temperature, and the lowest temperature governs. Class 4 takes at most 350 °C, tension apart.
+///
 /// # Errors
-/// [`Unverified`], where the load exceeds the resistance at 20 °C, or something is missing or not covered.
-pub fn critical_temperature(member: &Member, loading: Loading) -> Result<Limit, Unverified> {
-    let compression = member.compression || matches!(loading, Loading::Compression(..));
-    let tension = member.tension || matches!(loading, Loading::Tension(_));
-    let action = if compression {
-        Action::Compression
-    } else {
-        Action::Bending
-    };
-    let class = if tension {
-        None
-    } else {
-        classify(&member.shape, member.fy, action)
-    };
-    let number = class.as_ref().map(|class| class.class);
-    let properties = member.shape.properties().ok().flatten();
-    let both = |t: Temperature, clause: &str| Limit {
-        bare: t,
-        protected: t,
-        governing: clause.to_owned(),
-        class: number,
-    };
-    let limit = match loading {
-        Loading::Utilisation(mu) => both(from_utilisation(mu)?, "EN 1993-1-2 4.2.4 (4.22)"),
-        Loading::Tension(force) => {
-            let area = properties.as_ref().ok_or(NO_FIGURES)?.area;
-            let plastic = area.mm2() * member.fy.mpa() / 1000.0 / member.gamma_m_fi;
-            let t = meets(force.kn().abs(), |celsius| plastic * yield_factor(celsius))?;
-            both(t, "EN 1993-1-2 4.2.3.1 (4.3), tension")
-        }
-        Loading::Compression(force, y, z) => {
-            let y = y.ok_or(Unverified::Missing("buckling length"))?;
-            let t = compression_limit(member, force, y, z.unwrap_or(y), properties.as_ref().ok_or(NO_FIGURES)?)?;
-            both(t.0, t.1)
-        }
-        Loading::Bending(moment, continuous) => bending_limit(
-            member,
-            moment,
-            continuous,
-            properties.as_ref().ok_or(NO_FIGURES)?,
-            number,
-        )?,
-    };
-    if number == Some(4) {
-        let governing = format!(
-            "EN 1993-1-2 4.2.3.6 (2), class 4: {}",
-            class.map(|class| class.governing).unwrap_or_default()
-        );
-        let held = |t: Temperature| Temperature::from_celsius(t.celsius().min(CLASS_4));
-        return Ok(Limit {
-            bare: held(limit.bare),
-            protected: held(limit.protected),
-            governing,
-            class: number,
-        });
+/// [`Unverified`], where the load exceeds the resistance at 20 °C, or something is missing or not covered: axial force
+/// with bending, bending about both axes, lateral-torsional buckling, torsional-flexural buckling, shear buckling,
+/// stated sections.
+pub fn critical_temperature(member: &Member, loading: &Loading) -> Result<Limit, Unverified> {
+    let positive = |value: f64| value.is_finite() && value > 0.0;
+    if !positive(member.fy.mpa()) || !positive(member.gamma_m_fi) || !positive(member.gamma_m0) {
+        return not_covered("the yield strength and the partial factors are to be positive numbers");
     }
-    Ok(limit)
+    match loading {
+        Loading::Utilisation(mu0) => by_utilisation(member, *mu0),
+        Loading::Effects(actions) => by_effects(member, actions),
+    }
 }
 
-const NO_FIGURES: Unverified =
-    Unverified::NotCovered("of a stated section the resistance is not known; state the critical temperature instead");
-
-fn compression_limit(
-    member: &Member,
-    force: Force,
-    y: Length,
-    z: Length,
-    properties: &Properties,
-) -> Result<(Temperature, &'static str), Unverified> {
-    let fy = member.fy;
-    let euler = std::f64::consts::PI * (MODULUS / fy.mpa()).sqrt();
-    let angle = matches!(member.shape, Shape::Angle(_));
-    let (radius_y, radius_z) = if angle {
-        (properties.radius_v(), properties.radius_v())
-    } else {
-        (properties.radius_y(), properties.radius_z())
-    };
-    let about_y = y.mm() / radius_y.mm() / euler;
-    let about_z = z.mm() / radius_z.mm() / euler;
-    let plastic = properties.area.mm2() * fy.mpa() / 1000.0 / member.gamma_m_fi;
-    let t = meets(force.kn(), |celsius| {
-        buckling_factor(about_y.max(about_z), fy, celsius) * yield_factor(celsius) * plastic
-    })?;
-    let clause = if angle {
-        "EN 1993-1-2 4.2.3.2 (4.5), buckling about v-v"
-    } else if about_z >= about_y {
-        "EN 1993-1-2 4.2.3.2 (4.5), buckling about z-z"
-    } else {
-        "EN 1993-1-2 4.2.3.2 (4.5), buckling about y-y"
-    };
-    Ok((t, clause))
+/// The limit of one effect.
+struct Check {
+    bare: Temperature,
+    protected: Temperature,
+    clause: String,
+    class: Option<Classified>,
 }
 
-fn bending_limit(
-    member: &Member,
-    moment: Moment,
-    continuous: bool,
-    properties: &Properties,
-    class: Option<u8>,
-) -> Result<Limit, Unverified> {
-    let modulus = match class {
-        Some(1 | 2) => properties.wpl_y_mm3,
-        Some(3 | 4) => properties.wel_y_mm3,
-        _ => {
-            return Err(Unverified::NotCovered(
-                "the cross-section class in bending is not known",
-            ));
+impl Check {
+    /// The check of a class, which for class 4 holds the temperature to 350 °C.
+    fn new(bare: Temperature, protected: Temperature, clause: &str, class: Option<Classified>) -> Self {
+        let mut check = Self {
+            bare,
+            protected,
+            clause: clause.to_owned(),
+            class,
+        };
+        if let Some(Classified { class: 4, governing }) = &check.class {
+            // Above 350 °C both ways, the clause is that of class 4; else the resistance of the gross section governs.
+            let above = protected.celsius() >= CLASS_4;
+            check.clause = if above {
+                format!("EN 1993-1-2 4.2.3.6 (2), class 4: {governing}")
+            } else {
+                format!("{clause}, class 4: {governing}")
+            };
+            let held = |t: Temperature| Temperature::from_celsius(t.celsius().min(CLASS_4));
+            (check.bare, check.protected) = (held(bare), held(protected));
         }
-    };
-    let cold = modulus * member.fy.mpa() / 1e6 / member.gamma_m_fi;
-    if moment.knm().abs() > cold {
-        return Err(Unverified::FailsCold(moment.knm().abs() / cold));
+        check
     }
-    let kappa2 = if continuous { 0.85 } else { 1.0 };
-    let at = |kappa1: f64| {
-        meets(moment.knm().abs(), |celsius| {
-            cold * (yield_factor(celsius) / (kappa1 * kappa2)).min(1.0)
-        })
+}
+
+/// The lowest of the checks, of which there is one at least.
+fn lowest(checks: Vec<Check>) -> Result<Limit, Unverified> {
+    let low = |of: fn(&Check) -> Temperature| checks.iter().min_by(|a, b| of(a).celsius().total_cmp(&of(b).celsius()));
+    let (Some(bare), Some(protected)) = (low(|check| check.bare), low(|check| check.protected)) else {
+        return not_covered("the effects in fire are all zero");
     };
-    let (bare, protected) = if member.slab {
-        (at(0.70)?, at(0.85)?)
-    } else {
-        (at(1.0)?, at(1.0)?)
-    };
-    let governing = "EN 1993-1-2 4.2.3.3 (4.8), (4.10), bending, laterally restrained".to_owned();
+    // A check without a class (shear) may govern beside one with a class (bending), which the member then has.
+    let class = [protected.class.as_ref()]
+        .into_iter()
+        .chain(checks.iter().map(|check| check.class.as_ref()))
+        .flatten()
+        .next();
     Ok(Limit {
-        bare,
-        protected,
-        governing,
-        class,
+        bare: bare.bare,
+        protected: protected.protected,
+        governing_bare: bare.clause.clone(),
+        governing: protected.clause.clone(),
+        class: class.map(|class| class.class),
+        class_note: class.map(|class| class.governing.clone()),
     })
 }
+
+fn by_utilisation(member: &Member, mu0: f64) -> Result<Limit, Unverified> {
+    let temperature = utilisation::critical_from_utilisation(mu0)?;
+    let class = if member.tension_member {
+        None
+    } else {
+        let action = if member.compression_member {
+            Action::Compression
+        } else {
+            Action::Bending
+        };
+        match classify(&member.shape, member.fy, action) {
+            Some(class) => Some(class),
+            None => return not_covered("the class of a stated section is not known, and (4.22) is for classes 1 to 3"),
+        }
+    };
+    lowest(vec![Check::new(temperature, temperature, utilisation::CLAUSE, class)])
+}
+
+/// A magnitude that is there and not zero.
+///
+/// # Errors
+/// What is not a number.
+fn stated(value: Option<f64>) -> Result<Option<f64>, Unverified> {
+    match value {
+        Some(value) if !value.is_finite() => not_covered("an effect in fire is not a finite number"),
+        value => Ok(value.filter(|value| *value != 0.0)),
+    }
+}
+
+fn by_effects(member: &Member, actions: &Actions) -> Result<Limit, Unverified> {
+    let compression = stated(actions.axial_compression.map(Force::kn))?;
+    let pull = stated(actions.axial_tension.map(Force::kn))?;
+    let moment = stated(actions.bending.map(Moment::knm))?;
+    let minor = stated(actions.bending_minor.map(Moment::knm))?;
+    let sheared = stated(actions.shear.map(Force::kn))?;
+    if compression.is_some_and(|n| n < 0.0) || pull.is_some_and(|n| n < 0.0) {
+        return not_covered("an axial force is to be given as a positive number");
+    }
+    if compression.is_some() && pull.is_some() {
+        return not_covered("compression and tension can't act at once");
+    }
+    let axial = compression.or(pull);
+    if axial.is_some() && (moment.is_some() || minor.is_some()) {
+        return not_covered("axial force with bending is not yet computed");
+    }
+    if moment.is_some() && minor.is_some() {
+        return not_covered("bending about both axes is not yet computed");
+    }
+    if minor.is_some() && sheared.is_some() {
+        return not_covered("shear with bending about the weak axis is not yet computed");
+    }
+    let properties = match member.shape.properties() {
+        Ok(Some(properties)) => properties,
+        Ok(None) => {
+            return not_covered(
+                "the resistance of a stated section is not known; state the critical temperature instead",
+            );
+        }
+        Err(error) => return Err(Unverified::NotCovered(error.to_string())),
+    };
+    let mut checks = Vec::new();
+    if let Some(force) = compression {
+        checks.push(compressed(member, actions, &properties, force)?);
+    }
+    if let Some(force) = pull {
+        let at = meets(force, tension::CLAUSE, |t| {
+            tension::resistance(properties.area, member.fy, member.gamma_m_fi, t).kn()
+        })?;
+        checks.push(Check::new(at, at, tension::CLAUSE, None));
+    }
+    if let Some(force) = sheared {
+        checks.push(in_shear(member, &properties, force.abs())?);
+    }
+    if let Some(moment) = moment {
+        let axis = bending::Axis::Y;
+        held_laterally(member, actions, &properties)?;
+        checks.push(bent(member, actions, &properties, axis, moment.abs())?);
+    }
+    if let Some(moment) = minor {
+        checks.push(bent(member, actions, &properties, bending::Axis::Z, moment.abs())?);
+    }
+    lowest(checks)
+}
+
+/// A length that is there and sound.
+fn length(value: Option<Length>, key: &'static str) -> Result<Length, Unverified> {
+    match value {
+        None => Err(Unverified::Missing(key)),
+        Some(value) if value.mm().is_finite() && value.mm() >= 0.0 => Ok(value),
+        Some(_) => Err(Unverified::NotCovered(format!("the {key} is not a length"))),
+    }
+}
+
+fn compressed(member: &Member, actions: &Actions, properties: &Properties, force: f64) -> Result<Check, Unverified> {
+    let y = length(actions.buckling_length, "buckling length")?;
+    let z = match actions.buckling_length_minor {
+        None => y,
+        minor => length(minor, "buckling length minor")?,
+    };
+    let (axis, slenderness) = buckling::governing_slenderness(&member.shape, properties, member.fy, Lengths { y, z });
+    if slenderness > 0.0 && twists(&member.shape) {
+        return not_covered("torsional-flexural buckling, which this shape is prone to, is not yet computed");
+    }
+    let clause = if slenderness > 0.0 {
+        axis.clause()
+    } else {
+        "EN 1993-1-2 4.2.3.2 (4.5), compression"
+    };
+    let at = meets(force, clause, |t| {
+        buckling::resistance(slenderness, properties, member.fy, member.gamma_m_fi, t).kn()
+    })?;
+    let class = classify(&member.shape, member.fy, Action::Compression);
+    Ok(Check::new(at, at, clause, class))
+}
+
+/// Whether torsional-flexural buckling can govern over flexural buckling: the shear centre lies off the centroid. An
+/// angle is taken by its axis v-v alone, as EN 1993-1-1:2005 BB.1.2 does.
+fn twists(shape: &Shape) -> bool {
+    match shape {
+        Shape::Channel(_) | Shape::TaperChannel(_) | Shape::Tee(_) | Shape::TaperTee(_) => true,
+        Shape::WeldedI(i) => i.b_top != i.b_bottom || i.tf_top != i.tf_bottom,
+        _ => false,
+    }
+}
+
+fn in_shear(member: &Member, properties: &Properties, force: f64) -> Result<Check, Unverified> {
+    let Some(area) = shear::area(&member.shape, properties) else {
+        return not_covered("the shear area of this shape is not known");
+    };
+    if shear::web_is_slender(&member.shape, member.fy) {
+        return not_covered("shear buckling, which the slender web is prone to, is not yet computed");
+    }
+    let at = meets(force, shear::CLAUSE, |t| {
+        shear::resistance(area, member.fy, member.gamma_m_fi, t).kn()
+    })?;
+    Ok(Check::new(at, at, shear::CLAUSE, None))
+}
+
+/// Refuses a beam that can buckle sideways. Hollow and solid sections bent about their weak axis, square and circular
+/// ones among them, can't (EN 1993-1-1:2005 6.3.2.1 (2)).
+fn held_laterally(member: &Member, actions: &Actions, properties: &Properties) -> Result<(), Unverified> {
+    let stiff = match member.shape {
+        Shape::RectangularHollow(_) | Shape::CircularHollow(_) | Shape::Flat(_) | Shape::Round(_) => {
+            properties.iy_mm4 <= properties.iz_mm4 * (1.0 + 1e-9)
+        }
+        _ => false,
+    };
+    if stiff || actions.laterally_restrained || length(actions.lateral_length, "lateral length")?.mm() == 0.0 {
+        return Ok(());
+    }
+    not_covered("lateral-torsional buckling is not yet computed")
+}
+
+fn bent(
+    member: &Member,
+    actions: &Actions,
+    properties: &Properties,
+    axis: bending::Axis,
+    moment: f64,
+) -> Result<Check, Unverified> {
+    if matches!(member.shape, Shape::Angle(_)) {
+        return not_covered("bending of angles is not yet computed");
+    }
+    let (action, major) = match axis {
+        bending::Axis::Y => (Action::Bending, true),
+        bending::Axis::Z => (Action::BendingMinor, false),
+    };
+    let Some(class) = classify(&member.shape, member.fy, action) else {
+        return not_covered("the cross-section class in bending is not known");
+    };
+    let bent = Bent {
+        shape: &member.shape,
+        properties,
+        class: class.class,
+        axis,
+        fy: member.fy,
+        gamma_m_fi: member.gamma_m_fi,
+        gamma_m0: member.gamma_m0,
+        shear: actions.shear.filter(|_| major),
+    };
+    let clause = bending::clause(class.class);
+    let at = |protected: bool| {
+        // Under a slab the temperature differs along the depth, which is no help about z-z.
+        let kappa = Kappa::of(member.slab_on_three_sides && major, protected, actions.continuous);
+        meets(moment, clause, |t| bending::resistance(&bent, kappa, t).knm())
+    };
+    Ok(Check::new(at(false)?, at(true)?, clause, Some(class)))
+}
+
+#[cfg(test)]
+mod tests;

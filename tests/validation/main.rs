@@ -5,7 +5,9 @@
 mod heating;
 mod heating_grid;
 mod reference;
-mod resistance;
+mod resistance_cte_db_si;
+mod resistance_en_1993_1_2;
+mod resistance_multi_storey_guide;
 mod support;
 
 mod section_australian_tables;
