@@ -8,6 +8,7 @@ pub mod bending;
 pub mod buckling;
 pub mod class;
 pub mod critical;
+mod effects;
 pub mod grade;
 pub mod reduction;
 mod search;

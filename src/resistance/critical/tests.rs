@@ -1,4 +1,7 @@
+//! What governs, and what is refused.
+
 use super::*;
+use crate::resistance::{buckling, tension};
 use crate::section::catalogue::{Lookup, LookupOptions, find};
 use crate::section::shape::{Angle, RectangularHollow, Stated};
 use crate::units::Area;
