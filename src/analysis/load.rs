@@ -3,7 +3,7 @@
 use std::path::{Path, PathBuf};
 use std::sync::Arc;
 
-use rustc_hash::FxHashMap;
+use rustc_hash::{FxHashMap, FxHashSet};
 
 use crate::analysis::design::{Design, LinkKind, LinkTrouble, MemberAt};
 use crate::analysis::files::{Files, ReadTrouble};
@@ -12,7 +12,8 @@ use crate::analysis::source::{FileKind, SourceFile};
 use crate::design::decode::fire::BUILT_IN;
 
 /// Reads files and assembles every design among them. A part whose head lists it belongs to the head's design and is no
-/// design of its own. Files that can't be read are answered with their trouble.
+/// design of its own; its head is read even where it is not among the files, for a part says little without it. Files
+/// that can't be read are answered with their trouble.
 #[must_use]
 pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf, ReadTrouble)>) {
     let mut troubles = Vec::new();
@@ -23,19 +24,48 @@ pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf,
             Err(trouble) => troubles.push((path.clone(), trouble)),
         }
     }
+    let asked: FxHashSet<&PathBuf> = paths.iter().collect();
+    let mut heads = FxHashSet::default();
+    for part in 0..sources.len() {
+        let source: &Arc<SourceFile> = &sources[part];
+        let named = source.head.part_of.value();
+        if let Some(Ok(head)) = named.map(|name| files.follow(&source.path, name))
+            && !asked.contains(&head)
+            && heads.insert(head.clone())
+            && let Ok(text) = files.read(&head)
+        {
+            sources.push(Arc::new(read(Arc::new(head), text)));
+        }
+    }
     let designs: Vec<Design> = sources
         .iter()
         .map(|source| assemble(files, Arc::clone(source)))
         .collect();
-    let taken: Vec<PathBuf> = designs
-        .iter()
-        .flat_map(|design| design.files.iter().skip(1).map(|file| file.path.to_path_buf()))
-        .collect();
-    let designs = designs
+    let designs: Vec<Design> = designs
         .into_iter()
-        .filter(|design| !taken.contains(&design.files[0].path))
+        .filter(|design| design.files.iter().any(|file| asked.contains(&*file.path)))
         .collect();
-    (designs, troubles)
+    let taken: FxHashSet<Arc<PathBuf>> = designs
+        .iter()
+        .flat_map(|design| design.files.iter().skip(1).map(|file| Arc::clone(&file.path)))
+        .collect();
+    let (mut kept, others): (Vec<Design>, Vec<Design>) = designs
+        .into_iter()
+        .partition(|design| !taken.contains(&design.files[0].path));
+    // Files that take each other in a circle would all be gone.
+    let mut held: FxHashSet<Arc<PathBuf>> = FxHashSet::default();
+    held.extend(
+        kept.iter()
+            .flat_map(|design| &design.files)
+            .map(|file| Arc::clone(&file.path)),
+    );
+    for design in others {
+        if !held.contains(&design.files[0].path) {
+            held.extend(design.files.iter().map(|file| Arc::clone(&file.path)));
+            kept.push(design);
+        }
+    }
+    (kept, troubles)
 }
 
 /// Follows the parts and libraries of a head file.

@@ -1,11 +1,10 @@
-//! Files on disk, and those of the built-in scenario.
+//! Files on disk, as the core asks for them.
 
+use std::io::Read;
 use std::path::{Component, Path, PathBuf};
 use std::sync::Arc;
 
 use crate::analysis::files::{Files, PathTrouble, ReadTrouble};
-use crate::analysis::read::kind_by_name;
-use crate::scenario;
 use crate::syntax::MAX_BYTES;
 use crate::text::decode;
 
@@ -26,7 +25,7 @@ fn workspace(file: &Path) -> PathBuf {
 impl Files for Disk {
     fn follow(&self, from: &Path, relative: &str) -> Result<PathBuf, PathTrouble> {
         let wanted = Path::new(relative);
-        if wanted.is_absolute() || relative.starts_with('\\') {
+        if wanted.is_absolute() || wanted.has_root() || relative.starts_with('\\') {
             return Err(PathTrouble::Outside("by an absolute path"));
         }
         let root = workspace(from);
@@ -42,7 +41,8 @@ impl Files for Disk {
                     }
                 }
                 Component::Normal(name) => path.push(name),
-                _ => {}
+                Component::CurDir => {}
+                Component::Prefix(_) | Component::RootDir => return Err(PathTrouble::Outside("by an absolute path")),
             }
         }
         match std::fs::canonicalize(&path) {
@@ -56,69 +56,22 @@ impl Files for Disk {
 
     fn read(&self, path: &Path) -> Result<Arc<str>, ReadTrouble> {
         let system = |error: std::io::Error| ReadTrouble::System(error.to_string());
-        let size = std::fs::metadata(path).map_err(system)?.len();
-        if size > MAX_BYTES {
-            return Err(ReadTrouble::TooLarge { size, limit: MAX_BYTES });
+        let about = std::fs::metadata(path).map_err(system)?;
+        // A device or a pipe may never end.
+        if !about.is_file() {
+            return Err(ReadTrouble::System("it is no file".to_owned()));
         }
-        let bytes = std::fs::read(path).map_err(system)?;
+        let too_large = |size| ReadTrouble::TooLarge { size, limit: MAX_BYTES };
+        if about.len() > MAX_BYTES {
+            return Err(too_large(about.len()));
+        }
+        // Some files hold more than the size they give.
+        let mut bytes = Vec::with_capacity(usize::try_from(about.len()).unwrap_or(0));
+        let file = std::fs::File::open(path).map_err(system)?;
+        file.take(MAX_BYTES + 1).read_to_end(&mut bytes).map_err(system)?;
+        if bytes.len() as u64 > MAX_BYTES {
+            return Err(too_large(bytes.len() as u64));
+        }
         decode(bytes).map(Arc::from).map_err(ReadTrouble::Encoding)
-    }
-}
-
-/// Design files among paths; folders are searched, hidden ones left out.
-pub fn designs(paths: &[PathBuf]) -> Result<Vec<PathBuf>, String> {
-    let mut found = Vec::new();
-    for path in paths {
-        if path.is_dir() {
-            search(path, &mut found);
-        } else if path.exists() {
-            found.push(path.clone());
-        } else {
-            return Err(format!("there is no file or folder `{}`", path.display()));
-        }
-    }
-    let mut real: Vec<PathBuf> = found
-        .iter()
-        .filter_map(|path| std::fs::canonicalize(path).ok())
-        .collect();
-    real.sort();
-    real.dedup();
-    Ok(real)
-}
-
-fn search(folder: &Path, found: &mut Vec<PathBuf>) {
-    let Ok(entries) = std::fs::read_dir(folder) else { return };
-    for entry in entries.flatten() {
-        let path = entry.path();
-        let name = entry.file_name();
-        let hidden = name.to_string_lossy().starts_with('.') || name == "target" || name == "node_modules";
-        // A folder behind a symlink may lead in a circle.
-        let kind = entry.file_type();
-        if kind.as_ref().is_ok_and(std::fs::FileType::is_dir) && !hidden {
-            search(&path, found);
-        } else if path.is_file() && kind_by_name(&path).is_some() {
-            found.push(path);
-        }
-    }
-}
-
-/// The files of the built-in scenario.
-pub struct Scenario;
-
-impl Files for Scenario {
-    fn follow(&self, _: &Path, relative: &str) -> Result<PathBuf, PathTrouble> {
-        let known = scenario::FILES.iter().any(|(name, _)| *name == relative);
-        if known {
-            Ok(PathBuf::from(relative))
-        } else {
-            Err(PathTrouble::Missing)
-        }
-    }
-
-    fn read(&self, path: &Path) -> Result<Arc<str>, ReadTrouble> {
-        let found = scenario::FILES.iter().find(|(name, _)| Path::new(name) == path);
-        found
-            .map(|(_, text)| Arc::from(*text))
-            .ok_or_else(|| ReadTrouble::System("no such file".to_owned()))
     }
 }

@@ -1,7 +1,10 @@
 //! JSON of findings, schedules and sections.
 
-use serde_json::{Value, json};
+use std::path::Path;
 
+use serde_json::{Map, Value, json};
+
+use crate::analysis::source::SourceFile;
 use crate::check::Checked;
 use crate::findings::finding::{Finding, Place, Severity};
 use crate::report::schedule::Schedule;
@@ -9,8 +12,11 @@ use crate::section::catalogue::CatalogueRow;
 use crate::section::{Casing, Exposure, heated};
 use crate::text::{Encoding, LineIndex, Position};
 
+/// How a path is written.
+pub type ShowPath<'a> = dyn Fn(&Path) -> String + 'a;
+
 /// Lines of every file of a design, for positions.
-struct Lines<'a>(Vec<(&'a crate::analysis::source::SourceFile, LineIndex)>);
+struct Lines<'a>(Vec<(&'a SourceFile, LineIndex)>);
 
 impl Lines<'_> {
     fn position(&self, place: &Place, offset: u32) -> Value {
@@ -30,20 +36,17 @@ impl Lines<'_> {
     }
 }
 
-/// The findings of designs: one-based lines and columns in Unicode scalars, the end excluded.
+/// The findings of designs, and those that a departure agrees to: one-based lines and columns in Unicode scalars, the
+/// end excluded.
 #[must_use]
-pub fn check(checked: &[Checked]) -> String {
+pub fn check(checked: &[Checked], show: &ShowPath<'_>) -> String {
     let mut findings = Vec::new();
+    let mut agreed = Vec::new();
     for design in checked {
-        let lines = Lines(
-            design
-                .design
-                .files
-                .iter()
-                .map(|file| (&**file, LineIndex::new(&file.text)))
-                .collect(),
-        );
-        findings.extend(design.findings.iter().map(|finding| one(finding, &lines)));
+        let files = design.design.files.iter();
+        let lines = Lines(files.map(|file| (&**file, LineIndex::new(&file.text))).collect());
+        findings.extend(design.findings.iter().map(|finding| one(finding, &lines, show)));
+        agreed.extend(design.agreed.iter().map(|finding| one(finding, &lines, show)));
     }
     let count = |severity: Severity| {
         checked
@@ -52,14 +55,14 @@ pub fn check(checked: &[Checked]) -> String {
             .filter(|finding| finding.severity == severity)
             .count()
     };
-    let counts: serde_json::Map<String, Value> = Severity::ALL
+    let counts: Map<String, Value> = Severity::ALL
         .into_iter()
         .map(|severity| (severity.word().to_owned(), json!(count(severity))))
         .collect();
-    pretty(&json!({ "findings": findings, "counts": counts }))
+    pretty(&json!({ "findings": findings, "counts": counts, "departures": agreed }))
 }
 
-fn one(finding: &Finding, lines: &Lines<'_>) -> Value {
+fn one(finding: &Finding, lines: &Lines<'_>, show: &ShowPath<'_>) -> Value {
     let fixes: Vec<Value> = finding
         .fixes
         .iter()
@@ -69,7 +72,7 @@ fn one(finding: &Finding, lines: &Lines<'_>) -> Value {
                 .iter()
                 .map(|edit| {
                     json!({
-                        "path": edit.place.path.display().to_string(),
+                        "path": show(&edit.place.path),
                         "start": lines.start(&edit.place), "end": lines.end(&edit.place), "text": edit.text,
                     })
                 })
@@ -82,7 +85,7 @@ fn one(finding: &Finding, lines: &Lines<'_>) -> Value {
         "severity": finding.severity.word(),
         "message": finding.message,
         "notes": finding.notes.iter().map(|note| note.text.clone()).collect::<Vec<_>>(),
-        "path": finding.place.path.display().to_string(),
+        "path": show(&finding.place.path),
         "start": lines.start(&finding.place),
         "end": lines.end(&finding.place),
         "mark": finding.mark,
@@ -105,8 +108,7 @@ pub fn sections(rows: &[&CatalogueRow]) -> String {
 }
 
 /// One row of the section tables.
-#[must_use]
-pub fn section(row: &CatalogueRow) -> Value {
+pub(super) fn section(row: &CatalogueRow) -> Map<String, Value> {
     let geometry = row.geometry();
     let factor = |exposure, casing| {
         heated(geometry, exposure, casing)
@@ -114,7 +116,7 @@ pub fn section(row: &CatalogueRow) -> Value {
             .map(|heated| heated.factor.per_m())
     };
     let size = |name: &str| row.shape.dimension(name).map(|length| length.mm());
-    json!({
+    let all = json!({
         "designation": &*row.designation,
         "family": &*row.family,
         "shape": row.shape.name(),
@@ -134,41 +136,16 @@ pub fn section(row: &CatalogueRow) -> Value {
         "three_sides_per_m": factor(Exposure::ThreeSides, Casing::Profile),
         "box_all_round_per_m": factor(Exposure::AllRound, Casing::Box),
         "box_three_sides_per_m": factor(Exposure::ThreeSides, Casing::Box),
-    })
+    });
+    object(&all)
 }
 
-/// Objects as rows of text, for tables and CSV: the keys, then a row each.
-#[must_use]
-pub fn rows(values: &[Value]) -> (Vec<String>, Vec<Vec<String>>) {
-    let keys: Vec<String> = match values.first() {
-        Some(Value::Object(map)) => map.keys().cloned().collect(),
-        _ => Vec::new(),
-    };
-    let cell = |value: &Value| match value {
-        Value::Null => String::new(),
-        Value::String(text) => text.clone(),
-        Value::Array(list) => list
-            .iter()
-            .map(|v| v.as_str().unwrap_or_default())
-            .collect::<Vec<_>>()
-            .join("; "),
-        other => other.to_string(),
-    };
-    let rows = values
-        .iter()
-        .map(|value| keys.iter().map(|key| cell(&value[key.as_str()])).collect())
-        .collect();
-    (keys, rows)
-}
-
-/// The rows of a schedule as objects.
-#[must_use]
-pub fn schedule_rows(schedule: &Schedule) -> Vec<Value> {
-    schedule
-        .members
-        .iter()
-        .map(|row| serde_json::to_value(row).unwrap_or(Value::Null))
-        .collect()
+/// A row as an object; its keys in their order.
+pub(super) fn object(row: &impl serde::Serialize) -> Map<String, Value> {
+    match serde_json::to_value(row) {
+        Ok(Value::Object(map)) => map,
+        _ => Map::new(),
+    }
 }
 
 fn pretty(value: &Value) -> String {
