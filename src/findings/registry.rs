@@ -74,6 +74,8 @@ pub static REGISTRY: &[&Declaration] = &[
     &design_intent::support_cycle::DECLARATION,
     &design_intent::bare_on_protected::DECLARATION,
     &design_intent::shield_not_stated::DECLARATION,
+    &design_intent::deck_contact_low::DECLARATION,
+    &design_intent::deck_voids_unfilled::DECLARATION,
     &design_intent::thin_steel::DECLARATION,
     &departures::departure_without_reason::DECLARATION,
     &departures::departure_expired::DECLARATION,

@@ -1,8 +1,9 @@
 //! A bare member rests on a protected one and draws heat into it.
 
-use super::Support;
+use super::{Cover, Support};
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
+use crate::units::Length;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -18,12 +19,17 @@ pub static DECLARATION: Declaration = Declaration {
 - { mark: B2, section: IPE 400, critical temperature: 550, protection: grey board }",
 };
 
-/// A bare member on a protected support.
+/// How far the protection runs on along the bare member, in mm.
+const RUN_ON: f64 = 500.0;
+
+/// A bare member on a protected support, by what the file states: heat flows whether or not either is verified.
 pub(super) fn check(link: &mut Support<'_>) {
-    if link.carried.protected.is_none() && link.carried.bare.is_some() && link.outcome.protected.is_some() {
+    if (link.carried, link.cover) == (Cover::Bare, Cover::Product) {
         let message = format!(
-            "{0} is bare and rests on {1}, which is protected: run the protection on for 500 mm along {0}",
-            link.mark, link.name
+            "{0} is bare and rests on {1}, which is protected: run the protection on for {2} along {0}",
+            link.mark,
+            link.name,
+            link.units.thickness(Length::from_mm(RUN_ON))
         );
         link.add(&DECLARATION, message);
     }

@@ -1,10 +1,11 @@
 //! Faces are said to be covered, but nothing sound covers them.
 
-use crate::analysis::exposure::{ShieldDoubt, reached};
+use super::doubt;
+use crate::analysis::exposure::ShieldDoubt;
+use crate::design::model::member::Shield;
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
-use crate::section::Exposure;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -18,26 +19,25 @@ pub static DECLARATION: Declaration = Declaration {
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, exposure: three sides, shielded by: slab }",
 };
 
-/// Faces that are said to be covered by something unsaid or unsound.
+/// Faces that are said to be covered by something unsaid, or by nothing that stops a fire.
 pub(super) fn check(cx: &mut Context<'_>) {
-    let exposure = cx.keys.get(|keys| &keys.exposure).value().copied();
-    let shield = cx.keys.get(|keys| &keys.shield).value().copied();
-    let Some(doubt) = reached(exposure.unwrap_or(Exposure::AllRound), shield).doubt else {
-        return;
-    };
-    let why = match doubt {
-        ShieldDoubt::NotStated => {
-            "nothing is said to cover the rest: state `shielded by` (computed as stated, κ1 = 1)".to_owned()
+    let why = match doubt(cx) {
+        Some(ShieldDoubt::NotStated) => {
+            "nothing is said to cover the rest: state `shielded by` (computed as stated, κ1 = 1)"
         }
-        ShieldDoubt::NoShield => "bare sheeting or nothing is no shield: computed all round".to_owned(),
-        ShieldDoubt::LowContact(share) => format!(
-            "the deck touches {:.0} % of the flange, less than 85 %, and its voids are not filled: computed all round",
-            100.0 * share
-        ),
-        ShieldDoubt::VoidsOpen => {
-            "the deck's contact is not stated and its voids are not filled: computed all round".to_owned()
-        }
+        Some(ShieldDoubt::NoShield) => match cx.keys.get(|keys| &keys.shield).value() {
+            Some(Shield::Deck { concrete: None, .. }) => {
+                "its deck is not said to carry concrete: computed all round until `concrete: yes` is stated"
+            }
+            Some(Shield::Deck { .. }) => "bare sheeting is no shield: computed all round",
+            _ => "it is shielded by nothing: computed all round",
+        },
+        _ => return,
     };
     let message = format!("{} is exposed on part of its faces, but {why}", cx.mark);
-    cx.add(&DECLARATION, "exposure", cx.own().exposure.span(), message);
+    let (own, key) = match cx.own().shield.span() {
+        Some(span) => (Some(span), "shielded by"),
+        None => (cx.own().exposure.span(), "exposure"),
+    };
+    cx.add(&DECLARATION, key, own, message);
 }

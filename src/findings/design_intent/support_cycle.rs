@@ -1,9 +1,8 @@
 //! Members support each other in a circle.
 
-use crate::analysis::design::{Design, MemberAt};
-use crate::findings::finding::{Finding, Place, Severity};
+use super::links::{Link, Links};
+use crate::findings::finding::{Finding, Severity};
 use crate::findings::registry::Declaration;
-use rustc_hash::FxHashSet;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -19,50 +18,55 @@ pub static DECLARATION: Declaration = Declaration {
 - { mark: B2, section: IPE 300 }",
 };
 
-/// Circles of support, each reported once, by a depth-first walk without recursion.
-pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
-    let mut done: FxHashSet<MemberAt> = FxHashSet::default();
-    for start in &design.members {
-        let mut path: Vec<(MemberAt, usize)> = vec![(*start, 0)];
-        let mut on_path: FxHashSet<MemberAt> = FxHashSet::from_iter([*start]);
-        while let Some((at, next)) = path.last_mut() {
-            let here = *at;
-            let supports = &design.member(here).value().keys.supported_by;
-            let name = supports.value().and_then(|names| names.get(*next));
-            let Some(name) = name.filter(|_| !done.contains(&here)) else {
-                done.insert(here);
-                on_path.remove(&here);
+/// How many members of a circle are named.
+const NAMED: usize = 6;
+
+/// Where the walk stands with a member.
+#[derive(Clone, Copy, PartialEq)]
+enum State {
+    New,
+    /// On the path, so many members below where it began.
+    OnPath(usize),
+    Done,
+}
+
+/// Circles of support, one for each link that closes one, by a depth-first walk without recursion.
+pub(super) fn check(links: &Links<'_>, out: &mut Vec<Finding>) {
+    let mut state = vec![State::New; links.members()];
+    let mut path: Vec<(usize, usize)> = Vec::new();
+    for start in 0..links.members() {
+        if state[start] != State::New {
+            continue;
+        }
+        state[start] = State::OnPath(0);
+        path.push((start, 0));
+        while let Some((here, next)) = path.last_mut() {
+            let Some(link) = links.under(*here).get(*next).copied() else {
+                state[*here] = State::Done;
                 path.pop();
                 continue;
             };
             *next += 1;
-            let Some(to) = design.marks.get(&name.value).copied() else {
-                continue;
-            };
-            if on_path.contains(&to) {
-                let from = path.iter().position(|(at, _)| *at == to).unwrap_or(0);
-                let circle: Vec<MemberAt> = path[from..].iter().map(|(at, _)| *at).collect();
-                out.push(closed(
-                    design,
-                    &circle,
-                    &name.value,
-                    super::place(design, here, name.span),
-                ));
-            } else if !done.contains(&to) {
-                on_path.insert(to);
-                path.push((to, 0));
+            match state[link.to] {
+                State::Done => {}
+                State::OnPath(from) => out.push(closed(links, &path[from..], link)),
+                State::New => {
+                    state[link.to] = State::OnPath(path.len());
+                    path.push((link.to, 0));
+                }
             }
         }
     }
 }
 
 /// The finding at the mark that closes a circle. Of a long one, the first few are named.
-fn closed(design: &Design, circle: &[MemberAt], name: &str, place: Place) -> Finding {
+fn closed(links: &Links<'_>, circle: &[(usize, usize)], link: Link<'_>) -> Finding {
     let marks: Vec<&str> = circle
         .iter()
-        .take(6)
-        .map(|at| design.member(*at).value().mark.value().map_or("?", String::as_str))
+        .take(NAMED)
+        .map(|(member, _)| links.mark(*member))
         .collect();
+    let name = links.mark(link.to);
     let message = match (marks.as_slice(), circle.len()) {
         ([only], _) => format!("{only} is said to support itself"),
         ([all @ .., last], n) if n == marks.len() => {
@@ -77,9 +81,5 @@ fn closed(design: &Design, circle: &[MemberAt], name: &str, place: Place) -> Fin
             n - some.len()
         ),
     };
-    let mut finding = Finding::new(&DECLARATION, place, message);
-    let last = circle.last().and_then(|at| design.member(*at).value().mark.value());
-    finding.mark = last.cloned();
-    finding.key = Some("supported by".to_owned());
-    finding
+    links.finding(link, &DECLARATION, message)
 }

@@ -1,6 +1,6 @@
 //! A support does not last as long as what it carries.
 
-use super::Support;
+use super::{Demand, Support};
 use crate::analysis::outcome::Verdict;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
@@ -21,14 +21,21 @@ pub static DECLARATION: Declaration = Declaration {
 
 /// A support that fails before what it carries may. One that is not verified is no proof either: a warning says so.
 pub(super) fn check(link: &mut Support<'_>) {
-    let Some(period) = link.period else { return };
+    let Some(Demand { period, asked_by }) = link.demand else {
+        return;
+    };
     let reached = match (&link.outcome.protected, link.outcome.bare, &link.outcome.critical) {
         (Some(state), ..) => state.resistance.map(|time| time.min()),
         (None, Some(bare), Some(_)) => Some(bare.resistance.map_or(360.0, |time| time.min())),
         _ => None,
     };
     let own = link.support_period.map_or(0.0, |time| time.min());
-    let must = format!("{} must last {:.0} min", link.mark, period.min());
+    let sake = if asked_by == link.link.from {
+        String::new()
+    } else {
+        format!(" for the sake of {}, which rests on it", link.links.mark(asked_by))
+    };
+    let must = format!("{} must last {:.0} min{sake}", link.mark, period.min());
     let lasts = match link.outcome.verdict {
         // A support that is verified for its own period lasts at least so long.
         Verdict::Passes => reached.unwrap_or(own).max(own),
