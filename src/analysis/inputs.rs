@@ -129,6 +129,11 @@ impl Inputs {
         need(&steel, "steel", &mut unread);
         need(&period, "period", &mut unread);
         note_unreadable(&keys, &mut unread);
+        // What an unknown group would have said is not known, nor what a syntax error hides in one that is.
+        let group = keys.get(|k| &k.group).value();
+        if group.is_some_and(|name| design.group(name).is_none_or(|(_, item)| item.is_broken())) {
+            unread.push("group");
+        }
         let section = section_input(section.value(), names, &mut unread, &mut not_covered);
         if keys.get(|k| &k.openings).value().is_some() {
             not_covered.push(("openings", "web openings are read but not yet computed"));
@@ -261,7 +266,7 @@ fn cover(keys: &Inherited<'_>, design: &Design, fire: &str) -> Cover {
         return Cover::Unknown;
     };
     let named = item.value();
-    let Some(product) = &named.product else {
+    let Some(product) = named.product.as_ref().filter(|_| !item.is_broken()) else {
         return Cover::Unknown;
     };
     let fire_assessed = if named.fires.is_empty() {

@@ -46,6 +46,12 @@ impl<T> Item<T> {
         &self.decoded.value
     }
 
+    /// Whether a syntax error broke its text: something may be lacking that its author wrote.
+    #[must_use]
+    pub fn is_broken(&self) -> bool {
+        !self.decoded.errors.is_empty()
+    }
+
     /// A span of the item as a span of the file.
     #[must_use]
     pub fn place(&self, span: Span) -> Span {

@@ -292,6 +292,15 @@ pub(super) fn units(design: &Design) -> DisplayUnits {
 fn called(key: &str) -> &str {
     match key {
         "thickness" | "form" | "reading" => "protection",
+        "buckling length"
+        | "buckling length minor"
+        | "lateral length"
+        | "moment shape"
+        | "axial"
+        | "bending"
+        | "bending minor"
+        | "shear"
+        | "reduction" => "loading",
         other => other,
     }
 }

@@ -16,7 +16,7 @@ use crate::design::model::member::Departure;
 use crate::findings::context;
 use crate::findings::finding::{Finding, Place, Severity};
 use crate::findings::registry;
-use crate::units::{DisplayUnits, Length, SectionFactor};
+use crate::units::{DisplayUnits, Length, SectionFactor, Time};
 
 /// Splits the findings of a member into open and agreed ones, and reports departures that don't hold.
 pub fn apply(
@@ -134,17 +134,23 @@ fn outgrown(departure: &Departure, outcome: &Outcome, units: DisplayUnits) -> Op
                 return Some(format!("it needed {}, now {}", show(was), show(needed.exact)));
             }
             Some(Err(refusal)) => return Some(format!("it needed {}, now {refusal}", show(was))),
-            _ => {}
+            None => return Some(format!("it needed {}, now what it needs is not known", show(was))),
+            Some(Ok(_)) => {}
         }
     }
-    if let (Some(was), Some(section)) = (departure.at.section_factor, &outcome.section)
-        && section.factor.per_m() > was + 0.5
-    {
-        return Some(format!(
-            "the section factor was {}, now {}",
-            units.section_factor(SectionFactor::from_per_m(was)),
-            units.section_factor(section.factor)
-        ));
+    if let Some(was) = departure.at.section_factor {
+        let show = |per_m| units.section_factor(SectionFactor::from_per_m(per_m));
+        match &outcome.section {
+            Some(section) if section.factor.per_m() > was + 0.5 => {
+                return Some(format!(
+                    "the section factor was {}, now {}",
+                    show(was),
+                    units.section_factor(section.factor)
+                ));
+            }
+            None => return Some(format!("the section factor was {}, now it is not known", show(was))),
+            Some(_) => {}
+        }
     }
     let temperature = outcome.bare.and_then(|bare| bare.at_period);
     let temperature = outcome
@@ -152,23 +158,34 @@ fn outgrown(departure: &Departure, outcome: &Outcome, units: DisplayUnits) -> Op
         .as_ref()
         .and_then(|state| state.at_period)
         .or(temperature);
-    if let (Some(was), Some(is)) = (departure.at.temperature, temperature)
-        && is.celsius() > was.celsius() + 0.5
-    {
-        return Some(format!(
-            "the steel reached {}, now {}",
-            units.temperature(was),
-            units.temperature(is)
-        ));
+    if let Some(was) = departure.at.temperature {
+        let was_at = format!("the steel reached {}", units.temperature(was));
+        match temperature {
+            Some(is) if is.celsius() > was.celsius() + 0.5 => {
+                return Some(format!("{was_at}, now {}", units.temperature(is)));
+            }
+            None => return Some(format!("{was_at}, now its temperature is not known")),
+            Some(_) => {}
+        }
     }
-    let resistance = outcome
-        .protected
-        .as_ref()
-        .map_or(outcome.bare.and_then(|bare| bare.resistance), |s| s.resistance);
-    if let (Some(was), Some(is)) = (departure.at.resistance, resistance)
-        && is.min() + 0.5 < was.min()
-    {
-        return Some(format!("it lasted {:.0} min, now {:.0} min", was.min(), is.min()));
+    if let Some(was) = departure.at.resistance {
+        let was_at = format!("it lasted {:.0} min", was.min());
+        match lasts(outcome) {
+            Some(is) if is + 0.5 < was.min() => return Some(format!("{was_at}, now {:.0} min", is.floor())),
+            None => return Some(format!("{was_at}, now it is not known how long it lasts")),
+            Some(_) => {}
+        }
     }
     None
+}
+
+/// How long a member lasts in minutes, infinite where the steel never gets so hot; `None` where nobody knows.
+fn lasts(outcome: &Outcome) -> Option<f64> {
+    outcome.critical.as_ref()?;
+    match &outcome.protected {
+        Some(state) => state.resistance.map(Time::min),
+        None => outcome
+            .bare
+            .map(|bare| bare.resistance.map_or(f64::INFINITY, Time::min)),
+    }
 }

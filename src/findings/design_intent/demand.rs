@@ -12,8 +12,8 @@ pub(super) struct Demand {
     pub asked_by: usize,
 }
 
-/// What is asked of every member, from the top of the frame down. Members in a circle ask for themselves only, and for
-/// what rests on the circle from outside: the circle is a finding of its own.
+/// What is asked of every member, from the top of the frame down. Members in a circle ask for themselves and for
+/// what rests on them from outside it: the circle is a finding of its own.
 pub(super) fn demands(links: &Links<'_>, period: impl Fn(usize) -> Option<Time>) -> Vec<Option<Demand>> {
     let own = |asked_by: usize| period(asked_by).map(|period| Demand { period, asked_by });
     let mut demands: Vec<Option<Demand>> = (0..links.members()).map(own).collect();

@@ -1,5 +1,6 @@
 //! The coating may not serve in the member's environment.
 
+use crate::design::model::member::Environment;
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
@@ -22,17 +23,25 @@ pub(super) fn check(cx: &mut Context<'_>) {
         return;
     };
     let wanted = cx.keys.get(|keys| &keys.environment).value().copied();
-    let (Some(wanted), Some(serves)) = (wanted, product.named.environment) else {
-        return;
-    };
-    if serves > wanted {
-        let message = format!(
+    let Some(wanted) = wanted else { return };
+    let message = match product.named.environment {
+        Some(serves) if serves > wanted => Some(format!(
             "{} stands in {}, but `{}` serves in {} at most",
             cx.mark,
             wanted.words(),
             product.name,
             serves.words()
-        );
+        )),
+        // Every coating serves in the mildest; that it serves in more is not to be guessed.
+        None if wanted < Environment::Z2 => Some(format!(
+            "{} stands in {}, but `{}` states no environment that it serves in",
+            cx.mark,
+            wanted.words(),
+            product.name
+        )),
+        _ => None,
+    };
+    if let Some(message) = message {
         cx.add(&DECLARATION, "protection", cx.own().protection.span(), message);
     }
 }

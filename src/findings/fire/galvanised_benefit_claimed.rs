@@ -20,6 +20,11 @@ pub static DECLARATION: Declaration = Declaration {
 /// A member whose zinc coating is counted on.
 pub(super) fn check(cx: &mut Context<'_>) {
     let surface = cx.keys.get(|keys| &keys.surface).value();
+    // Behind protection nothing radiates onto the zinc.
+    let protection = cx.keys.get(|keys| &keys.protection).value();
+    if protection.is_some_and(|stated| stated.product.is_some()) {
+        return;
+    }
     if matches!(surface, Some(Surface::GalvanisedTo { category: 'A' | 'B' })) {
         let message = format!(
             "{} is computed with an emissivity of 0.35 up to 500 °C for its declared zinc coating",

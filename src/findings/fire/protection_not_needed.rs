@@ -23,7 +23,8 @@ pub(super) fn check(cx: &mut Context<'_>) {
     else {
         return;
     };
-    if bare.resistance.is_some_and(|time| time.min() < period.min()) {
+    // A stated temperature that the loading contradicts proves nothing.
+    if critical.contradicted_by().is_some() || bare.resistance.is_some_and(|time| time.min() < period.min()) {
         return;
     }
     let reaches = bare.at_period.map_or_else(String::new, |steel| {

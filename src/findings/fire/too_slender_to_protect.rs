@@ -33,8 +33,20 @@ pub(super) fn check(cx: &mut Context<'_>) {
     else {
         return;
     };
-    if !matches!(state.requirement, Err(Refusal::TooSlender { .. })) {
-        return;
+    match &state.requirement {
+        Err(Refusal::TooSlender { .. }) => {}
+        // A film that its table gives, but that no stock of the product makes up.
+        Ok(needed) if needed.next.is_none() && state.provided.is_none() => {
+            let message = format!(
+                "{} can't be protected at {:.0} min: it needs {} of `{}`, but no build-up of its stock is so thick",
+                cx.mark,
+                period.min(),
+                cx.needed(needed.exact, product.film),
+                product.name
+            );
+            return cx.add(&DECLARATION, "protection", cx.own().protection.span(), message);
+        }
+        _ => return,
     }
     let choice = cx.keys.get(|keys| &keys.section).value();
     let row = row_of(choice, &lookup_options(cx.design.basis()));

@@ -18,10 +18,10 @@ pub static DECLARATION: Declaration = Declaration {
 };
 
 /// Keys that neither the member nor its group nor the defaults give. A broken member may have them where they can't be
-/// read, so nothing is said of it.
+/// read, and an unknown or broken group might give them, so nothing is said of those.
 pub(super) fn check(cx: &mut Context<'_>) {
-    let broken = cx.design.member(cx.at).value().broken;
     let outcome = cx.outcome;
+    let broken = cx.design.member(cx.at).value().broken || outcome.gaps.contains(&Gap::Unread("group"));
     for gap in &outcome.gaps {
         match gap {
             Gap::Unread(key) if !broken && wanted_and_absent(cx, key) => {

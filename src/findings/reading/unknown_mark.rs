@@ -1,8 +1,10 @@
 //! No member carries the mark.
 
-use crate::analysis::design::Design;
+use crate::analysis::design::{Design, MemberAt};
 use crate::design::keys::nearest;
+use crate::design::model::member::MemberKeys;
 use crate::findings::finding::{Finding, Fix, FixEdit, Place, Severity};
+use crate::findings::insert;
 use crate::findings::registry::Declaration;
 use std::sync::Arc;
 
@@ -23,49 +25,70 @@ pub static DECLARATION: Declaration = Declaration {
 /// Unknown marks for which the nearest is sought: each costs a pass over all marks.
 const SOUGHT: usize = 20;
 
-/// Marks under `supported by` and `steadies` that no member carries.
+/// Marks under `supported by` and `steadies` that no member carries: of members, and once of groups and defaults.
 pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
-    let mut sought = 0;
+    let mut search = Search { design, sought: 0, out };
     for at in &design.members {
         let item = design.member(*at);
-        let member = item.value();
-        let mark = member.mark.value().map_or("this member", String::as_str);
-        let keys = [
-            ("supported by", "is said to be supported by", &member.keys.supported_by),
-            ("steadies", "is said to steady", &member.keys.steadies),
+        let mark = item.value().mark.value().map(String::as_str);
+        let who = mark.unwrap_or("this member");
+        search.block(&item.value().keys, who, mark, at.file, item.base);
+    }
+    let mut groups: Vec<(usize, usize)> = design.groups.values().copied().collect();
+    groups.sort_unstable();
+    for (file, index) in groups {
+        let item = &design.files[file].groups[index];
+        let who = format!("each member of the group `{}`", item.value().name.value);
+        search.block(&item.value().keys, &who, None, file, item.base);
+    }
+    search.block(&design.head().defaults, "each member by default", None, 0, 0);
+}
+
+struct Search<'a> {
+    design: &'a Design,
+    sought: usize,
+    out: &'a mut Vec<Finding>,
+}
+
+impl Search<'_> {
+    /// The strange marks of one block of keys, whose text begins at `base` in its file.
+    fn block(&mut self, keys: &MemberKeys, who: &str, mark: Option<&str>, file: usize, base: u32) {
+        let file = &self.design.files[file];
+        let marks = &self.design.marks;
+        let lists = [
+            ("supported by", "is said to be supported by", &keys.supported_by),
+            ("steadies", "is said to steady", &keys.steadies),
         ];
-        for (key, does, given) in keys {
+        for (key, does, given) in lists {
             for name in given.value().into_iter().flatten() {
-                if design.marks.contains_key(&name.value) {
+                if marks.contains_key(&name.value) {
                     continue;
                 }
-                let near = (sought < SOUGHT)
-                    .then(|| {
-                        nearest(
-                            &name.value,
-                            design.marks.keys().map(String::as_str).filter(|known| *known != mark),
-                        )
-                    })
-                    .flatten();
-                sought += 1;
+                // In the order of the file, so that of equally near marks always the same is named.
+                let known = |at: &MemberAt| self.design.member(*at).value().mark.value().map(String::as_str);
+                let others = self.design.members.iter().filter_map(known);
+                let others = others.filter(|known| mark.is_none_or(|mark| mark != *known));
+                let near = (self.sought < SOUGHT).then(|| nearest(&name.value, others)).flatten();
+                self.sought += 1;
                 let perhaps = near.map_or_else(String::new, |near| format!("; perhaps {near}"));
-                let message = format!("{mark} {does} {}, but no member carries that mark{perhaps}", name.value);
+                let message = format!("{who} {does} {}, but no member carries that mark{perhaps}", name.value);
                 let place = Place {
-                    path: Arc::clone(&design.files[at.file].path),
-                    span: item.place(name.span),
+                    path: Arc::clone(&file.path),
+                    span: name.span.shift(base),
                 };
+                let near = near.filter(|_| !insert::through_alias(&file.text, place.span));
                 let mut finding = Finding::new(&DECLARATION, place.clone(), message);
-                finding.mark = member.mark.value().cloned();
+                finding.mark = mark.map(str::to_owned);
                 finding.key = Some(key.to_owned());
                 finding.fixes.extend(near.map(|near| Fix {
                     title: format!("write `{near}`"),
                     safe: false,
                     edits: vec![FixEdit {
                         place,
-                        text: near.to_owned(),
+                        text: insert::scalar(near),
                     }],
                 }));
-                out.push(finding);
+                self.out.push(finding);
             }
         }
     }

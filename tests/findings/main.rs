@@ -1,5 +1,8 @@
 //! Every finding's example through the one sequence: the text before has the finding, the text after has not.
 
+mod every_verdict;
+mod supports;
+
 use std::path::{Path, PathBuf};
 use std::sync::Arc;
 
