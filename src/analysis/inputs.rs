@@ -120,6 +120,12 @@ impl Inputs {
         if member.broken {
             unread.push("member");
         }
+        if keys.are_strange() {
+            unread.push("key");
+        }
+        if design.head().doubtful {
+            unread.push("head");
+        }
         let role = keys.get(|k| &k.role);
         let section = keys.get(|k| &k.section);
         let steel = keys.get(|k| &k.steel);

@@ -75,6 +75,7 @@ pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
             .iter()
             .all(|error| error.kind != crate::syntax::ErrorKind::NotYaml)
         {
+            top.file.head.doubtful = !tree.errors.is_empty();
             top.file.errors = tree.errors;
             top.whole(tree.root);
             top.finish();
@@ -124,6 +125,7 @@ impl Top<'_> {
         let known = Key::find(self.table(), &chunk.key).is_some();
         if !splits || !known {
             let tree = parse(chunk.span.slice(text));
+            self.file.head.doubtful |= !tree.errors.is_empty();
             self.file
                 .errors
                 .extend(tree.errors.into_iter().map(|error| error.shifted(chunk.span.start)));
@@ -167,6 +169,7 @@ impl Top<'_> {
     }
 
     fn no_key(&mut self, span: Span) {
+        self.file.head.doubtful = true;
         self.file.errors.push(SyntaxError {
             span: first_line(span, &self.file.text),
             kind: crate::syntax::ErrorKind::NotYaml,
@@ -178,6 +181,7 @@ impl Top<'_> {
     fn repeated(&mut self, key: &str, span: Span) -> bool {
         self.last_key = Some(span);
         if self.seen.iter().any(|seen| seen == key) {
+            self.file.head.doubtful = true;
             let message = format!("`{key}` stands twice at the top level; the first one holds");
             self.file.slips.push(Slip::new(SlipKind::NotYaml, span, message));
             return true;
@@ -210,11 +214,13 @@ impl Top<'_> {
                     let mut shifted = entry;
                     shift_entry(&mut shifted, base);
                     head::entry(&mut reader, &mut self.file.head, key, &shifted);
+                    self.file.head.doubtful |= key.name == "basis" && !reader.slips.is_empty();
                     self.file.slips.append(&mut reader.slips);
                     return;
                 }
             }
         } else {
+            self.file.head.doubtful = true;
             let node = Node {
                 span: entry.key.span,
                 value: Value::Mapping(vec![entry]),

@@ -37,6 +37,13 @@ pub struct Found<'a, T> {
 }
 
 impl<'a> Inherited<'a> {
+    /// Whether a key that is not known, or one that stands twice, stands in any of the three.
+    #[must_use]
+    pub fn are_strange(&self) -> bool {
+        let above = [self.group, self.defaults];
+        self.member.strange || above.into_iter().flatten().any(|keys| keys.strange)
+    }
+
     /// The first of member, group and defaults that has the key. A value that can't be read hides those beneath it:
     /// its author meant something else than they say. Mappings are replaced whole.
     pub fn get<T>(&self, field: impl Fn(&'a MemberKeys) -> &'a Given<T>) -> Found<'a, T> {

@@ -64,6 +64,7 @@ pub fn member(reader: &mut Reader, node: &Node, broken: bool) -> Member {
             _ => member_key(reader, &mut keys, key, &entry.value, Owner::Member),
         },
     );
+    keys.strange = has_strange_keys(reader, node);
     member.keys = keys;
     if is_mapping && member.mark.is_absent() && !broken {
         reader.missing(node.span, "mark", "a member");
@@ -97,7 +98,27 @@ pub fn shared_keys(reader: &mut Reader, node: &Node, owner: Owner) -> MemberKeys
             _ => member_key(reader, &mut keys, key, &entry.value, owner),
         }
     });
+    keys.strange = has_strange_keys(reader, node);
     keys
+}
+
+/// Whether a mapping of member keys has one that is not known, or one twice, and a verdict may rest on what was meant.
+/// Only where something is wrong at all is it gone through again.
+fn has_strange_keys(reader: &Reader, node: &Node) -> bool {
+    let Value::Mapping(entries) = &node.value else {
+        return true;
+    };
+    let mut seen: Vec<&str> = Vec::new();
+    !reader.slips.is_empty()
+        && entries.iter().any(|entry| {
+            let Value::Scalar(name) = &entry.key.value else {
+                return true;
+            };
+            let known = Key::find(table::MEMBER, &name.text).is_some() && !seen.contains(&name.text.as_str());
+            seen.push(&name.text);
+            let meant = Key::nearest(table::MEMBER, &name.text);
+            !known && meant.is_none_or(|meant| !table::ASIDE.contains(&meant))
+        })
 }
 
 fn member_key(reader: &mut Reader, keys: &mut MemberKeys, key: &'static Key, node: &Node, owner: Owner) {

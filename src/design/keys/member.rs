@@ -29,6 +29,21 @@ const BENDING: Kind = number("a moment", Dimension::Moment, "kNm", -1e6, 1e6);
 const BUCKLING: Kind = number("a buckling length", Dimension::Length, "m", 0.0, 1000.0);
 const UTILISATION: Kind = plain("a degree of utilisation", 0.0, 100.0);
 
+/// Keys of a member that no verdict rests on.
+pub const ASIDE: &[&str] = &[
+    "mark",
+    "location",
+    "drawing",
+    "revision",
+    "note",
+    "count",
+    "length",
+    "environment",
+    "supported by",
+    "steadies",
+    "departures",
+];
+
 /// Every key of a member. Groups and defaults may carry all but `mark` and `departures`.
 pub const MEMBER: &[Key] = &[
     required(

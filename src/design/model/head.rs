@@ -29,6 +29,9 @@ pub struct Head {
     pub defaults: MemberKeys,
     /// Head-only keys that stand in the file, with the span of each key.
     pub head_only: Vec<Spanned<&'static str>>,
+    /// Whether a syntax error or a strange key stands outside the items, or something in the basis of design can't be
+    /// read: what holds for all members is then not known.
+    pub doubtful: bool,
 }
 
 /// A fire of the file's own.

@@ -85,6 +85,9 @@ pub struct MemberKeys {
     pub connection: Given<Connection>,
     /// Restrained assembly (ASCE 29).
     pub restrained: Given<bool>,
+    /// Whether a key stands among them that is not known, or one stands twice, and a verdict may rest on what their
+    /// author meant by it.
+    pub strange: bool,
 }
 
 /// Where a member is; schedules go by it.
