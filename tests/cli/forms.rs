@@ -132,3 +132,30 @@ fn why_explains_and_misspellings_are_met() {
     }
     assert_eq!(run(Path::new("."), &["check", "no/such/folder"]).status.code(), Some(2));
 }
+
+/// What the README shows is what comes out.
+#[test]
+fn the_readme_shows_what_is_answered() {
+    let readme = include_str!("../../README.md");
+    let file = readme.split("```yaml\n").nth(1).unwrap().split("```").next().unwrap();
+    let shown = readme
+        .split("three hints:\n\n```\n")
+        .nth(1)
+        .unwrap()
+        .split("```")
+        .next()
+        .unwrap();
+    let folder = tempfile::tempdir().unwrap();
+    for (name, library) in scorchline::scenario::FILES
+        .iter()
+        .filter(|(name, _)| name.contains("protection"))
+    {
+        fs::write(folder.path().join(name), library).unwrap();
+    }
+    fs::write(folder.path().join("first.steelwork.yaml"), file).unwrap();
+    let answer = text(&run(folder.path(), &["check", "--on", "2026-06-01"]));
+    assert!(
+        answer.starts_with(shown) && answer.contains("1 error, 3 hints"),
+        "{answer}"
+    );
+}
