@@ -43,9 +43,28 @@ pub fn picture(c: char) -> char {
     }
 }
 
+/// Characters of a message that are shown; a message may quote a value of any length.
+const LONGEST: usize = 1000;
+
+/// A message for a terminal, cut where nobody would read on.
+pub fn message(text: &str) -> String {
+    let mut out: String = text.chars().take(LONGEST).map(picture).collect();
+    if text.chars().nth(LONGEST).is_some() {
+        out.push('…');
+    }
+    out
+}
+
 #[cfg(test)]
 mod tests {
-    use super::plain;
+    use super::{LONGEST, message, plain};
+
+    #[test]
+    fn a_long_message_is_cut() {
+        assert_eq!(message("short\u{7}"), "short␇");
+        assert_eq!(message(&"x".repeat(LONGEST)).chars().count(), LONGEST);
+        assert_eq!(message(&"x".repeat(5 * LONGEST)), "x".repeat(LONGEST) + "…");
+    }
 
     #[test]
     fn what_steers_a_terminal_is_shown() {

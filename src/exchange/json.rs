@@ -1,12 +1,14 @@
 //! JSON of findings, schedules and sections.
 
 use std::path::Path;
+use std::rc::Rc;
 
+use serde::Serialize;
 use serde_json::{Map, Value, json};
 
 use crate::analysis::source::SourceFile;
 use crate::check::Checked;
-use crate::findings::finding::{Finding, Place, Severity};
+use crate::findings::finding::{Finding, FixEdit, Place, Severity};
 use crate::report::schedule::Schedule;
 use crate::section::catalogue::CatalogueRow;
 use crate::section::{Casing, Exposure, heated};
@@ -15,24 +17,108 @@ use crate::text::{Encoding, LineIndex, Position};
 /// How a path is written.
 pub type ShowPath<'a> = dyn Fn(&Path) -> String + 'a;
 
-/// Lines of every file of a design, for positions.
-struct Lines<'a>(Vec<(&'a SourceFile, LineIndex)>);
+/// The whole of a check. Written straight from the findings: a large design has hundreds of thousands.
+#[derive(Serialize)]
+struct Document<'a> {
+    findings: Vec<Found<'a>>,
+    counts: Counts,
+    departures: Vec<Found<'a>>,
+}
+
+#[derive(Serialize)]
+struct Counts {
+    error: usize,
+    warning: usize,
+    information: usize,
+    hint: usize,
+}
+
+#[derive(Serialize)]
+struct Found<'a> {
+    finding: &'a str,
+    severity: &'a str,
+    message: &'a str,
+    notes: Vec<&'a str>,
+    path: Rc<str>,
+    start: At,
+    end: At,
+    mark: Option<&'a str>,
+    key: Option<&'a str>,
+    clause: &'a str,
+    fixes: Vec<FoundFix<'a>>,
+}
+
+#[derive(Serialize)]
+struct FoundFix<'a> {
+    title: &'a str,
+    safe: bool,
+    edits: Vec<FoundEdit<'a>>,
+}
+
+#[derive(Serialize)]
+struct FoundEdit<'a> {
+    path: Rc<str>,
+    start: At,
+    end: At,
+    text: &'a str,
+}
+
+/// One-based, the column in Unicode scalars.
+#[derive(Clone, Copy, Serialize)]
+struct At {
+    line: u32,
+    column: u32,
+}
+
+/// The files of a design with their lines and the words for their paths.
+struct Lines<'a>(Vec<(&'a SourceFile, LineIndex, Rc<str>)>);
 
 impl Lines<'_> {
-    fn position(&self, place: &Place, offset: u32) -> Value {
-        let found = self.0.iter().find(|(file, _)| file.path == place.path);
-        let position = found.map_or(Position::default(), |(file, lines)| {
-            lines.position(&file.text, offset, Encoding::Utf32)
+    /// Path, first character and the one after the last.
+    fn place(&self, place: &Place) -> (Rc<str>, At, At) {
+        let found = self.0.iter().find(|(file, ..)| file.path == place.path);
+        let at = |offset: u32| {
+            let position = found.map_or(Position::default(), |(file, lines, _)| {
+                lines.position(&file.text, offset, Encoding::Utf32)
+            });
+            At {
+                line: position.line + 1,
+                column: position.column + 1,
+            }
+        };
+        let path = found.map_or_else(|| Rc::from(place.path.to_string_lossy()), |(.., path)| Rc::clone(path));
+        (path, at(place.span.start), at(place.span.end))
+    }
+
+    fn found<'a>(&self, finding: &'a Finding) -> Found<'a> {
+        let (path, start, end) = self.place(&finding.place);
+        let edit = |edit: &'a FixEdit| {
+            let (path, start, end) = self.place(&edit.place);
+            FoundEdit {
+                path,
+                start,
+                end,
+                text: &edit.text,
+            }
+        };
+        let fixes = finding.fixes.iter().map(|fix| FoundFix {
+            title: &fix.title,
+            safe: fix.safe,
+            edits: fix.edits.iter().map(edit).collect(),
         });
-        json!({ "line": position.line + 1, "column": position.column + 1 })
-    }
-
-    fn start(&self, place: &Place) -> Value {
-        self.position(place, place.span.start)
-    }
-
-    fn end(&self, place: &Place) -> Value {
-        self.position(place, place.span.end)
+        Found {
+            finding: finding.name(),
+            severity: finding.severity.word(),
+            message: &finding.message,
+            notes: finding.notes.iter().map(|note| note.text.as_str()).collect(),
+            path,
+            start,
+            end,
+            mark: finding.mark.as_deref(),
+            key: finding.key.as_deref(),
+            clause: finding.declaration.clause,
+            fixes: fixes.collect(),
+        }
     }
 }
 
@@ -41,64 +127,40 @@ impl Lines<'_> {
 #[must_use]
 pub fn check(checked: &[Checked], show: &ShowPath<'_>) -> String {
     let mut findings = Vec::new();
-    let mut agreed = Vec::new();
+    let mut departures = Vec::new();
     for design in checked {
         let files = design.design.files.iter();
-        let lines = Lines(files.map(|file| (&**file, LineIndex::new(&file.text))).collect());
-        findings.extend(design.findings.iter().map(|finding| one(finding, &lines, show)));
-        agreed.extend(design.agreed.iter().map(|finding| one(finding, &lines, show)));
+        let lines = Lines(
+            files
+                .map(|file| (&**file, LineIndex::new(&file.text), Rc::from(show(&file.path))))
+                .collect(),
+        );
+        findings.extend(design.findings.iter().map(|finding| lines.found(finding)));
+        departures.extend(design.agreed.iter().map(|finding| lines.found(finding)));
     }
     let count = |severity: Severity| {
-        checked
+        findings
             .iter()
-            .flat_map(|design| &design.findings)
-            .filter(|finding| finding.severity == severity)
+            .filter(|found| found.severity == severity.word())
             .count()
     };
-    let counts: Map<String, Value> = Severity::ALL
-        .into_iter()
-        .map(|severity| (severity.word().to_owned(), json!(count(severity))))
-        .collect();
-    pretty(&json!({ "findings": findings, "counts": counts, "departures": agreed }))
-}
-
-fn one(finding: &Finding, lines: &Lines<'_>, show: &ShowPath<'_>) -> Value {
-    let fixes: Vec<Value> = finding
-        .fixes
-        .iter()
-        .map(|fix| {
-            let edits: Vec<Value> = fix
-                .edits
-                .iter()
-                .map(|edit| {
-                    json!({
-                        "path": show(&edit.place.path),
-                        "start": lines.start(&edit.place), "end": lines.end(&edit.place), "text": edit.text,
-                    })
-                })
-                .collect();
-            json!({ "title": fix.title, "safe": fix.safe, "edits": edits })
-        })
-        .collect();
-    json!({
-        "finding": finding.name(),
-        "severity": finding.severity.word(),
-        "message": finding.message,
-        "notes": finding.notes.iter().map(|note| note.text.clone()).collect::<Vec<_>>(),
-        "path": show(&finding.place.path),
-        "start": lines.start(&finding.place),
-        "end": lines.end(&finding.place),
-        "mark": finding.mark,
-        "key": finding.key,
-        "clause": finding.declaration.clause,
-        "fixes": fixes,
+    let counts = Counts {
+        error: count(Severity::Error),
+        warning: count(Severity::Warning),
+        information: count(Severity::Information),
+        hint: count(Severity::Hint),
+    };
+    pretty(&Document {
+        findings,
+        counts,
+        departures,
     })
 }
 
 /// A schedule.
 #[must_use]
 pub fn schedule(schedule: &Schedule) -> String {
-    pretty(&serde_json::to_value(schedule).unwrap_or(Value::Null))
+    pretty(schedule)
 }
 
 /// Rows of the section tables with what is computed from their dimensions.
@@ -141,14 +203,14 @@ pub(super) fn section(row: &CatalogueRow) -> Map<String, Value> {
 }
 
 /// A row as an object; its keys in their order.
-pub(super) fn object(row: &impl serde::Serialize) -> Map<String, Value> {
+pub(super) fn object(row: &impl Serialize) -> Map<String, Value> {
     match serde_json::to_value(row) {
         Ok(Value::Object(map)) => map,
         _ => Map::new(),
     }
 }
 
-fn pretty(value: &Value) -> String {
+fn pretty(value: &impl Serialize) -> String {
     let mut text = serde_json::to_string_pretty(value).unwrap_or_default();
     text.push('\n');
     text

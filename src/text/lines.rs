@@ -24,7 +24,20 @@ pub struct Position {
 #[derive(Debug, Clone)]
 pub struct LineIndex {
     starts: Vec<u32>,
+    marks: Vec<Mark>,
 }
+
+/// A place inside a long line, with what stands before it in the line. Without these, thousands of places in one line
+/// of megabytes would each be counted from its start.
+#[derive(Debug, Clone, Copy)]
+struct Mark {
+    offset: u32,
+    utf16: u32,
+    utf32: u32,
+}
+
+/// Bytes between two marks of a long line; shorter lines have none.
+const STRIDE: usize = 2048;
 
 impl LineIndex {
     /// Finds the lines of a text.
@@ -38,7 +51,23 @@ impl LineIndex {
                 starts.push(u32::try_from(at + 1).unwrap_or(u32::MAX));
             }
         }
-        Self { starts }
+        let mut marks = Vec::new();
+        for (n, start) in starts.iter().enumerate() {
+            let end = starts.get(n + 1).map_or(text.len(), |next| *next as usize);
+            mark(text, *start as usize, end, &mut marks);
+        }
+        Self { starts, marks }
+    }
+
+    /// The last mark of the line that begins at `start` before or at an offset, or the start itself.
+    fn mark(&self, start: u32, offset: usize) -> Mark {
+        let before = self.marks.partition_point(|mark| mark.offset as usize <= offset);
+        let last = before.checked_sub(1).map(|at| self.marks[at]);
+        last.filter(|mark| mark.offset > start).unwrap_or(Mark {
+            offset: start,
+            utf16: 0,
+            utf32: 0,
+        })
     }
 
     /// The line of an offset, zero-based.
@@ -65,11 +94,13 @@ impl LineIndex {
             end -= 1;
         }
         let line = self.line(u32::try_from(end).unwrap_or(u32::MAX));
-        let before = text.get(self.start(line, text) as usize..end).unwrap_or("");
+        let start = self.start(line, text);
+        let mark = self.mark(start, end);
+        let after = text.get(mark.offset as usize..end).unwrap_or("");
         let column = match encoding {
-            Encoding::Utf8 => before.len(),
-            Encoding::Utf16 => before.encode_utf16().count(),
-            Encoding::Utf32 => before.chars().count(),
+            Encoding::Utf8 => end.saturating_sub(start as usize),
+            Encoding::Utf16 => mark.utf16 as usize + after.encode_utf16().count(),
+            Encoding::Utf32 => mark.utf32 as usize + after.chars().count(),
         };
         Position {
             line,
@@ -102,9 +133,49 @@ impl LineIndex {
     }
 }
 
+/// Marks a line, where it is long.
+fn mark(text: &str, start: usize, end: usize, marks: &mut Vec<Mark>) {
+    let (mut offset, mut utf16, mut utf32) = (start, 0_usize, 0_usize);
+    while end - offset > STRIDE {
+        let mut next = offset + STRIDE;
+        while !text.is_char_boundary(next) {
+            next -= 1;
+        }
+        let piece = text.get(offset..next).unwrap_or("");
+        utf16 += piece.encode_utf16().count();
+        utf32 += piece.chars().count();
+        offset = next;
+        let small = |n: usize| u32::try_from(n).unwrap_or(u32::MAX);
+        marks.push(Mark {
+            offset: small(offset),
+            utf16: small(utf16),
+            utf32: small(utf32),
+        });
+    }
+}
+
 #[cfg(test)]
 mod tests {
     use super::*;
+
+    #[test]
+    fn columns_of_long_lines_are_counted_from_their_start() {
+        let text = format!("short\n{}\n{}\nend", "a梁😀".repeat(3000), "b".repeat(9000));
+        let index = LineIndex::new(&text);
+        for (at, _) in text.char_indices().step_by(37) {
+            let start = text[..at].rfind('\n').map_or(0, |line| line + 1);
+            let before = &text[start..at];
+            for (encoding, wanted) in [
+                (Encoding::Utf8, before.len()),
+                (Encoding::Utf16, before.encode_utf16().count()),
+                (Encoding::Utf32, before.chars().count()),
+            ] {
+                let position = index.position(&text, u32::try_from(at).unwrap(), encoding);
+                assert_eq!(position.column as usize, wanted);
+                assert_eq!(position.line as usize, text[..at].matches('\n').count());
+            }
+        }
+    }
 
     #[test]
     fn counts_columns_in_each_encoding() {

@@ -1,7 +1,7 @@
 //! Findings on one page: the gravest in full, the rest a line or two each, and what is alike together.
 
 use super::{Item, Manner, painted, snippet, wrapped};
-use crate::cli::output::plain;
+use crate::cli::output::message;
 use crate::findings::finding::Severity;
 
 /// Lines of a page, less those of a prompt.
@@ -101,7 +101,7 @@ fn body(groups: &[Alike<'_>], of_a_kind: usize, manner: &Manner<'_>) -> String {
                 (said, false) => said.to_owned(),
             };
             let line = format!("{}: {said} [{}]", group.name, place(group.items[0], manner));
-            out.push_str(&wrapped(&plain(&line), 2, 4));
+            out.push_str(&wrapped(&message(&line), 2, 4));
         }
         let rest = kind
             .iter()
@@ -109,7 +109,7 @@ fn body(groups: &[Alike<'_>], of_a_kind: usize, manner: &Manner<'_>) -> String {
             .flat_map(|group| group.items.iter().copied());
         let rest = marks(rest);
         if !rest.is_empty() {
-            out.push_str(&wrapped(&plain(&format!("likewise {rest}")), 4, 4));
+            out.push_str(&wrapped(&message(&format!("likewise {rest}")), 4, 4));
         }
     }
     out

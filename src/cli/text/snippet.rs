@@ -6,7 +6,7 @@ use miette::{
 };
 
 use super::{Item, Manner, WIDTH};
-use crate::cli::output::{picture, plain};
+use crate::cli::output::{message, picture, plain};
 use crate::findings::finding::Severity;
 
 /// Characters of a line shown before the first and after the first at fault; the rest of a long line is cut.
@@ -96,13 +96,13 @@ pub(super) fn snippet(item: &Item<'_>, manner: &Manner<'_>) -> String {
         None => note.text.clone(),
     });
     let fixes = finding.fixes.iter().map(|fix| format!("perhaps: {}", fix.title));
-    let help: Vec<String> = notes.chain(fixes).map(|line| plain(&line)).collect();
+    let help: Vec<String> = notes.chain(fixes).map(|line| message(&line)).collect();
     let severity = match finding.severity {
         Severity::Error => miette::Severity::Error,
         Severity::Warning => miette::Severity::Warning,
         Severity::Information | Severity::Hint => miette::Severity::Advice,
     };
-    let mut diagnostic = MietteDiagnostic::new(plain(&finding.message))
+    let mut diagnostic = MietteDiagnostic::new(message(&finding.message))
         .with_severity(severity)
         .with_code(format!("{} ({})", finding.name(), finding.severity.word()))
         .with_label(LabeledSpan::new(None, from, length));
@@ -126,7 +126,7 @@ pub(super) fn snippet(item: &Item<'_>, manner: &Manner<'_>) -> String {
     let mut out = String::new();
     match handler.render_report(&mut out, report.as_ref()) {
         Ok(()) => out,
-        Err(_) => format!("{}: {}\n", finding.name(), plain(&finding.message)),
+        Err(_) => format!("{}: {}\n", finding.name(), message(&finding.message)),
     }
 }
 

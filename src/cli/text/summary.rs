@@ -3,7 +3,7 @@
 use super::{Manner, SHOWN, count, painted, wrapped};
 use crate::analysis::outcome::Verdict;
 use crate::check::Checked;
-use crate::cli::output::plain;
+use crate::cli::output::message;
 use crate::findings::finding::{Finding, Severity};
 
 /// Agreed departures listed unless all are asked for.
@@ -39,7 +39,7 @@ pub(super) fn summary(checked: &[Checked], findings: usize, manner: &Manner<'_>)
     let agreed: Vec<&Finding> = checked.iter().flat_map(|design| &design.agreed).collect();
     let listed = if manner.all { usize::MAX } else { AGREED };
     for finding in agreed.iter().take(listed) {
-        let line = plain(&format!(
+        let line = message(&format!(
             "agreed departure from {}: {}",
             finding.name(),
             finding.message
