@@ -12,6 +12,8 @@ use crate::units::{parse_duration, parse_quantity};
 
 /// The longest name or remark that is read, bytes: messages repeat them.
 const LONGEST_TEXT: usize = 2000;
+/// Entries of a mapping among which a misspelt key is looked for.
+const MOST_KEYS: usize = 1000;
 
 /// Collects what is wrong while values are read.
 #[derive(Debug, Default)]
@@ -110,7 +112,8 @@ impl Reader {
             Some(near) => {
                 let text = format!("`{}` is no key of {owner}; perhaps `{near}`", name.text);
                 let slip = Slip::new(SlipKind::UnknownKey, span, text);
-                let free = entries.iter().all(|e| !e.key.is_scalar(near));
+                // A mapping with so many keys has no single one misspelt, and each would look at all others.
+                let free = entries.len() <= MOST_KEYS && entries.iter().all(|e| !e.key.is_scalar(near));
                 if free && !entry.key.through_alias {
                     slip.repair(format!("write `{near}`"), true, span, near)
                 } else {

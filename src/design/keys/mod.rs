@@ -231,10 +231,14 @@ impl Kind {
 /// most one slip in three letters.
 pub fn nearest<'a>(word: &str, candidates: impl IntoIterator<Item = &'a str>) -> Option<&'a str> {
     let word = word.to_lowercase();
+    let length = word.chars().count();
+    let allowed = |candidate: &str| candidate.chars().count().max(3) / 3;
     candidates
         .into_iter()
+        // Words that differ by more letters than are allowed needn't be compared.
+        .filter(|candidate| length.abs_diff(candidate.chars().count()) <= allowed(candidate))
         .map(|candidate| (strsim::damerau_levenshtein(&word, &candidate.to_lowercase()), candidate))
         .min_by_key(|(distance, _)| *distance)
-        .filter(|(distance, candidate)| *distance <= (candidate.chars().count().max(3)) / 3)
+        .filter(|(distance, candidate)| *distance <= allowed(candidate))
         .map(|(_, candidate)| candidate)
 }
