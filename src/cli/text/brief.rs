@@ -115,9 +115,15 @@ fn body(groups: &[Alike<'_>], of_a_kind: usize, manner: &Manner<'_>) -> String {
     out
 }
 
-/// The marks of some findings; of many the first few.
+/// The marks of some findings, each once; of many the first few.
 fn marks<'a>(items: impl Iterator<Item = &'a Item<'a>>) -> String {
-    let marks: Vec<&str> = items.map(|item| item.finding.mark.as_deref().unwrap_or("–")).collect();
+    let mut marks: Vec<&str> = Vec::new();
+    for item in items {
+        let mark = item.finding.mark.as_deref().unwrap_or("–");
+        if !marks.contains(&mark) {
+            marks.push(mark);
+        }
+    }
     match marks.len() {
         0..=12 => marks.join(", "),
         n => format!("{} and {} more", marks[..10].join(", "), n - 10),
