@@ -13,7 +13,7 @@ use crate::design::model::head::{Factors, Method};
 use crate::design::model::member::{Effects, Load, Loading, Member, Period, Role, SectionChoice, Steel, Surface};
 use crate::heating::fire::Fire;
 use crate::protection::product::Product;
-use crate::section::catalogue::{CatalogueRow, Lookup, LookupOptions, find};
+use crate::section::catalogue::{CatalogueRow, LookupOptions, row};
 use crate::section::{Exposure, Shape};
 use crate::units::{Length, Temperature, Time};
 
@@ -100,10 +100,7 @@ pub struct Names<'a> {
 #[must_use]
 pub fn row_of(choice: Option<&SectionChoice>, options: &LookupOptions) -> Option<&'static CatalogueRow> {
     match choice {
-        Some(SectionChoice::Designation(text)) => match find(text, options) {
-            Lookup::Found(row) => Some(row),
-            _ => None,
-        },
+        Some(SectionChoice::Designation(text)) => row(text, options),
         _ => None,
     }
 }

@@ -1,5 +1,7 @@
 //! The names that a member, a group or the defaults use: sections, products, groups and fires must be known.
 
+use rustc_hash::FxHashMap;
+
 use crate::analysis::design::Design;
 use crate::design::keys::nearest;
 use crate::design::model::head::Basis;
@@ -23,15 +25,40 @@ pub fn lookup_options(basis: &Basis) -> LookupOptions {
     }
 }
 
+/// Designations that were looked up before: one that is written wrong often stands in many members.
+#[derive(Debug)]
+pub struct Sections {
+    options: LookupOptions,
+    known: FxHashMap<String, Lookup>,
+}
+
+impl Sections {
+    /// Nothing is looked up yet; designations will be by the design's tables.
+    #[must_use]
+    pub fn of(basis: &Basis) -> Self {
+        Self {
+            options: lookup_options(basis),
+            known: FxHashMap::default(),
+        }
+    }
+
+    fn find(&mut self, text: &str) -> &Lookup {
+        if !self.known.contains_key(text) {
+            self.known.insert(text.to_owned(), find(text, &self.options));
+        }
+        &self.known[text]
+    }
+}
+
 /// What is wrong with the names in one block of keys. Spans are those of the block's own text.
-pub fn check(keys: &MemberKeys, design: &Design, options: &LookupOptions, slips: &mut Vec<Slip>) {
+pub fn check(keys: &MemberKeys, design: &Design, sections: &mut Sections, slips: &mut Vec<Slip>) {
     if let (Some(SectionChoice::Designation(text)), Some(span)) = (keys.section.value(), keys.section.span()) {
         slips.extend(section_slip(
             &Spanned {
                 value: text.as_str(),
                 span,
             },
-            options,
+            sections,
         ));
     }
     if let (Some(name), Some(span)) = (keys.group.value(), keys.group.span())
@@ -117,7 +144,7 @@ fn stranger<'a>(
     }
 }
 
-fn section_slip(text: &Spanned<&str>, options: &LookupOptions) -> Option<Slip> {
+fn section_slip(text: &Spanned<&str>, sections: &mut Sections) -> Option<Slip> {
     let listed = |rows: &[&CatalogueRow]| {
         rows.iter()
             .take(5)
@@ -125,7 +152,7 @@ fn section_slip(text: &Spanned<&str>, options: &LookupOptions) -> Option<Slip> {
             .collect::<Vec<_>>()
             .join(", ")
     };
-    match find(text.value, options) {
+    match sections.find(text.value) {
         Lookup::Found(_) => None,
         Lookup::Ambiguous(rows) => {
             let all: Vec<String> = rows
@@ -148,7 +175,7 @@ fn section_slip(text: &Spanned<&str>, options: &LookupOptions) -> Option<Slip> {
             let mut slip = Slip::new(SlipKind::AmbiguousSection, text.span, message)
                 .at_key("section")
                 .remark("write the one that is meant, or settle it for the design by `basis: { section tables: [..], hollow: .. }`", None);
-            for row in &rows {
+            for row in rows {
                 slip = slip.repair(
                     format!("write `{}`", row.designation),
                     false,

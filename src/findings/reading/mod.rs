@@ -29,7 +29,7 @@ use std::sync::Arc;
 
 use crate::analysis::design::{Design, LinkKind};
 use crate::analysis::files::PathTrouble;
-use crate::analysis::names::{self, lookup_options};
+use crate::analysis::names::{self, Sections};
 use crate::analysis::source::{Decoded, Item, SourceFile};
 use crate::design::slip::{Edit, Slip, SlipKind};
 use crate::findings::context::Context;
@@ -140,7 +140,7 @@ fn item_findings<T>(file: &SourceFile, item: &Item<T>, mark: Option<&str>, out: 
 
 /// Every finding of reading in a design.
 pub fn reading(design: &Design, out: &mut Vec<Finding>) {
-    let options = lookup_options(design.basis());
+    let mut sections = Sections::of(design.basis());
     for (index, file) in design.files.iter().enumerate() {
         let path = &file.path;
         out.extend(
@@ -166,11 +166,11 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
             }
         }
         let mut slips = Vec::new();
-        names::check(&file.head.defaults, design, &options, &mut slips);
+        names::check(&file.head.defaults, design, &mut sections, &mut slips);
         out.extend(slips.drain(..).map(|slip| slip_finding(file, slip, None)));
         for item in &file.groups {
             item_findings(file, item, None, out);
-            names::check(&item.value().keys, design, &options, &mut slips);
+            names::check(&item.value().keys, design, &mut sections, &mut slips);
             out.extend(
                 slips
                     .drain(..)
@@ -183,7 +183,7 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
         for item in &file.members {
             let mark = item.value().mark.value().map(String::as_str);
             item_findings(file, item, mark, out);
-            names::check(&item.value().keys, design, &options, &mut slips);
+            names::check(&item.value().keys, design, &mut sections, &mut slips);
             out.extend(
                 slips
                     .drain(..)

@@ -38,12 +38,33 @@ pub enum Lookup {
 /// dimensions are one section: the first in the order of [`Table::ALL`] is named. Anything else is ambiguous.
 #[must_use]
 pub fn find(text: &str, options: &LookupOptions) -> Lookup {
+    let found = matching(text, options);
+    match (one(&found), found.is_empty()) {
+        (Some(row), _) => Lookup::Found(row),
+        (None, true) => Lookup::Unknown {
+            nearest: catalogue().nearest(text),
+        },
+        (None, false) => Lookup::Ambiguous(found),
+    }
+}
+
+/// The row that [`find`] finds, without the costly search for the nearest where it finds none.
+#[must_use]
+pub fn row(text: &str, options: &LookupOptions) -> Option<&'static CatalogueRow> {
+    one(&matching(text, options))
+}
+
+/// The row that all of these are, if they have the very same dimensions.
+fn one(found: &[&'static CatalogueRow]) -> Option<&'static CatalogueRow> {
+    let (first, rest) = found.split_first()?;
+    rest.iter().all(|row| row.shape == first.shape).then_some(first)
+}
+
+/// The rows that answer to a designation once the finish and the preferences have been heeded.
+fn matching(text: &str, options: &LookupOptions) -> Vec<&'static CatalogueRow> {
     let catalogue = catalogue();
-    let unknown = || Lookup::Unknown {
-        nearest: catalogue.nearest(text),
-    };
     let Some(key) = Key::of(text).filter(|key| !key.letters.is_empty() && !key.numbers.is_empty()) else {
-        return unknown();
+        return Vec::new();
     };
     let mut found: Vec<&'static CatalogueRow> = catalogue
         .index
@@ -62,11 +83,7 @@ pub fn find(text: &str, options: &LookupOptions) -> Lookup {
     if let Some(finish) = options.hollow {
         prefer(&mut found, |row| row.finish.is_none_or(|own| own == finish));
     }
-    match found.split_first() {
-        None => unknown(),
-        Some((first, rest)) if rest.iter().all(|row| row.shape == first.shape) => Lookup::Found(first),
-        Some(_) => Lookup::Ambiguous(found),
-    }
+    found
 }
 
 /// Keeps the rows that meet a preference, or all if none does.

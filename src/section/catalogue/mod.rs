@@ -13,7 +13,7 @@ use std::fmt;
 use std::sync::OnceLock;
 
 pub use family::family_neighbours;
-pub use find::{Lookup, LookupOptions, find};
+pub use find::{Lookup, LookupOptions, find, row};
 
 use crate::section::geometry::Geometry;
 use crate::section::properties::Properties;
