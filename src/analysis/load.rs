@@ -1,6 +1,6 @@
 //! Assembling designs: head files with their parts and libraries, and the names that hold throughout.
 
-use std::path::{Path, PathBuf};
+use std::path::PathBuf;
 use std::sync::Arc;
 
 use rustc_hash::{FxHashMap, FxHashSet};
@@ -11,6 +11,24 @@ use crate::analysis::read::read;
 use crate::analysis::source::{FileKind, SourceFile};
 use crate::design::decode::fire::BUILT_IN;
 
+/// Files that were read before: heads, parts and libraries name each other, and each is read once a load.
+struct Sources<'a> {
+    files: &'a dyn Files,
+    known: FxHashMap<PathBuf, Result<Arc<SourceFile>, ReadTrouble>>,
+}
+
+impl Sources<'_> {
+    fn get(&mut self, path: &PathBuf) -> Result<Arc<SourceFile>, ReadTrouble> {
+        if let Some(known) = self.known.get(path) {
+            return known.clone();
+        }
+        let text = self.files.read(path);
+        let source = text.map(|text| Arc::new(read(Arc::new(path.clone()), text)));
+        self.known.insert(path.clone(), source.clone());
+        source
+    }
+}
+
 /// Reads files and assembles every design among them. A part whose head lists it belongs to the head's design and is no
 /// design of its own; its head is read even where it is not among the files, for a part says little without it. Files
 /// that can't be read are answered with their trouble.
@@ -18,9 +36,13 @@ use crate::design::decode::fire::BUILT_IN;
 pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf, ReadTrouble)>) {
     let mut troubles = Vec::new();
     let mut sources = Vec::new();
+    let mut known = Sources {
+        files,
+        known: FxHashMap::default(),
+    };
     for path in paths {
-        match files.read(path) {
-            Ok(text) => sources.push(Arc::new(read(Arc::new(path.clone()), text))),
+        match known.get(path) {
+            Ok(source) => sources.push(source),
             Err(trouble) => troubles.push((path.clone(), trouble)),
         }
     }
@@ -32,14 +54,14 @@ pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf,
         if let Some(Ok(head)) = named.map(|name| files.follow(&source.path, name))
             && !asked.contains(&head)
             && heads.insert(head.clone())
-            && let Ok(text) = files.read(&head)
+            && let Ok(source) = known.get(&head)
         {
-            sources.push(Arc::new(read(Arc::new(head), text)));
+            sources.push(source);
         }
     }
     let designs: Vec<Design> = sources
         .iter()
-        .map(|source| assemble(files, Arc::clone(source)))
+        .map(|source| assemble(&mut known, Arc::clone(source)))
         .collect();
     let designs: Vec<Design> = designs
         .into_iter()
@@ -69,7 +91,8 @@ pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf,
 }
 
 /// Follows the parts and libraries of a head file.
-fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
+fn assemble(sources: &mut Sources<'_>, head: Arc<SourceFile>) -> Design {
+    let files = sources.files;
     let mut design = Design {
         files: vec![Arc::clone(&head)],
         members: Vec::new(),
@@ -89,7 +112,7 @@ fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
     }
     for written in &head.head.parts {
         if let Some(part) = follow(
-            files,
+            sources,
             &mut design,
             &head,
             &written.value,
@@ -97,7 +120,6 @@ fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
             FileKind::Steelwork,
         ) {
             let back = part.head.part_of.value().map(|name| files.follow(&part.path, name));
-            let file = design.files.len();
             if back != Some(Ok(head.path.to_path_buf())) {
                 design.troubles.push(LinkTrouble {
                     file: 0,
@@ -107,11 +129,10 @@ fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
                 });
             }
             design.files.push(part);
-            debug_assert!(file > 0);
         }
     }
     if let (Some(name), Some(span)) = (head.head.part_of.value(), head.head.part_of.span())
-        && let Some(other) = follow(files, &mut design, &head, name, span, FileKind::Steelwork)
+        && let Some(other) = follow(sources, &mut design, &head, name, span, FileKind::Steelwork)
     {
         let listed = other
             .head
@@ -129,7 +150,7 @@ fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
     }
     for written in &head.head.libraries {
         if let Some(library) = follow(
-            files,
+            sources,
             &mut design,
             &head,
             &written.value,
@@ -144,7 +165,7 @@ fn assemble(files: &dyn Files, head: Arc<SourceFile>) -> Design {
 }
 
 fn follow(
-    files: &dyn Files,
+    sources: &mut Sources<'_>,
     design: &mut Design,
     from: &SourceFile,
     written: &str,
@@ -160,28 +181,18 @@ fn follow(
         });
         None
     };
-    let path = match files.follow(&from.path, written) {
+    let path = match sources.files.follow(&from.path, written) {
         Ok(path) => path,
         Err(error) => return trouble(LinkKind::Path(error)),
     };
-    if same(&path, &from.path) || design.files.iter().any(|file| same(&file.path, &path)) {
+    if path == **from.path || design.files.iter().any(|file| **file.path == path) {
         return trouble(LinkKind::Cycle);
     }
-    match files.read(&path) {
-        Ok(text) => {
-            let source = read(Arc::new(path), text);
-            if source.kind == wanted {
-                Some(Arc::new(source))
-            } else {
-                trouble(LinkKind::OtherKind(wanted))
-            }
-        }
+    match sources.get(&path) {
+        Ok(source) if source.kind == wanted => Some(source),
+        Ok(_) => trouble(LinkKind::OtherKind(wanted)),
         Err(error) => trouble(LinkKind::Read(error)),
     }
-}
-
-fn same(a: &Path, b: &Path) -> bool {
-    a == b
 }
 
 /// Names, the first that carries each.
