@@ -14,7 +14,7 @@ use crate::resistance::grade::{Grade, YieldSource, governing_thickness, yield_st
 use crate::resistance::utilisation::{ActionMix, from_ambient, reduction_factor};
 use crate::section::shadow::shadow_factor;
 use crate::section::{Casing, Exposure, Geometry, Kind, heated};
-use crate::units::{Force, Length, Stress, Temperature, Time};
+use crate::units::{Force, Length, Stress, Time};
 
 /// Works out a member. Nothing is claimed that its inputs do not carry.
 #[must_use]
@@ -59,7 +59,7 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
         return outcome;
     };
     let mut cold = false;
-    if inputs.incomplete() && inputs.not_covered.iter().any(|(key, _)| *key != "method") {
+    if inputs.not_covered.iter().any(|(key, _)| *key != "method") {
         return outcome;
     }
     match limit(inputs, section, &geometry) {
@@ -394,10 +394,4 @@ fn verdict(inputs: &Inputs, outcome: &Outcome, cold: bool) -> Verdict {
         Some(_) => Verdict::Fails,
         None => Verdict::NotVerified,
     }
-}
-
-/// A temperature for messages, whole degrees.
-#[must_use]
-pub fn degrees(temperature: Temperature) -> String {
-    format!("{:.0} °C", temperature.celsius())
 }

@@ -209,18 +209,6 @@ impl Dimension {
             Self::Number => "a plain number",
         }
     }
-
-    /// The spelling of the base unit.
-    #[must_use]
-    pub fn base_unit(self) -> &'static str {
-        if matches!(self, Self::Ratio | Self::Number) {
-            return "";
-        }
-        UNITS
-            .iter()
-            .find(|unit| unit.dimension == self)
-            .map_or("", |unit| unit.spellings[0])
-    }
 }
 
 /// The units that a dimension may be written in, for messages and documentation.

@@ -150,15 +150,13 @@ fn build(kind: &str, sizes: &Sizes) -> Option<Shape> {
             toe: at("toe"),
         }),
         "rectangular hollow" => {
-            let t = at("t").mm();
-            // Unless stated, the corners are those of hot finished sections, EN 10210-2: outer 1.5 t, inner 1.0 t.
-            let radius = |name: &str, share: f64| Length::from_mm(sizes.get(name).unwrap_or(share * t));
+            // Corners that are not stated are those of hot finished sections.
+            let plain = RectangularHollow::hot_finished(at("h"), at("b"), at("t"));
+            let radius = |name: &str, unstated: Length| sizes.get(name).map_or(unstated, Length::from_mm);
             Shape::RectangularHollow(RectangularHollow {
-                h: at("h"),
-                b: at("b"),
-                t: at("t"),
-                ro: radius("ro", 1.5),
-                ri: radius("ri", 1.0),
+                ro: radius("ro", plain.ro),
+                ri: radius("ri", plain.ri),
+                ..plain
             })
         }
         "circular hollow" => Shape::CircularHollow(CircularHollow { d: at("d"), t: at("t") }),
