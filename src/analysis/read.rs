@@ -17,10 +17,8 @@ use crate::design::model::head::{Group, Head};
 use crate::design::model::library::NamedProduct;
 use crate::design::model::member::{Extent, Member, MemberKeys};
 use crate::design::slip::{Slip, SlipKind};
-use crate::syntax::outline::{Chunk, outline};
-use crate::syntax::recover::{ItemTree, parse_item};
-use crate::syntax::tree::parse;
-use crate::syntax::{Entry, Node, SyntaxError, Value};
+use crate::syntax::outline::{ListSection, Piece, TopEntry, outline};
+use crate::syntax::{Entry, Node, Scalar, Style, Tree, Value};
 use crate::text::{Span, Spanned};
 
 /// What the name of a file says of its kind: `*.protection.yaml` or `.yml`, `*.steelwork.yaml` or `.yml`.
@@ -42,10 +40,7 @@ pub fn kind_by_name(path: &std::path::Path) -> Option<FileKind> {
 pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
     let outline = outline(&text);
     let kind = kind_by_name(&path).unwrap_or_else(|| {
-        let protection = outline
-            .chunks
-            .iter()
-            .any(|chunk| chunk.key == "protection" || chunk.key == "products");
+        let protection = outline.entries.iter().any(|entry| tells_protection(entry, &text));
         if protection {
             FileKind::Protection
         } else {
@@ -68,25 +63,30 @@ pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
         seen: Vec::new(),
         last_key: None,
     };
-    if outline.doubtful {
-        let tree = parse(&text);
-        if tree
-            .errors
-            .iter()
-            .all(|error| error.kind != crate::syntax::ErrorKind::NotYaml)
-        {
-            top.file.head.doubtful = !tree.errors.is_empty();
-            top.file.errors = tree.errors;
-            top.whole(tree.root);
-            top.finish();
-            return file;
-        }
+    top.file.head.doubtful = !outline.errors.is_empty();
+    top.file.errors = outline.errors;
+    if let Some(other) = outline.other {
+        top.file.head.doubtful = true;
+        let message = "a design file is a mapping of keys such as `steelwork: 1` and `members:`";
+        let span = first_line(other.span, &text);
+        top.file.slips.push(Slip::new(SlipKind::WrongKind, span, message));
     }
-    for chunk in &outline.chunks {
-        top.chunk(&text, chunk);
+    for entry in &outline.entries {
+        match entry {
+            TopEntry::Head(piece) => top.piece(&text, piece),
+            TopEntry::List(list) => top.list(&text, list),
+        }
     }
     top.finish();
     file
+}
+
+/// Whether a top-level entry is one of a protection file.
+fn tells_protection(entry: &TopEntry, text: &str) -> bool {
+    match entry {
+        TopEntry::Head(piece) => piece.span.slice(text).trim_start().starts_with("protection:"),
+        TopEntry::List(list) => list.key == "products",
+    }
 }
 
 struct Top<'a> {
@@ -103,79 +103,53 @@ impl Top<'_> {
         }
     }
 
-    /// Reads a tree that was not split.
-    fn whole(&mut self, root: Option<Node>) {
-        let Some(root) = root else { return };
-        match root.value {
-            Value::Mapping(entries) => entries.into_iter().for_each(|entry| self.entry(entry, 0)),
-            Value::Null => {}
-            _ => {
-                let message = "a design file is a mapping of keys such as `steelwork: 1` and `members:`";
-                self.file.slips.push(Slip::new(
-                    SlipKind::WrongKind,
-                    first_line(root.span, &self.file.text),
-                    message,
-                ));
-            }
+    /// Reads an entry in one piece.
+    fn piece(&mut self, text: &str, piece: &Piece) {
+        let base = piece.span.start;
+        let tree = piece.tree(text);
+        self.file.head.doubtful |= tree.broken || !tree.errors.is_empty();
+        self.file
+            .errors
+            .extend(tree.errors.into_iter().map(|error| error.shifted(base)));
+        if let Some(Value::Mapping(entries)) = tree.root.map(|node| node.value) {
+            entries.into_iter().for_each(|entry| self.entry(entry, base));
         }
     }
 
-    fn chunk(&mut self, text: &str, chunk: &Chunk) {
-        let splits = matches!(chunk.key.as_str(), "members" | "groups" | "products") && !chunk.items.is_empty();
-        let known = Key::find(self.table(), &chunk.key).is_some();
-        if !splits || !known {
-            let tree = parse(chunk.span.slice(text));
-            self.file.head.doubtful |= !tree.errors.is_empty();
-            self.file
-                .errors
-                .extend(tree.errors.into_iter().map(|error| error.shifted(chunk.span.start)));
-            match tree.root.map(|node| (node.span, node.value)) {
-                Some((_, Value::Mapping(entries))) => {
-                    entries
-                        .into_iter()
-                        .for_each(|entry| self.entry(entry, chunk.span.start));
-                }
-                Some((_, Value::Null)) | None => {}
-                Some((span, _)) if self.file.errors.is_empty() => self.no_key(span.shift(chunk.span.start)),
-                Some(_) => {}
+    /// Reads a list item by item.
+    fn list(&mut self, text: &str, list: &ListSection) {
+        if Key::find(self.table(), &list.key).is_none() {
+            let key = scalar(&list.key, list.key_span);
+            let value = Node {
+                span: list.key_span,
+                value: Value::Unreadable,
+                through_alias: false,
+            };
+            return self.entry(Entry { key, value }, 0);
+        }
+        self.file.head.doubtful |= list.broken;
+        if self.repeated(&list.key, list.key_span) {
+            return;
+        }
+        let read = |piece: &Piece| (piece.span.start, piece.tree(text));
+        match list.key.as_str() {
+            "members" => {
+                let members = list.items.par_iter().map(read);
+                self.file.members = members.map(|(base, tree)| item(base, member_item(tree))).collect();
             }
-            return;
-        }
-        if self.repeated(&chunk.key, chunk.key_span) {
-            return;
-        }
-        let items = &chunk.items;
-        let list = chunk.list;
-        let at = |span: &Span| (span.start, parse_item(span.slice(text), list));
-        match chunk.key.as_str() {
-            "members" => self.file.members = items.par_iter().map(at).map(|(b, t)| item(b, member_item(t))).collect(),
             "groups" => {
-                let groups = items
-                    .iter()
-                    .map(at)
-                    .filter_map(|(b, t)| Some(item(b, named_item(t, group)?)))
+                let groups = list.items.iter().map(read);
+                self.file.groups = groups
+                    .filter_map(|(base, tree)| Some(item(base, named_item(tree, group)?)))
                     .collect();
-                self.file.groups = groups;
             }
             _ => {
-                let products = items
-                    .iter()
-                    .map(at)
-                    .filter_map(|(b, t)| Some(item(b, named_item(t, product)?)))
+                let products = list.items.iter().map(read);
+                self.file.products = products
+                    .filter_map(|(base, tree)| Some(item(base, named_item(tree, product)?)))
                     .collect();
-                self.file.products = products;
             }
         }
-    }
-
-    fn no_key(&mut self, span: Span) {
-        self.file.head.doubtful = true;
-        self.file.errors.push(SyntaxError {
-            span: first_line(span, &self.file.text),
-            kind: crate::syntax::ErrorKind::NotYaml,
-            message: "this line has no `key:`; the top level of a design file is a mapping of keys".to_owned(),
-            repair: None,
-        });
     }
 
     fn repeated(&mut self, key: &str, span: Span) -> bool {
@@ -202,9 +176,12 @@ impl Top<'_> {
                 return;
             }
             match key.name {
-                "members" => self.file.members = self.listed(&mut reader, entry.value, key, base),
-                "groups" => self.file.groups = named_all(&mut reader, entry.value, key, base, group),
-                "products" => self.file.products = named_all(&mut reader, entry.value, key, base, product),
+                // Of the right form they are lists; what comes here is nothing or something else.
+                "members" | "groups" | "products" => {
+                    if entry.value.value != Value::Null {
+                        reader.wrong_kind(&entry.value, key);
+                    }
+                }
                 "protection" => {
                     reader.whole(&entry.value, key);
                     self.file.head.version_at = Some(entry.key.span.shift(base));
@@ -237,29 +214,6 @@ impl Top<'_> {
             .extend(reader.slips.into_iter().map(|slip| slip.shifted(base)));
     }
 
-    fn listed(&self, reader: &mut Reader, node: Node, key: &'static Key, base: u32) -> Vec<Item<Member>> {
-        match node.value {
-            Value::Sequence(nodes) => nodes
-                .into_iter()
-                .map(|node| {
-                    item(
-                        base,
-                        member_item(ItemTree {
-                            node: Some(node),
-                            errors: Vec::new(),
-                            broken: false,
-                        }),
-                    )
-                })
-                .collect(),
-            Value::Null => Vec::new(),
-            _ => {
-                reader.wrong_kind(&node, key);
-                Vec::new()
-            }
-        }
-    }
-
     /// What the file as a whole lacks.
     fn finish(&mut self) {
         let key = match self.file.kind {
@@ -275,6 +229,17 @@ impl Top<'_> {
                 .slips
                 .push(Slip::new(SlipKind::MissingKey, span, message).at_key(key));
         }
+    }
+}
+
+fn scalar(text: &str, span: Span) -> Node {
+    Node {
+        span,
+        value: Value::Scalar(Scalar {
+            text: text.to_owned(),
+            style: Style::Plain,
+        }),
+        through_alias: false,
     }
 }
 
@@ -295,9 +260,9 @@ fn item<T>(base: u32, decoded: Decoded<T>) -> Item<T> {
 
 /// Decodes an entry of `members`.
 #[must_use]
-pub fn member_item(tree: ItemTree) -> Decoded<Member> {
+pub fn member_item(tree: Tree) -> Decoded<Member> {
     let mut reader = Reader::default();
-    let value = match &tree.node {
+    let value = match &tree.root {
         Some(node) => member::member(&mut reader, node, tree.broken),
         None => Member {
             broken: true,
@@ -327,10 +292,10 @@ fn product(reader: &mut Reader, name: Spanned<String>, value: &Node, extent: Spa
 type DecodeNamed<T> = fn(&mut Reader, Spanned<String>, &Node, Span) -> T;
 
 /// Decodes an item that is a mapping of one name.
-fn named_item<T>(tree: ItemTree, decode: DecodeNamed<T>) -> Option<Decoded<T>> {
+fn named_item<T>(tree: Tree, decode: DecodeNamed<T>) -> Option<Decoded<T>> {
     let mut reader = Reader::default();
     let mut errors = tree.errors;
-    let value = match tree.node.map(|node| node.value) {
+    let value = match tree.root.map(|node| node.value) {
         Some(Value::Mapping(mut entries)) if !entries.is_empty() => named(&mut reader, entries.swap_remove(0), decode),
         _ => None,
     };
@@ -374,35 +339,6 @@ fn named<T>(reader: &mut Reader, entry: Entry, decode: DecodeNamed<T>) -> Option
         span: entry.key.span,
     };
     Some(decode(reader, name, &entry.value, extent))
-}
-
-fn named_all<T>(reader: &mut Reader, node: Node, key: &'static Key, base: u32, decode: DecodeNamed<T>) -> Vec<Item<T>> {
-    match node.value {
-        Value::Mapping(entries) => entries
-            .into_iter()
-            .filter_map(|entry| {
-                let mut own = Reader::default();
-                let value = named(&mut own, entry, decode);
-                let Some(value) = value else {
-                    reader.slips.append(&mut own.slips);
-                    return None;
-                };
-                Some(item(
-                    base,
-                    Decoded {
-                        value,
-                        slips: own.slips,
-                        errors: Vec::new(),
-                    },
-                ))
-            })
-            .collect(),
-        Value::Null => Vec::new(),
-        _ => {
-            reader.wrong_kind(&node, key);
-            Vec::new()
-        }
-    }
 }
 
 fn shift_entry(entry: &mut Entry, by: u32) {

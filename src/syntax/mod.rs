@@ -1,35 +1,46 @@
 //! A tolerant YAML 1.2 tree with a span on every key and value. Reading never fails: it answers a tree and errors.
 //!
-//! [`outline::outline`] splits a file into items by indentation, so that each can be read and kept by itself;
-//! [`tree::parse`] reads a text, [`recover::parse_item`] one item whose damage must not reach the others.
+//! [`outline::outline`] splits a file's top level into pieces by indentation, so that each can be read and kept by
+//! itself; [`item::parse_item`] reads one piece, whose damage does not reach the others; [`file::read`] does both.
 
-pub mod explain;
+pub mod file;
+mod flow;
+pub mod item;
+mod line;
 pub mod outline;
-pub mod recover;
-pub mod tree;
+mod parse;
+mod recover;
+mod split;
+mod words;
 
-use crate::text::Span;
+use crate::text::{Edit, Span};
 
 /// The largest file that is read, in bytes.
 pub const MAX_BYTES: u64 = 64 * 1024 * 1024;
 /// The deepest nesting that is read.
 pub const MAX_DEPTH: usize = 64;
-/// The most nodes that one item or document may have once its aliases are followed.
+/// The most nodes that one piece of a file may have.
 pub const MAX_NODES: usize = 4_000_000;
-/// The most nodes that aliases may add in one item or document.
-pub const MAX_ALIAS_NODES: usize = 100_000;
+/// The most nodes that aliases may add in one file.
+pub const MAX_ALIAS_NODES: usize = 1_000_000;
+/// The most errors that are reported of one piece of a file.
+pub const MAX_ERRORS: usize = 40;
+/// The largest piece of a file, in bytes, in which more than the first error is looked for.
+pub const MAX_RECOVERED: usize = 256 * 1024;
 
 /// What a text was read as.
-#[derive(Debug, Clone, PartialEq, Default)]
+#[derive(Debug, Clone, PartialEq, Eq, Hash, Default)]
 pub struct Tree {
     /// The root; none of an empty text, or where nothing could be read.
     pub root: Option<Node>,
     /// What is no YAML 1.2.
     pub errors: Vec<SyntaxError>,
+    /// Whether something that its author wrote may be lacking: then no key proves absent.
+    pub broken: bool,
 }
 
 /// A node.
-#[derive(Debug, Clone, PartialEq)]
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
 pub struct Node {
     /// Its characters.
     pub span: Span,
@@ -40,10 +51,12 @@ pub struct Node {
 }
 
 /// What a node is.
-#[derive(Debug, Clone, PartialEq)]
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
 pub enum Value {
     /// Nothing, `~` or `null`.
     Null,
+    /// Something that can't be read. An error says why; whatever else is said of it would be a second message.
+    Unreadable,
     /// Text, not yet typed.
     Scalar(Scalar),
     /// A list.
@@ -53,7 +66,7 @@ pub enum Value {
 }
 
 /// A scalar.
-#[derive(Debug, Clone, PartialEq)]
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
 pub struct Scalar {
     /// The text, quotes and escapes resolved.
     pub text: String,
@@ -62,7 +75,7 @@ pub struct Scalar {
 }
 
 /// How a scalar is written.
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
 pub enum Style {
     /// Without quotes.
     Plain,
@@ -77,7 +90,7 @@ pub enum Style {
 }
 
 /// A key with its value.
-#[derive(Debug, Clone, PartialEq)]
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
 pub struct Entry {
     /// The key.
     pub key: Node,
@@ -86,7 +99,7 @@ pub struct Entry {
 }
 
 /// Something that is no YAML 1.2, or more than is read.
-#[derive(Debug, Clone, PartialEq)]
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
 pub struct SyntaxError {
     /// The characters at fault.
     pub span: Span,
@@ -99,7 +112,7 @@ pub struct SyntaxError {
 }
 
 /// The kinds of syntax error.
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
 pub enum ErrorKind {
     /// Not YAML 1.2.
     NotYaml,
@@ -109,15 +122,15 @@ pub enum ErrorKind {
     Limit,
 }
 
-/// A change of one span that is likely what was meant.
-#[derive(Debug, Clone, PartialEq, Eq)]
+/// A change of the text that is likely what was meant.
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
 pub struct Repair {
     /// What it does, in the imperative.
     pub title: String,
-    /// What is replaced.
-    pub span: Span,
-    /// By what.
-    pub text: String,
+    /// Whether only one meaning is possible.
+    pub safe: bool,
+    /// The edits, in the order of the text.
+    pub edits: Vec<Edit>,
 }
 
 impl Node {
@@ -135,13 +148,42 @@ impl Node {
 
     /// Moves the node and all in it on by an offset, for a piece of text that was read by itself.
     pub fn shift(&mut self, by: u32) {
-        self.span = self.span.shift(by);
+        self.each_span(&mut |span| *span = span.shift(by));
+    }
+
+    /// The innermost keys and values at an offset, outermost first: the way from the root to a cursor.
+    #[must_use]
+    pub fn path_at(&self, offset: u32) -> Vec<&Self> {
+        let mut path = vec![self];
+        while let Some(next) = path.last().and_then(|node| node.child_at(offset)) {
+            path.push(next);
+        }
+        path
+    }
+
+    fn child_at(&self, offset: u32) -> Option<&Self> {
+        let here = |node: &&Self| node.span.touches(offset) && !node.through_alias;
+        match &self.value {
+            Value::Sequence(nodes) => nodes.iter().find(here),
+            Value::Mapping(entries) => entries.iter().flat_map(|entry| [&entry.key, &entry.value]).find(here),
+            _ => None,
+        }
+    }
+
+    /// Calls `change` for the span of the node and of all in it.
+    fn each_span(&mut self, change: &mut impl FnMut(&mut Span)) {
+        self.each_node(&mut |node| change(&mut node.span));
+    }
+
+    /// Calls `visit` for the node and all in it.
+    fn each_node(&mut self, visit: &mut impl FnMut(&mut Self)) {
+        visit(self);
         match &mut self.value {
-            Value::Sequence(nodes) => nodes.iter_mut().for_each(|node| node.shift(by)),
+            Value::Sequence(nodes) => nodes.iter_mut().for_each(|node| node.each_node(visit)),
             Value::Mapping(entries) => {
                 for entry in entries {
-                    entry.key.shift(by);
-                    entry.value.shift(by);
+                    entry.key.each_node(visit);
+                    entry.value.each_node(visit);
                 }
             }
             _ => {}
@@ -159,10 +201,23 @@ impl SyntaxError {
     /// The error moved on by an offset, for an item that was read by itself.
     #[must_use]
     pub fn shifted(mut self, by: u32) -> Self {
-        self.span = self.span.shift(by);
-        if let Some(repair) = &mut self.repair {
-            repair.span = repair.span.shift(by);
-        }
+        self.each_span(&mut |span| *span = span.shift(by));
         self
+    }
+
+    fn each_span(&mut self, change: &mut impl FnMut(&mut Span)) {
+        change(&mut self.span);
+        for edit in self.repair.iter_mut().flat_map(|repair| &mut repair.edits) {
+            change(&mut edit.span);
+        }
+    }
+}
+
+impl Tree {
+    fn each_span(&mut self, change: &mut impl FnMut(&mut Span)) {
+        if let Some(root) = &mut self.root {
+            root.each_span(change);
+        }
+        self.errors.iter_mut().for_each(|error| error.each_span(change));
     }
 }

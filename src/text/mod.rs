@@ -71,6 +71,15 @@ impl Span {
     }
 }
 
+/// A replacement of one span of a text.
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
+pub struct Edit {
+    /// What is replaced; empty where text is put in.
+    pub span: Span,
+    /// What stands there afterwards.
+    pub text: String,
+}
+
 /// A value that remembers where it stands. Equality and hash ignore the place, so that moved text is no change.
 #[derive(Debug, Clone, Default)]
 pub struct Spanned<T> {

@@ -80,7 +80,9 @@ impl Reader {
 
     /// Reports something at a node.
     pub fn slip(&mut self, kind: SlipKind, node: &Node, message: impl Into<String>) {
-        self.slips.push(Slip::new(kind, node.span, message));
+        // Of what can't be read an error says why already.
+        let slip = || Slip::new(kind, node.span, message);
+        self.slips.extend((node.value != Value::Unreadable).then(slip));
     }
 
     /// Reports a key that stands twice in its mapping: keys of a YAML mapping are unique (YAML 1.2 section 3.2.1.1).
@@ -142,9 +144,9 @@ impl Reader {
 
     /// Reports that a value is of another kind than the key wants.
     pub fn wrong_kind(&mut self, node: &Node, key: &'static Key) {
-        let text = format!("`{}` wants {}; {}", key.name, key.kind.wanted(), described(node));
-        self.slips
-            .push(Slip::new(SlipKind::WrongKind, node.span, text).at_key(key.name));
+        let text = || format!("`{}` wants {}; {}", key.name, key.kind.wanted(), described(node));
+        let slip = || Slip::new(SlipKind::WrongKind, node.span, text()).at_key(key.name);
+        self.slips.extend((node.value != Value::Unreadable).then(slip));
     }
 
     /// Text, kept as it is written.
@@ -379,7 +381,7 @@ impl Reader {
 /// What a node is, for a message: "`x` is text", "here is a list".
 pub fn described(node: &Node) -> String {
     match &node.value {
-        Value::Null => "here is nothing".to_owned(),
+        Value::Null | Value::Unreadable => "here is nothing".to_owned(),
         Value::Scalar(scalar) => {
             let short: String = scalar.text.chars().take(40).collect();
             let dots = if short.len() < scalar.text.len() { ".." } else { "" };
