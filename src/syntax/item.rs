@@ -26,13 +26,16 @@ impl Form {
     }
 
     /// Whether the parser read one block entry of this form to its end.
-    fn fits(self, parsed: &Parsed) -> bool {
+    fn fits(self, text: &str, parsed: &Parsed) -> bool {
+        // An anchor or tag may stand before the entry, but on its line.
+        let first = Lines::new(text, 0, text.len()).next();
+        let begins = |root: &Node| first.is_some_and(|line| (root.span.start as usize) < line.to);
         let one = match parsed.root.as_ref().map(|root| &root.value) {
             Some(Value::Sequence(nodes)) => self == Self::Listed && nodes.len() == 1,
             Some(Value::Mapping(entries)) => self != Self::Listed && entries.len() == 1,
             _ => false,
         };
-        parsed.stop.is_none() && parsed.block && one
+        parsed.stop.is_none() && parsed.block && one && parsed.root.as_ref().is_some_and(begins)
     }
 
     fn root(self, root: Option<Node>) -> Option<Node> {
@@ -52,7 +55,7 @@ pub fn parse_item(text: &str, form: Form) -> Tree {
 
 pub(super) fn read_piece(text: &str, form: Form, mut shared: Option<&mut Surroundings>) -> Tree {
     let parsed = parse(text, form.depth(), true, shared.as_deref_mut());
-    if form.fits(&parsed) && !parsed.cut {
+    if form.fits(text, &parsed) && !parsed.cut {
         return Tree {
             broken: !parsed.errors.is_empty(),
             errors: parsed.errors,
@@ -78,7 +81,7 @@ pub(super) fn read_piece(text: &str, form: Form, mut shared: Option<&mut Surroun
     }
     if let Some((at, _)) = &parsed.stop {
         let lenient = parse(text, form.depth(), false, shared.as_deref_mut());
-        if form.fits(&lenient) && lenient.errors.is_empty() {
+        if form.fits(text, &lenient) && lenient.errors.is_empty() {
             return Tree {
                 root: form.root(lenient.root),
                 errors: vec![too_far_left(text, *at, form)],

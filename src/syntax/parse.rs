@@ -18,6 +18,8 @@ pub(super) struct Surroundings {
     anchors: FxHashMap<String, Anchored>,
     /// How many values aliases have brought in.
     copied: usize,
+    /// Whether those were too many.
+    over: bool,
 }
 
 /// An anchored value with its size, so that an alias is weighed before it is copied.
@@ -94,6 +96,7 @@ pub(super) fn parse(text: &str, depth: usize, strict: bool, surroundings: Option
     };
     let mut builder = Builder::new(text, shared.directives.len(), depth, true);
     builder.copied = shared.copied;
+    builder.over = shared.over;
     builder.run(&source, options, Some(shared));
     builder.out
 }
@@ -180,6 +183,7 @@ impl<'a> Builder<'a> {
         }
         if let Some(shared) = shared.as_mut() {
             shared.copied = self.copied;
+            shared.over = self.over;
             let mut ids: Vec<_> = names.into_iter().collect();
             ids.sort_unstable_by_key(|(id, _)| *id);
             for (id, name) in ids {

@@ -43,13 +43,22 @@ pub(super) fn split(text: &str) -> Outline {
     }
     let frame = frame::frame(text, &mut outline.errors);
     let mut shared = Surroundings::default();
-    let Some(first) = Lines::new(text, frame.from, frame.to).next() else {
-        return outline;
-    };
+    let first = Lines::new(text, frame.from, frame.to).next();
+    let before = first.map_or(frame.to, |line| line.start);
+    outline.errors.extend(words::unprintable(text, 0, before));
+    if outline
+        .errors
+        .iter()
+        .all(|error| error.kind != ErrorKind::SeveralDocuments)
+    {
+        outline.errors.extend(words::unprintable(text, frame.to, text.len()));
+    }
+    let Some(first) = first else { return outline };
     if frame.odd || !begins_mapping(text, frame.from, frame.to, first) {
         whole(text, &frame, &mut outline);
         return outline;
     }
+    byte_order_mark(text, frame.to, &mut outline.errors);
     shared.directives = frame.directives;
     let chunks = chunks(text, frame.from, frame.to, first, &mut outline.errors);
     for chunk in &chunks {
@@ -63,6 +72,20 @@ pub(super) fn split(text: &str) -> Outline {
         .collect();
     cap_file(&mut outline.errors);
     outline
+}
+
+/// Reports a byte order mark inside the document. A piece may begin with one that its text alone would not show as
+/// misplaced, so the parser is asked about the document.
+fn byte_order_mark(text: &str, to: usize, errors: &mut Vec<SyntaxError>) {
+    let mark = '\u{FEFF}';
+    if !text[..to].trim_start_matches(mark).contains(mark) {
+        return;
+    }
+    if let Some((at, fault @ granit_parser::ErrorKind::BomInsideDocument)) = &parse(&text[..to], 0, true, None).stop {
+        let error = words::fault(text, *at, fault);
+        let span = error.span;
+        errors.push(error.repaired("delete it", true, span, ""));
+    }
 }
 
 /// Whether the root is a mapping in block style, or meant as one.
@@ -85,6 +108,8 @@ fn chunks(text: &str, from: usize, to: usize, first: Line, errors: &mut Vec<Synt
     let column = first.indent;
     let mut chunks: Vec<Chunk> = Vec::new();
     let bytes = text.as_bytes();
+    // Whether the entry began with `?` and its `: value` is still to come.
+    let mut explicit = false;
     for line in Lines::new(text, from, to) {
         if line.indent > column || line.tabbed() {
             continue;
@@ -93,8 +118,8 @@ fn chunks(text: &str, from: usize, to: usize, first: Line, errors: &mut Vec<Synt
         if !chunks.is_empty() && line.indent == column {
             // A list may stand in the column of its key; brackets and `:` go on with what is above.
             let goes_on = match bytes[line.from] {
-                b'-' => line::is_entry(content) || chunks.last().is_some_and(|c| in_flat_list(text, c, line)),
-                b':' => line::is_indicator(content, b':'),
+                b'-' => line::is_entry(content),
+                b':' => line::is_indicator(content, b':') && std::mem::take(&mut explicit),
                 b'}' | b']' => true,
                 _ => false,
             };
@@ -102,6 +127,7 @@ fn chunks(text: &str, from: usize, to: usize, first: Line, errors: &mut Vec<Synt
                 continue;
             }
         }
+        explicit = line::is_indicator(content, b'?');
         if let Some(last) = chunks.last_mut() {
             last.end = line.start;
         }
@@ -113,23 +139,9 @@ fn chunks(text: &str, from: usize, to: usize, first: Line, errors: &mut Vec<Synt
             }
             errors.push(error);
         }
-        if content.starts_with('\u{FEFF}') && line.start > 0 {
-            let span = Span::new(line.from, line.from + 3);
-            let error = words::not_yaml(span, "a byte order mark stands in the middle of the text");
-            errors.push(error.repaired("delete it", true, span, ""));
-        }
         chunks.push(Chunk { first: line, end: to });
     }
     chunks
-}
-
-/// Whether the chunk is a list in the column of its key, so that `-mark:` there is meant as an entry.
-fn in_flat_list(text: &str, chunk: &Chunk, line: Line) -> bool {
-    let header = line::without_comment(chunk.first.content(text));
-    header.ends_with(':')
-        && Lines::new(text, chunk.first.to, line.start)
-            .next()
-            .is_some_and(|first| first.indent == line.indent && line::is_entry(first.content(text)))
 }
 
 fn top_entry(text: &str, chunk: Chunk, others: bool, errors: &mut Vec<SyntaxError>) -> TopEntry {
@@ -151,6 +163,9 @@ fn top_entry(text: &str, chunk: Chunk, others: bool, errors: &mut Vec<SyntaxErro
                 errors.push(words::not_yaml(key_span, text).repaired("write a colon behind it", true, end, ":"));
             }
             errors.extend(items::uneven(text, &items));
+            let begin = items.first().map_or(chunk.end, |item| item.span.start as usize);
+            errors.extend(words::unprintable(text, first.to.min(begin), begin));
+            errors.extend(words::unprintable(text, first.from, first.to));
             TopEntry::List(ListSection {
                 key: key.to_owned(),
                 key_span,

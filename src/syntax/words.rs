@@ -149,3 +149,17 @@ pub(super) fn character(text: &str, at: usize) -> Span {
         }
     }
 }
+
+/// The first character of a stretch of comments that YAML 1.2 section 5.1 does not allow.
+pub(super) fn unprintable(text: &str, from: usize, to: usize) -> Option<SyntaxError> {
+    let allowed = |c: char| matches!(c, '\t' | '\n' | '\r' | ' '..='~' | '\u{85}' | '\u{a0}'..='\u{d7ff}' | '\u{e000}'..='\u{fffd}' | '\u{10000}'..);
+    let begins = |at: usize| from + at == 0 || text[..from + at].ends_with(['\n', '\r']);
+    let mut characters = text.get(from..to)?.char_indices();
+    // A byte order mark may stand only where a document begins.
+    let (at, character) = characters.find(|(at, c)| !allowed(*c) || *c == '\u{FEFF}' && !begins(*at))?;
+    Some(fault(
+        text,
+        Span::new(0, from + at).end,
+        &Fault::UnexpectedCharacter { character },
+    ))
+}

@@ -29,14 +29,14 @@ impl std::error::Error for DecodeError {}
 /// The first byte that does not fit the encoding.
 pub fn decode(bytes: Vec<u8>) -> Result<String, DecodeError> {
     match bytes.as_slice() {
-        [0xFF, 0xFE, 0, 0, rest @ ..] => utf32(rest, u32::from_le_bytes, "UTF-32 (little endian)"),
-        [0, 0, 0xFE, 0xFF, rest @ ..] => utf32(rest, u32::from_be_bytes, "UTF-32 (big endian)"),
-        [0xFF, 0xFE, rest @ ..] => utf16(rest, u16::from_le_bytes, "UTF-16 (little endian)"),
-        [0xFE, 0xFF, rest @ ..] => utf16(rest, u16::from_be_bytes, "UTF-16 (big endian)"),
+        [0xFF, 0xFE, 0, 0, rest @ ..] => utf32(rest, 4, u32::from_le_bytes, "UTF-32 (little endian)"),
+        [0, 0, 0xFE, 0xFF, rest @ ..] => utf32(rest, 4, u32::from_be_bytes, "UTF-32 (big endian)"),
+        [0xFF, 0xFE, rest @ ..] => utf16(rest, 2, u16::from_le_bytes, "UTF-16 (little endian)"),
+        [0xFE, 0xFF, rest @ ..] => utf16(rest, 2, u16::from_be_bytes, "UTF-16 (big endian)"),
         // Without a mark, a first character below U+0100 tells the encoding by its zero bytes.
-        [0, first, ..] if *first != 0 => utf16(&bytes, u16::from_be_bytes, "UTF-16 (big endian)"),
+        [0, first, ..] if *first != 0 => utf16(&bytes, 0, u16::from_be_bytes, "UTF-16 (big endian)"),
         [first, 0, ..] if *first != 0 && bytes.len().is_multiple_of(2) && bytes.get(3) == Some(&0) => {
-            utf16(&bytes, u16::from_le_bytes, "UTF-16 (little endian)")
+            utf16(&bytes, 0, u16::from_le_bytes, "UTF-16 (little endian)")
         }
         _ => {
             let mark = bytes.starts_with(&[0xEF, 0xBB, 0xBF]);
@@ -52,41 +52,37 @@ pub fn decode(bytes: Vec<u8>) -> Result<String, DecodeError> {
     }
 }
 
-fn utf16(bytes: &[u8], unit: fn([u8; 2]) -> u16, encoding: &'static str) -> Result<String, DecodeError> {
+/// Decodes bytes that stand behind a byte order mark of `mark` bytes.
+fn utf16(bytes: &[u8], mark: usize, unit: fn([u8; 2]) -> u16, encoding: &'static str) -> Result<String, DecodeError> {
     let pairs = bytes.as_chunks::<2>();
     let mut text = String::with_capacity(bytes.len());
-    for (at, decoded) in char::decode_utf16(pairs.0.iter().map(|pair| unit(*pair))).enumerate() {
-        text.push(decoded.map_err(|_| DecodeError {
-            encoding,
-            offset: 2 * at,
-        })?);
+    let mut units = 0;
+    for decoded in char::decode_utf16(pairs.0.iter().map(|pair| unit(*pair))) {
+        let offset = mark + 2 * units;
+        let character = decoded.map_err(|_| DecodeError { encoding, offset })?;
+        units += character.len_utf16();
+        text.push(character);
     }
     if pairs.1.is_empty() {
         Ok(text)
     } else {
-        Err(DecodeError {
-            encoding,
-            offset: bytes.len() - 1,
-        })
+        let offset = mark + bytes.len() - 1;
+        Err(DecodeError { encoding, offset })
     }
 }
 
-fn utf32(bytes: &[u8], unit: fn([u8; 4]) -> u32, encoding: &'static str) -> Result<String, DecodeError> {
+fn utf32(bytes: &[u8], mark: usize, unit: fn([u8; 4]) -> u32, encoding: &'static str) -> Result<String, DecodeError> {
     let words = bytes.as_chunks::<4>();
     let mut text = String::with_capacity(bytes.len());
     for (at, word) in words.0.iter().enumerate() {
-        text.push(char::from_u32(unit(*word)).ok_or(DecodeError {
-            encoding,
-            offset: 4 * at,
-        })?);
+        let offset = mark + 4 * at;
+        text.push(char::from_u32(unit(*word)).ok_or(DecodeError { encoding, offset })?);
     }
     if words.1.is_empty() {
         Ok(text)
     } else {
-        Err(DecodeError {
-            encoding,
-            offset: bytes.len() - 1,
-        })
+        let offset = mark + 4 * words.0.len();
+        Err(DecodeError { encoding, offset })
     }
 }
 
@@ -127,6 +123,11 @@ mod tests {
     fn names_the_byte_that_is_no_text() {
         let error = decode(b"mark: B\xE9ton".to_vec()).unwrap_err();
         assert_eq!(error.to_string(), "byte 7 is not UTF-8; save the file as UTF-8");
-        assert!(decode(b"\xFF\xFE\x00\xD8".to_vec()).is_err());
+        // Offsets count the mark, and two units for a character beyond U+FFFF.
+        let mut bytes: Vec<u8> = "\u{FEFF}😀".encode_utf16().flat_map(u16::to_le_bytes).collect();
+        bytes.extend([0x00, 0xD8]);
+        assert_eq!(decode(bytes.clone()).unwrap_err().offset, 6);
+        bytes.truncate(7);
+        assert_eq!(decode(bytes).unwrap_err().offset, 6);
     }
 }

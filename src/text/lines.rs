@@ -108,15 +108,19 @@ impl LineIndex {
         }
     }
 
+    /// Line and column as reports count them: from one, in Unicode scalar values.
+    #[must_use]
+    pub fn report(&self, text: &str, offset: u32) -> (u32, u32) {
+        let at = self.position(text, offset, Encoding::Utf32);
+        (at.line + 1, at.column + 1)
+    }
+
     /// The offset of a position. A column past the end of its line means the end of the line, before its break.
     #[must_use]
     pub fn offset(&self, text: &str, position: Position, encoding: Encoding) -> u32 {
         let start = self.start(position.line, text);
         let end = self.start(position.line.saturating_add(1), text);
-        let line = text
-            .get(start as usize..end as usize)
-            .unwrap_or("")
-            .trim_end_matches(['\r', '\n']);
+        let line = without_break(text.get(start as usize..end as usize).unwrap_or(""));
         let mut units = 0;
         for (at, c) in line.char_indices() {
             let size = match encoding {
@@ -125,6 +129,7 @@ impl LineIndex {
                 Encoding::Utf32 => 1,
             };
             if units + size > position.column as usize {
+                // A column inside a character counts as its start.
                 return start + u32::try_from(at).unwrap_or(0);
             }
             units += size;
@@ -152,6 +157,12 @@ fn mark(text: &str, start: usize, end: usize, marks: &mut Vec<Mark>) {
             utf32: small(utf32),
         });
     }
+}
+
+/// A line without the break that ends it.
+fn without_break(line: &str) -> &str {
+    let line = line.strip_suffix('\n').unwrap_or(line);
+    line.strip_suffix('\r').unwrap_or(line)
 }
 
 #[cfg(test)]

@@ -1,8 +1,10 @@
 //! Text: spans, positions in the encodings of editors and reports, and decoding of a file's bytes.
 
+mod buffer;
 mod decode;
 mod lines;
 
+pub use buffer::Buffer;
 pub use decode::{DecodeError, decode};
 pub use lines::{Encoding, LineIndex, Position};
 

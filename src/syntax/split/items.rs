@@ -22,7 +22,8 @@ pub(super) fn items(text: &str, header: Line, end: usize, form: Form) -> Option<
     let fits = if list {
         begins_list(text, first, end)
     } else {
-        first.indent > header.indent && line::key_end(first.content(text)).is_some()
+        let content = first.content(text);
+        first.indent > header.indent && line::key_end(content).is_some() && !line::is_entry(content)
     };
     if !fits || first.tabbed() || first.content(text).starts_with(['?', '&', '!', '*']) {
         return None;
