@@ -111,14 +111,14 @@ fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -
     let mut finding = Finding::new(declaration, place(error.span), error.message);
     finding.mark = mark.map(str::to_owned);
     if let Some(repair) = error.repair {
-        let edit = FixEdit {
-            place: place(repair.span),
-            text: repair.text,
-        };
+        let edits = repair.edits.into_iter().map(|edit| FixEdit {
+            place: place(edit.span),
+            text: edit.text,
+        });
         finding.fixes.push(Fix {
             title: repair.title,
-            safe: false,
-            edits: vec![edit],
+            safe: repair.safe,
+            edits: edits.collect(),
         });
     }
     finding
