@@ -51,6 +51,7 @@ pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
         path,
         text: Arc::clone(&text),
         kind,
+        entries: Vec::new(),
         head: Head::default(),
         groups: Vec::new(),
         members: Vec::new(),
@@ -107,6 +108,7 @@ impl Top<'_> {
     fn piece(&mut self, text: &str, piece: &Piece) {
         let base = piece.span.start;
         let tree = piece.tree(text);
+        self.file.entries.push(piece.clone());
         self.file.head.doubtful |= tree.broken || !tree.errors.is_empty();
         self.file
             .errors
@@ -131,22 +133,22 @@ impl Top<'_> {
         if self.repeated(&list.key, list.key_span) {
             return;
         }
-        let read = |piece: &Piece| (piece.span.start, piece.tree(text));
+        let read = |piece: &Piece| (piece.clone(), piece.tree(text));
         match list.key.as_str() {
             "members" => {
                 let members = list.items.par_iter().map(read);
-                self.file.members = members.map(|(base, tree)| item(base, member_item(tree))).collect();
+                self.file.members = members.map(|(piece, tree)| item(piece, member_item(tree))).collect();
             }
             "groups" => {
                 let groups = list.items.iter().map(read);
                 self.file.groups = groups
-                    .filter_map(|(base, tree)| Some(item(base, named_item(tree, group)?)))
+                    .filter_map(|(piece, tree)| Some(item(piece, named_item(tree, group)?)))
                     .collect();
             }
             _ => {
                 let products = list.items.iter().map(read);
                 self.file.products = products
-                    .filter_map(|(base, tree)| Some(item(base, named_item(tree, product)?)))
+                    .filter_map(|(piece, tree)| Some(item(piece, named_item(tree, product)?)))
                     .collect();
             }
         }
@@ -251,9 +253,9 @@ fn first_line(span: Span, text: &str) -> Span {
     }
 }
 
-fn item<T>(base: u32, decoded: Decoded<T>) -> Item<T> {
+fn item<T>(piece: Piece, decoded: Decoded<T>) -> Item<T> {
     Item {
-        base,
+        piece,
         decoded: Arc::new(decoded),
     }
 }

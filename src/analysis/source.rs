@@ -8,6 +8,7 @@ use crate::design::model::library::NamedProduct;
 use crate::design::model::member::Member;
 use crate::design::slip::Slip;
 use crate::syntax::SyntaxError;
+use crate::syntax::outline::Piece;
 use crate::text::Span;
 
 /// What kind a file is.
@@ -33,13 +34,19 @@ pub struct Decoded<T> {
 /// A decoded thing at its place in the file.
 #[derive(Debug, Clone)]
 pub struct Item<T> {
-    /// Offset of the item's text in the file's.
-    pub base: u32,
+    /// The item's text in the file's.
+    pub piece: Piece,
     /// What was decoded; shared by equal texts.
     pub decoded: Arc<Decoded<T>>,
 }
 
 impl<T> Item<T> {
+    /// Offset of the item's text in the file's.
+    #[must_use]
+    pub const fn base(&self) -> u32 {
+        self.piece.span.start
+    }
+
     /// The thing.
     #[must_use]
     pub fn value(&self) -> &T {
@@ -55,7 +62,7 @@ impl<T> Item<T> {
     /// A span of the item as a span of the file.
     #[must_use]
     pub fn place(&self, span: Span) -> Span {
-        span.shift(self.base)
+        span.shift(self.base())
     }
 }
 
@@ -68,6 +75,8 @@ pub struct SourceFile {
     pub text: Arc<str>,
     /// Its kind.
     pub kind: FileKind,
+    /// The entries of the top level that are no lists of items, in the order of the file.
+    pub entries: Vec<Piece>,
     /// What a steelwork file says outside its members (spans of the file).
     pub head: Head,
     /// Groups in the order of the file.

@@ -129,12 +129,12 @@ fn item_findings<T>(file: &SourceFile, item: &Item<T>, mark: Option<&str>, out: 
     out.extend(
         errors
             .iter()
-            .map(|error| syntax_finding(&file.path, error.clone().shifted(item.base), mark)),
+            .map(|error| syntax_finding(&file.path, error.clone().shifted(item.base()), mark)),
     );
     out.extend(
         slips
             .iter()
-            .map(|slip| slip_finding(file, slip.clone().shifted(item.base), mark)),
+            .map(|slip| slip_finding(file, slip.clone().shifted(item.base()), mark)),
     );
 }
 
@@ -174,7 +174,7 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
             out.extend(
                 slips
                     .drain(..)
-                    .map(|slip| slip_finding(file, slip.shifted(item.base), None)),
+                    .map(|slip| slip_finding(file, slip.shifted(item.base()), None)),
             );
         }
         for item in &file.products {
@@ -187,7 +187,7 @@ pub fn reading(design: &Design, out: &mut Vec<Finding>) {
             out.extend(
                 slips
                     .drain(..)
-                    .map(|slip| slip_finding(file, slip.shifted(item.base), mark)),
+                    .map(|slip| slip_finding(file, slip.shifted(item.base()), mark)),
             );
         }
     }

@@ -32,14 +32,14 @@ pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
         let item = design.member(*at);
         let mark = item.value().mark.value().map(String::as_str);
         let who = mark.unwrap_or("this member");
-        search.block(&item.value().keys, who, mark, at.file, item.base);
+        search.block(&item.value().keys, who, mark, at.file, item.base());
     }
     let mut groups: Vec<(usize, usize)> = design.groups.values().copied().collect();
     groups.sort_unstable();
     for (file, index) in groups {
         let item = &design.files[file].groups[index];
         let who = format!("each member of the group `{}`", item.value().name.value);
-        search.block(&item.value().keys, &who, None, file, item.base);
+        search.block(&item.value().keys, &who, None, file, item.base());
     }
     search.block(&design.head().defaults, "each member by default", None, 0, 0);
 }
