@@ -6,7 +6,7 @@ use crate::text::Span;
 /// Where in the file, and what, is written so that a member states `key: value` itself: after its mark, in flow style in
 /// a flow mapping and on a line of its own in a block. `None` where the member has no mark of its own to go by, or stands
 /// there by an alias.
-pub(super) fn key(design: &Design, at: MemberAt, key: &str, value: &str) -> Option<(Span, String)> {
+pub fn key(design: &Design, at: MemberAt, key: &str, value: &str) -> Option<(Span, String)> {
     let text: &str = &design.files[at.file].text;
     let item = design.member(at);
     let member = item.value();
@@ -50,12 +50,12 @@ pub(super) fn key(design: &Design, at: MemberAt, key: &str, value: &str) -> Opti
 }
 
 /// Whether a value stands in the file by an alias only: what is written there would not be the value.
-pub(super) fn through_alias(text: &str, span: Span) -> bool {
+pub fn through_alias(text: &str, span: Span) -> bool {
     span.slice(text).starts_with('*')
 }
 
 /// A name as a plain scalar, or in quotes where YAML would take it for something else.
-pub(super) fn scalar(name: &str) -> String {
+pub fn scalar(name: &str) -> String {
     let plain = name.starts_with(|c: char| c.is_alphabetic())
         && !name.ends_with(' ')
         && name

@@ -8,7 +8,7 @@ pub mod departures;
 pub mod design_intent;
 pub mod finding;
 pub mod fire;
-mod insert;
+pub mod insert;
 pub mod reading;
 pub mod registry;
 

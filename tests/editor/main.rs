@@ -1,0 +1,4 @@
+//! What the editor shows, on texts with a cursor: `|` stands where it is.
+
+mod fixture;
+mod names;
