@@ -4,13 +4,14 @@
 //! tags of `%TAG` lines) is read here at once and handed on in the same shape.
 
 use std::hash::{Hash, Hasher};
+use std::ops::Range;
 use std::sync::Arc;
 
 use rustc_hash::FxHasher;
 
 use crate::syntax::item::{Form, parse_item};
 use crate::syntax::{Node, SyntaxError, Tree, split};
-use crate::text::Span;
+use crate::text::{Change, Span};
 
 /// A file's top level.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -21,6 +22,8 @@ pub struct Outline {
     pub other: Option<Node>,
     /// What is wrong outside the pieces (spans of the file).
     pub errors: Vec<SyntaxError>,
+    /// Whether a change within the items of a list leaves the rest as it was split; see [`again`].
+    pub steady: bool,
 }
 
 /// An entry of the top level.
@@ -74,6 +77,25 @@ impl Piece {
         }
     }
 
+    /// Whether its text alone tells its tree.
+    #[must_use]
+    pub const fn is_plain(&self) -> bool {
+        self.parsed.is_none()
+    }
+
+    /// The piece moved to where it begins now.
+    #[must_use]
+    pub fn moved(&self, start: u32) -> Self {
+        Self {
+            span: Span {
+                start,
+                end: start.saturating_add(self.span.len()),
+            },
+            form: self.form,
+            parsed: self.parsed.clone(),
+        }
+    }
+
     /// Reads the piece; `file` is the text that was split. Spans count from the start of the piece.
     #[must_use]
     pub fn tree(&self, file: &str) -> Tree {
@@ -95,6 +117,23 @@ impl Piece {
         }
         hasher.finish()
     }
+}
+
+/// What a change within the items of a list makes of them.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Resplit {
+    /// The items that are gone.
+    pub old: Range<usize>,
+    /// The pieces that stand in their place.
+    pub new: Vec<Piece>,
+}
+
+/// Splits a changed text again where the change lies within the items of `members`, whose key stands at `key` and whose
+/// pieces are `items` in the old text; the outline of that was [steady](Outline::steady). `None` where the change may
+/// reach further. The items behind keep their texts, moved on.
+#[must_use]
+pub fn again(old: &str, new: &str, change: Change, key: Span, items: &[&Piece]) -> Option<Resplit> {
+    split::again::again(old, new, change, key, items)
 }
 
 /// Splits a text.

@@ -7,6 +7,7 @@ use crate::syntax::parse::{Surroundings, parse};
 use crate::syntax::{ErrorKind, MAX_BYTES, Node, SyntaxError, Tree, Value, words};
 use crate::text::Span;
 
+pub(super) mod again;
 mod frame;
 mod items;
 mod references;
@@ -59,6 +60,7 @@ pub(super) fn split(text: &str) -> Outline {
         return outline;
     }
     byte_order_mark(text, frame.to, &mut outline.errors);
+    outline.steady = frame.directives.is_empty() && line::key_end(first.content(text)).is_some();
     shared.directives = frame.directives;
     let chunks = chunks(text, frame.from, frame.to, first, &mut outline.errors);
     for chunk in &chunks {
@@ -71,6 +73,7 @@ pub(super) fn split(text: &str) -> Outline {
         .map(|entry| unfold(text, entry, &mut outline.errors))
         .collect();
     cap_file(&mut outline.errors);
+    outline.steady &= outline.errors.is_empty();
     outline
 }
 

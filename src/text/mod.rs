@@ -1,10 +1,12 @@
 //! Text: spans, positions in the encodings of editors and reports, and decoding of a file's bytes.
 
 mod buffer;
+mod change;
 mod decode;
 mod lines;
 
 pub use buffer::Buffer;
+pub use change::Change;
 pub use decode::{DecodeError, decode};
 pub use lines::{Encoding, LineIndex, Position};
 

@@ -29,40 +29,89 @@ pub(super) fn items(text: &str, header: Line, end: usize, form: Form) -> Option<
         return None;
     }
     let mut found = vec![begin(first, end)];
-    let key = first_key(first.content(text).trim_start_matches('-').trim_start());
-    let mut column = first.indent;
-    let mut inner = content_column(text, first);
+    let mut walk = Walk::from(text, first, form);
     for line in lines {
+        match walk.takes(text, line) {
+            Step::Begins => {
+                if let Some(last) = found.last_mut() {
+                    last.span.end = Span::new(0, line.start).end;
+                }
+                found.push(begin(line, end));
+            }
+            Step::GoesOn => {}
+            Step::Lost => return None,
+        }
+    }
+    Some(found)
+}
+
+/// A walk over the lines of a list or mapping.
+pub(super) struct Walk<'a> {
+    list: bool,
+    /// The key that its first item begins with.
+    key: Option<&'a str>,
+    /// The column of the item that the walk is in, and that of what stands behind its dash.
+    column: usize,
+    inner: usize,
+}
+
+/// What a line is to the list.
+pub(super) enum Step {
+    /// It begins an item.
+    Begins,
+    /// It goes on with the item above.
+    GoesOn,
+    /// Indentation can't tell the items.
+    Lost,
+}
+
+impl<'a> Walk<'a> {
+    /// A walk that begins at the first line of the first item.
+    pub(super) fn from(text: &'a str, first: Line, form: Form) -> Self {
+        Self {
+            list: form == Form::Listed,
+            key: first_key(first.content(text).trim_start_matches('-').trim_start()),
+            column: first.indent,
+            inner: content_column(text, first),
+        }
+    }
+
+    /// Goes on from the first line of another item.
+    pub(super) fn at(mut self, text: &str, first: Line) -> Self {
+        self.column = first.indent;
+        self.inner = content_column(text, first);
+        self
+    }
+
+    pub(super) fn takes(&mut self, text: &str, line: Line) -> Step {
+        let (list, column, inner) = (self.list, self.column, self.inner);
         if line.indent > column && !(list && line.indent < inner) || line.tabbed() {
-            continue;
+            return Step::GoesOn;
         }
         let content = line.content(text);
         let begins = if list {
             // A dash left of an item's keys can only begin another item, whatever its exact column.
             // So can a line in its column with the key that the first item begins with: its dash is missing.
             content.starts_with('-') && line.indent < inner
-                || line.indent == column && key.is_some() && first_key(content) == key
+                || line.indent == column && self.key.is_some() && first_key(content) == self.key
         } else if line.indent == column {
             if matches!(content.as_bytes()[0], b'?' | b':') && content[1..].starts_with([' ', '\t'])
                 || content == "?"
                 || content == ":"
             {
-                return None;
+                return Step::Lost;
             }
             !content.starts_with(['}', ']'])
         } else {
             line.indent < column && line::key_end(content).is_some()
         };
-        if begins {
-            if let Some(last) = found.last_mut() {
-                last.span.end = Span::new(0, line.start).end;
-            }
-            column = line.indent;
-            inner = content_column(text, line);
-            found.push(begin(line, end));
+        if !begins {
+            return Step::GoesOn;
         }
+        self.column = line.indent;
+        self.inner = content_column(text, line);
+        Step::Begins
     }
-    Some(found)
 }
 
 /// The key that a line begins with.
