@@ -22,7 +22,11 @@ fn list(outline: &Outline) -> Option<&ListSection> {
 fn spliced(old: &Outline, change: Change, resplit: &scorchline::syntax::outline::Resplit) -> Outline {
     let by = |start: u32| start + u32::try_from(change.added).unwrap() - u32::try_from(change.removed).unwrap();
     let behind = |piece: &Piece| {
-        if piece.span.start as usize > change.at { piece.moved(by(piece.span.start)) } else { piece.clone() }
+        if piece.span.start as usize > change.at {
+            piece.moved(by(piece.span.start))
+        } else {
+            piece.clone()
+        }
     };
     let entries = old.entries.iter().map(|entry| match entry {
         TopEntry::List(list) if list.key == "members" => {
@@ -39,11 +43,18 @@ fn spliced(old: &Outline, change: Change, resplit: &scorchline::syntax::outline:
                 key_span.end = by(key_span.end);
             }
             let items = list.items.iter().map(behind).collect();
-            TopEntry::List(ListSection { items, key_span, ..list.clone() })
+            TopEntry::List(ListSection {
+                items,
+                key_span,
+                ..list.clone()
+            })
         }
         TopEntry::Head(piece) => TopEntry::Head(behind(piece)),
     });
-    Outline { entries: entries.collect(), ..old.clone() }
+    Outline {
+        entries: entries.collect(),
+        ..old.clone()
+    }
 }
 
 fn put() -> impl Strategy<Value = String> {

@@ -63,9 +63,9 @@ pub struct Design {
     /// Files: the head first, then its parts, then the libraries.
     pub files: Vec<Arc<SourceFile>>,
     /// Every member of head and parts in order.
-    pub members: Vec<MemberAt>,
+    pub members: Arc<Vec<MemberAt>>,
     /// Members by mark; the first that carries it.
-    pub marks: FxHashMap<String, MemberAt>,
+    pub marks: Arc<FxHashMap<String, MemberAt>>,
     /// Groups by name: file and index there.
     pub groups: FxHashMap<String, (FileIndex, usize)>,
     /// Products by name: file and index there.

@@ -8,12 +8,18 @@ use rustc_hash::{FxHashMap, FxHashSet};
 use crate::analysis::design::{Design, LinkKind, LinkTrouble, MemberAt};
 use crate::analysis::files::{Files, ReadTrouble};
 use crate::analysis::read::read;
+use crate::analysis::reread::reread;
 use crate::analysis::source::{FileKind, SourceFile};
 use crate::design::decode::fire::BUILT_IN;
 
-/// Files that were read before: heads, parts and libraries name each other, and each is read once a load.
+/// Files as they were read at the last load: what has not changed is not read again.
+#[derive(Debug, Default)]
+pub struct Kept(FxHashMap<PathBuf, Arc<SourceFile>>);
+
+/// The files of a load: heads, parts and libraries name each other, and each is read once.
 struct Sources<'a> {
     files: &'a dyn Files,
+    kept: &'a Kept,
     known: FxHashMap<PathBuf, Result<Arc<SourceFile>, ReadTrouble>>,
 }
 
@@ -22,22 +28,34 @@ impl Sources<'_> {
         if let Some(known) = self.known.get(path) {
             return known.clone();
         }
-        let text = self.files.read(path);
-        let source = text.map(|text| Arc::new(read(Arc::new(path.clone()), text)));
+        let source = self.files.read(path).map(|text| match self.kept.0.get(path) {
+            Some(kept) if Arc::ptr_eq(&kept.text, &text) || kept.text == text => Arc::clone(kept),
+            Some(kept) => Arc::new(reread(kept, text)),
+            None => Arc::new(read(Arc::new(path.clone()), text)),
+        });
         self.known.insert(path.clone(), source.clone());
         source
     }
 }
 
+/// A load: the designs, and the files that can't be read with their trouble.
+pub type Loaded = (Vec<Arc<Design>>, Vec<(PathBuf, ReadTrouble)>);
+
 /// Reads files and assembles every design among them. A part whose head lists it belongs to the head's design and is no
 /// design of its own; its head is read even where it is not among the files, for a part says little without it. Files
 /// that can't be read are answered with their trouble.
 #[must_use]
-pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf, ReadTrouble)>) {
+pub fn load(files: &dyn Files, paths: &[PathBuf]) -> Loaded {
+    load_again(files, paths, &mut Kept::default(), &[])
+}
+
+/// Loads again: of `older` designs those stay whose files are what they were.
+pub fn load_again(files: &dyn Files, paths: &[PathBuf], kept: &mut Kept, older: &[Arc<Design>]) -> Loaded {
     let mut troubles = Vec::new();
     let mut sources = Vec::new();
     let mut known = Sources {
         files,
+        kept,
         known: FxHashMap::default(),
     };
     for path in paths {
@@ -59,11 +77,19 @@ pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf,
             sources.push(source);
         }
     }
-    let designs: Vec<Design> = sources
+    let designs: Vec<Arc<Design>> = sources
         .iter()
-        .map(|source| assemble(&mut known, Arc::clone(source)))
+        .map(|source| {
+            let before = older.iter().find(|design| design.files[0].path == source.path);
+            assemble(&mut known, Arc::clone(source), before)
+        })
         .collect();
-    let designs: Vec<Design> = designs
+    let read = std::mem::take(&mut known.known);
+    kept.0 = read
+        .into_iter()
+        .filter_map(|(path, source)| Some((path, source.ok()?)))
+        .collect();
+    let designs: Vec<Arc<Design>> = designs
         .into_iter()
         .filter(|design| design.files.iter().any(|file| asked.contains(&*file.path)))
         .collect();
@@ -71,32 +97,33 @@ pub fn load(files: &dyn Files, paths: &[PathBuf]) -> (Vec<Design>, Vec<(PathBuf,
         .iter()
         .flat_map(|design| design.files.iter().skip(1).map(|file| Arc::clone(&file.path)))
         .collect();
-    let (mut kept, others): (Vec<Design>, Vec<Design>) = designs
+    let (mut whole, others): (Vec<Arc<Design>>, Vec<Arc<Design>>) = designs
         .into_iter()
         .partition(|design| !taken.contains(&design.files[0].path));
     // Files that take each other in a circle would all be gone.
     let mut held: FxHashSet<Arc<PathBuf>> = FxHashSet::default();
     held.extend(
-        kept.iter()
+        whole
+            .iter()
             .flat_map(|design| &design.files)
             .map(|file| Arc::clone(&file.path)),
     );
     for design in others {
         if !held.contains(&design.files[0].path) {
             held.extend(design.files.iter().map(|file| Arc::clone(&file.path)));
-            kept.push(design);
+            whole.push(design);
         }
     }
-    (kept, troubles)
+    (whole, troubles)
 }
 
 /// Follows the parts and libraries of a head file.
-fn assemble(sources: &mut Sources<'_>, head: Arc<SourceFile>) -> Design {
+fn assemble(sources: &mut Sources<'_>, head: Arc<SourceFile>, before: Option<&Arc<Design>>) -> Arc<Design> {
     let files = sources.files;
     let mut design = Design {
         files: vec![Arc::clone(&head)],
-        members: Vec::new(),
-        marks: FxHashMap::default(),
+        members: Arc::default(),
+        marks: Arc::default(),
         groups: FxHashMap::default(),
         products: FxHashMap::default(),
         fires: FxHashMap::default(),
@@ -160,8 +187,19 @@ fn assemble(sources: &mut Sources<'_>, head: Arc<SourceFile>) -> Design {
             design.files.push(library);
         }
     }
-    index(&mut design);
-    design
+    if let Some(before) = before
+        && before.troubles == design.troubles
+        && before.files.len() == design.files.len()
+        && before
+            .files
+            .iter()
+            .zip(&design.files)
+            .all(|(old, new)| Arc::ptr_eq(old, new))
+    {
+        return Arc::clone(before);
+    }
+    index(&mut design, before.map(Arc::as_ref));
+    Arc::new(design)
 }
 
 fn follow(
@@ -196,16 +234,9 @@ fn follow(
 }
 
 /// Names, the first that carries each.
-fn index(design: &mut Design) {
+fn index(design: &mut Design, before: Option<&Design>) {
     let files = design.files.clone();
     for (file, source) in files.iter().enumerate() {
-        for (index, item) in source.members.iter().enumerate() {
-            let at = MemberAt { file, index };
-            design.members.push(at);
-            if let Some(mark) = item.value().mark.value() {
-                design.marks.entry(mark.clone()).or_insert(at);
-            }
-        }
         for (index, item) in source.groups.iter().enumerate() {
             design
                 .groups
@@ -219,4 +250,34 @@ fn index(design: &mut Design) {
                 .or_insert((file, index));
         }
     }
+    if let Some(before) = before.filter(|before| marked_alike(before, design)) {
+        design.members = Arc::clone(&before.members);
+        design.marks = Arc::clone(&before.marks);
+        return;
+    }
+    let mut members = Vec::new();
+    let mut marks = FxHashMap::default();
+    for (file, source) in files.iter().enumerate() {
+        for (index, item) in source.members.iter().enumerate() {
+            let at = MemberAt { file, index };
+            members.push(at);
+            if let Some(mark) = item.value().mark.value() {
+                marks.entry(mark.clone()).or_insert(at);
+            }
+        }
+    }
+    design.members = Arc::new(members);
+    design.marks = Arc::new(marks);
+}
+
+/// Whether every member carries the mark that the one in its place carried before.
+fn marked_alike(before: &Design, design: &Design) -> bool {
+    before.files.len() == design.files.len()
+        && before.files.iter().zip(&design.files).all(|(old, new)| {
+            Arc::ptr_eq(old, new)
+                || old.members.len() == new.members.len()
+                    && old.members.iter().zip(&new.members).all(|(old, new)| {
+                        Arc::ptr_eq(&old.decoded, &new.decoded) || old.value().mark.value() == new.value().mark.value()
+                    })
+        })
 }

@@ -10,4 +10,5 @@ pub mod memo;
 pub mod names;
 pub mod outcome;
 pub mod read;
+pub mod reread;
 pub mod source;

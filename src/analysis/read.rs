@@ -4,6 +4,7 @@ use std::path::PathBuf;
 use std::sync::Arc;
 
 use rayon::prelude::*;
+use rustc_hash::FxHashMap;
 
 use crate::analysis::source::{Decoded, FileKind, Item, SourceFile};
 use crate::design::decode::head;
@@ -38,7 +39,17 @@ pub fn kind_by_name(path: &std::path::Path) -> Option<FileKind> {
 /// Reads a file's text. The kind follows from the name, or else from the first key that tells.
 #[must_use]
 pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
+    read_beside(path, text, None)
+}
+
+/// Reads a file's text, taking over what was read of equal pieces of an older text.
+pub(super) fn read_beside(path: Arc<PathBuf>, text: Arc<str>, older: Option<&SourceFile>) -> SourceFile {
     let outline = outline(&text);
+    let known = Known {
+        members: known(older, |file| &file.members),
+        groups: known(older, |file| &file.groups),
+        products: known(older, |file| &file.products),
+    };
     let kind = kind_by_name(&path).unwrap_or_else(|| {
         let protection = outline.entries.iter().any(|entry| tells_protection(entry, &text));
         if protection {
@@ -58,9 +69,11 @@ pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
         products: Vec::new(),
         slips: Vec::new(),
         errors: Vec::new(),
+        steady: None,
     };
     let mut top = Top {
         file: &mut file,
+        known,
         seen: Vec::new(),
         last_key: None,
     };
@@ -79,7 +92,56 @@ pub fn read(path: Arc<PathBuf>, text: Arc<str>) -> SourceFile {
         }
     }
     top.finish();
+    if !outline.steady || file.kind != FileKind::Steelwork {
+        file.steady = None;
+    }
     file
+}
+
+/// Items of an older text by fingerprint.
+type Older<'a, T> = FxHashMap<u64, (&'a str, &'a Item<T>)>;
+
+/// What was read of an older text.
+struct Known<'a> {
+    members: Older<'a, Member>,
+    groups: Older<'a, Group>,
+    products: Older<'a, NamedProduct>,
+}
+
+fn known<'a, T>(older: Option<&'a SourceFile>, items: impl Fn(&'a SourceFile) -> &'a [Item<T>]) -> Older<'a, T> {
+    let Some(file) = older else { return Older::default() };
+    let known = |item: &'a Item<T>| {
+        let text = item.piece.span.slice(&file.text);
+        (item.piece.fingerprint(&file.text), (text, item))
+    };
+    items(file).iter().map(known).collect()
+}
+
+/// The item of a piece, read before or decoded now.
+fn item_of<T>(
+    text: &str,
+    piece: &Piece,
+    known: &Older<'_, T>,
+    decode: impl FnOnce(Tree) -> Option<Decoded<T>>,
+) -> Option<Item<T>> {
+    let same = (!known.is_empty())
+        .then(|| known.get(&piece.fingerprint(text)))
+        .flatten();
+    // A fingerprint may deceive; the text does not, where it alone tells the tree.
+    if let Some((older, item)) = same
+        && piece.is_plain()
+        && item.piece.is_plain()
+        && *older == piece.span.slice(text)
+    {
+        return Some(Item {
+            piece: piece.clone(),
+            decoded: Arc::clone(&item.decoded),
+        });
+    }
+    Some(Item {
+        piece: piece.clone(),
+        decoded: Arc::new(decode(piece.tree(text))?),
+    })
 }
 
 /// Whether a top-level entry is one of a protection file.
@@ -92,6 +154,7 @@ fn tells_protection(entry: &TopEntry, text: &str) -> bool {
 
 struct Top<'a> {
     file: &'a mut SourceFile,
+    known: Known<'a>,
     seen: Vec<String>,
     last_key: Option<Span>,
 }
@@ -133,23 +196,19 @@ impl Top<'_> {
         if self.repeated(&list.key, list.key_span) {
             return;
         }
-        let read = |piece: &Piece| (piece.clone(), piece.tree(text));
         match list.key.as_str() {
             "members" => {
-                let members = list.items.par_iter().map(read);
-                self.file.members = members.map(|(piece, tree)| item(piece, member_item(tree))).collect();
+                let read = |piece: &Piece| item_of(text, piece, &self.known.members, |tree| Some(member_item(tree)));
+                self.file.members = list.items.par_iter().filter_map(read).collect();
+                self.file.steady = Some(list.key_span);
             }
             "groups" => {
-                let groups = list.items.iter().map(read);
-                self.file.groups = groups
-                    .filter_map(|(piece, tree)| Some(item(piece, named_item(tree, group)?)))
-                    .collect();
+                let read = |piece: &Piece| item_of(text, piece, &self.known.groups, |tree| named_item(tree, group));
+                self.file.groups = list.items.iter().filter_map(read).collect();
             }
             _ => {
-                let products = list.items.iter().map(read);
-                self.file.products = products
-                    .filter_map(|(piece, tree)| Some(item(piece, named_item(tree, product)?)))
-                    .collect();
+                let read = |piece: &Piece| item_of(text, piece, &self.known.products, |tree| named_item(tree, product));
+                self.file.products = list.items.iter().filter_map(read).collect();
             }
         }
     }
@@ -250,13 +309,6 @@ fn first_line(span: Span, text: &str) -> Span {
     Span {
         start: span.start,
         end: span.start + Span::new(0, line.len()).end,
-    }
-}
-
-fn item<T>(piece: Piece, decoded: Decoded<T>) -> Item<T> {
-    Item {
-        piece,
-        decoded: Arc::new(decoded),
     }
 }
 

@@ -32,7 +32,7 @@ pub struct Decoded<T> {
 }
 
 /// A decoded thing at its place in the file.
-#[derive(Debug, Clone)]
+#[derive(Debug)]
 pub struct Item<T> {
     /// The item's text in the file's.
     pub piece: Piece,
@@ -40,11 +40,26 @@ pub struct Item<T> {
     pub decoded: Arc<Decoded<T>>,
 }
 
+impl<T> Clone for Item<T> {
+    fn clone(&self) -> Self {
+        self.moved(self.base())
+    }
+}
+
 impl<T> Item<T> {
     /// Offset of the item's text in the file's.
     #[must_use]
     pub const fn base(&self) -> u32 {
         self.piece.span.start
+    }
+
+    /// The item moved to where it begins now.
+    #[must_use]
+    pub fn moved(&self, start: u32) -> Self {
+        Self {
+            piece: self.piece.moved(start),
+            decoded: Arc::clone(&self.decoded),
+        }
     }
 
     /// The thing.
@@ -67,7 +82,7 @@ impl<T> Item<T> {
 }
 
 /// A file as it was read.
-#[derive(Debug)]
+#[derive(Debug, Clone)]
 pub struct SourceFile {
     /// Its path.
     pub path: Arc<PathBuf>,
@@ -89,4 +104,6 @@ pub struct SourceFile {
     pub slips: Vec<Slip>,
     /// What is no YAML outside the items (spans of the file).
     pub errors: Vec<SyntaxError>,
+    /// Where the key of the members stands, if a change within them leaves the rest of the file as it was read.
+    pub steady: Option<Span>,
 }

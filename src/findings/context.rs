@@ -103,6 +103,7 @@ impl<'a> Context<'a> {
             .or_else(|| member.mark.span())
             .unwrap_or(member.extent.0);
         let mut finding = Finding::new(declaration, self.place(span), message);
+        finding.member = Some(self.at);
         finding.mark = member.mark.value().cloned();
         finding.key = Some(key.to_owned());
         if own.is_none() {

@@ -3,6 +3,7 @@
 use std::path::PathBuf;
 use std::sync::Arc;
 
+use crate::analysis::design::MemberAt;
 use crate::text::Span;
 
 /// How grave a finding is.
@@ -85,6 +86,8 @@ pub struct Finding {
     pub notes: Vec<Note>,
     /// The characters at fault.
     pub place: Place,
+    /// The member concerned.
+    pub member: Option<MemberAt>,
     /// The member, group, fire or product concerned, by name.
     pub mark: Option<String>,
     /// The key concerned.
@@ -103,6 +106,7 @@ impl Finding {
             message,
             notes: Vec::new(),
             place,
+            member: None,
             mark: None,
             key: None,
             fixes: Vec::new(),

@@ -30,7 +30,7 @@ pub fn member(design: &Design, at: MemberAt, outcome: &Outcome, on: Date, out: &
 }
 
 /// Every finding between members; outcomes in the order of the design's members.
-pub fn design(design: &Design, outcomes: &[Arc<Outcome>], out: &mut Vec<Finding>) {
+pub fn between(design: &Design, outcomes: &[Arc<Outcome>], out: &mut Vec<Finding>) {
     reading::design(design, out);
     design_intent::design(design, outcomes, out);
 }

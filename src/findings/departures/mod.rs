@@ -15,6 +15,7 @@ use crate::design::keys::nearest;
 use crate::design::model::member::Departure;
 use crate::findings::context;
 use crate::findings::finding::{Finding, Place, Severity};
+use crate::findings::reading;
 use crate::findings::registry;
 use crate::units::{DisplayUnits, Length, SectionFactor, Time};
 
@@ -44,6 +45,7 @@ pub fn apply(
         };
         let mut add = |declaration, message: String| {
             let mut finding = Finding::new(declaration, place.clone(), message);
+            finding.member = Some(at);
             finding.mark = Some(mark.clone());
             finding.key = Some("departures".to_owned());
             own.push(finding);
@@ -64,6 +66,16 @@ pub fn apply(
             );
             continue;
         };
+        if reading::SLIPS.iter().any(|slip| std::ptr::eq(*slip, declaration)) {
+            add(
+                &departure_unused::DECLARATION,
+                format!(
+                    "{mark} departs from {}, which is a slip of the file to be mended",
+                    from.value
+                ),
+            );
+            continue;
+        }
         let error = declaration.severity == Severity::Error;
         let lacks = |given: bool, key: &str| (!given).then(|| format!("`{key}`"));
         let mut missing: Vec<String> = lacks(departure.because.value().is_some(), "because")

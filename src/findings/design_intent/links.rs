@@ -93,6 +93,7 @@ impl<'a> Links<'a> {
             span: item.place(span),
         };
         let mut finding = Finding::new(declaration, place, message);
+        finding.member = Some(at);
         finding.mark = member.mark.value().cloned();
         finding.key = Some("supported by".to_owned());
         finding.notes.extend(self.inherited(link));

@@ -25,13 +25,14 @@ pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
         path: Arc::clone(&design.files[at.file].path),
         span: design.member(at).place(span),
     };
-    for at in &design.members {
+    for at in design.members.iter() {
         let mark = &design.member(*at).value().mark;
         if let (Some(name), Some(span)) = (mark.value(), mark.span())
             && let Some(first) = design.marks.get(name).filter(|first| *first != at)
         {
             let message = format!("the mark {name} stands twice in the design");
             let mut finding = Finding::new(&DECLARATION, place(*at, span), message);
+            finding.member = Some(*at);
             finding.mark = Some(name.clone());
             finding.key = Some("mark".to_owned());
             let other = design.member(*first).value().mark.span().unwrap_or_default();

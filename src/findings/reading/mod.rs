@@ -27,16 +27,50 @@ pub mod wrong_unit;
 use std::path::PathBuf;
 use std::sync::Arc;
 
-use crate::analysis::design::{Design, LinkKind};
+use crate::analysis::design::{Design, LinkKind, MemberAt};
 use crate::analysis::files::PathTrouble;
 use crate::analysis::names::{self, Sections};
 use crate::analysis::source::{Decoded, Item, SourceFile};
+use crate::design::model::member::MemberKeys;
 use crate::design::slip::{Edit, Slip, SlipKind};
 use crate::findings::context::Context;
 use crate::findings::finding::{Finding, Fix, FixEdit, Note, Place};
 use crate::findings::insert;
 use crate::findings::registry::Declaration;
 use crate::syntax::{ErrorKind, SyntaxError};
+
+/// What is declared here: slips of the files, which nobody can agree to leave.
+pub static SLIPS: &[&Declaration] = &[
+    &unreadable_yaml::DECLARATION,
+    &several_documents::DECLARATION,
+    &unknown_key::DECLARATION,
+    &missing_key::DECLARATION,
+    &wrong_kind::DECLARATION,
+    &wrong_unit::DECLARATION,
+    &out_of_bounds::DECLARATION,
+    &duplicate_mark::DECLARATION,
+    &unknown_section::DECLARATION,
+    &ambiguous_section::DECLARATION,
+    &unknown_product::DECLARATION,
+    &unknown_group::DECLARATION,
+    &unknown_steel::DECLARATION,
+    &unknown_fire::DECLARATION,
+    &unknown_mark::DECLARATION,
+    &unreadable_library::DECLARATION,
+    &library_outside_workspace::DECLARATION,
+    &library_cycle::DECLARATION,
+    &part_not_listed::DECLARATION,
+    &method_not_supported::DECLARATION,
+    &unused_product::DECLARATION,
+    &unused_group::DECLARATION,
+    &not_covered::DECLARATION,
+];
+
+/// Whether a finding is a slip of a file.
+#[must_use]
+pub fn is_slip(finding: &Finding) -> bool {
+    SLIPS.iter().any(|slip| std::ptr::eq(*slip, finding.declaration))
+}
 
 /// The declaration of a slip's finding.
 const fn declared(kind: SlipKind) -> &'static Declaration {
@@ -59,13 +93,13 @@ const fn declared(kind: SlipKind) -> &'static Declaration {
     }
 }
 
-fn slip_finding(file: &SourceFile, slip: Slip, mark: Option<&str>) -> Finding {
+fn slip_finding(file: &SourceFile, slip: Slip, owner: Owner<'_>) -> Finding {
     let place = |span| Place {
         path: Arc::clone(&file.path),
         span,
     };
     let mut finding = Finding::new(declared(slip.kind), place(slip.span), slip.message);
-    finding.mark = mark.map(str::to_owned);
+    owner.own(&mut finding);
     finding.key = slip.key.map(std::borrow::Cow::into_owned);
     finding.notes = slip
         .remarks
@@ -98,7 +132,7 @@ fn slip_finding(file: &SourceFile, slip: Slip, mark: Option<&str>) -> Finding {
     finding
 }
 
-fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -> Finding {
+fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, owner: Owner<'_>) -> Finding {
     let declaration = match error.kind {
         ErrorKind::SeveralDocuments => &several_documents::DECLARATION,
         ErrorKind::Limit => &out_of_bounds::DECLARATION,
@@ -109,7 +143,7 @@ fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -
         span,
     };
     let mut finding = Finding::new(declaration, place(error.span), error.message);
-    finding.mark = mark.map(str::to_owned);
+    owner.own(&mut finding);
     if let Some(repair) = error.repair {
         let edits = repair.edits.into_iter().map(|edit| FixEdit {
             place: place(edit.span),
@@ -124,71 +158,89 @@ fn syntax_finding(path: &Arc<PathBuf>, error: SyntaxError, mark: Option<&str>) -
     finding
 }
 
-fn item_findings<T>(file: &SourceFile, item: &Item<T>, mark: Option<&str>, out: &mut Vec<Finding>) {
+/// The member that a slip is in, if it is in one.
+#[derive(Clone, Copy, Default)]
+struct Owner<'a>(Option<(MemberAt, Option<&'a str>)>);
+
+impl Owner<'_> {
+    fn own(self, finding: &mut Finding) {
+        if let Some((at, mark)) = self.0 {
+            finding.member = Some(at);
+            finding.mark = mark.map(str::to_owned);
+        }
+    }
+}
+
+fn item_findings<T>(file: &SourceFile, item: &Item<T>, owner: Owner<'_>, out: &mut Vec<Finding>) {
     let Decoded { slips, errors, .. } = &*item.decoded;
     out.extend(
         errors
             .iter()
-            .map(|error| syntax_finding(&file.path, error.clone().shifted(item.base()), mark)),
+            .map(|error| syntax_finding(&file.path, error.clone().shifted(item.base()), owner)),
     );
     out.extend(
         slips
             .iter()
-            .map(|slip| slip_finding(file, slip.clone().shifted(item.base()), mark)),
+            .map(|slip| slip_finding(file, slip.clone().shifted(item.base()), owner)),
     );
 }
 
-/// Every finding of reading in a design.
-pub fn reading(design: &Design, out: &mut Vec<Finding>) {
-    let mut sections = Sections::of(design.basis());
+/// What is wrong with the names of an item.
+fn name_findings(
+    design: &Design,
+    (file, keys, base): (&SourceFile, &MemberKeys, u32),
+    sections: &mut Sections,
+    owner: Owner<'_>,
+    out: &mut Vec<Finding>,
+) {
+    let mut slips = Vec::new();
+    names::check(keys, design, sections, &mut slips);
+    out.extend(
+        slips
+            .into_iter()
+            .map(|slip| slip_finding(file, slip.shifted(base), owner)),
+    );
+}
+
+/// The slips of one member.
+pub fn item(design: &Design, at: MemberAt, sections: &mut Sections, out: &mut Vec<Finding>) {
+    let (file, item) = (&design.files[at.file], design.member(at));
+    let owner = Owner(Some((at, item.value().mark.value().map(String::as_str))));
+    item_findings(file, item, owner, out);
+    name_findings(design, (file, &item.value().keys, item.base()), sections, owner, out);
+}
+
+/// The slips outside the members, and what is wrong between files.
+pub fn outside(design: &Design, sections: &mut Sections, out: &mut Vec<Finding>) {
+    let none = Owner::default();
     for (index, file) in design.files.iter().enumerate() {
         let path = &file.path;
         out.extend(
             file.errors
                 .iter()
-                .map(|error| syntax_finding(path, error.clone(), None)),
+                .map(|error| syntax_finding(path, error.clone(), none)),
         );
-        out.extend(file.slips.iter().map(|slip| slip_finding(file, slip.clone(), None)));
+        out.extend(file.slips.iter().map(|slip| slip_finding(file, slip.clone(), none)));
         if file.head.part_of.value().is_some() && index > 0 {
             for key in &file.head.head_only {
                 let message = format!(
                     "`{}` belongs to the head file; a part carries members and groups",
                     key.value
                 );
-                out.push(Finding::new(
-                    &unknown_key::DECLARATION,
-                    Place {
-                        path: Arc::clone(path),
-                        span: key.span,
-                    },
-                    message,
-                ));
+                let place = Place {
+                    path: Arc::clone(path),
+                    span: key.span,
+                };
+                out.push(Finding::new(&unknown_key::DECLARATION, place, message));
             }
         }
-        let mut slips = Vec::new();
-        names::check(&file.head.defaults, design, &mut sections, &mut slips);
-        out.extend(slips.drain(..).map(|slip| slip_finding(file, slip, None)));
+        name_findings(design, (file, &file.head.defaults, 0), sections, none, out);
         for item in &file.groups {
-            item_findings(file, item, None, out);
-            names::check(&item.value().keys, design, &mut sections, &mut slips);
-            out.extend(
-                slips
-                    .drain(..)
-                    .map(|slip| slip_finding(file, slip.shifted(item.base()), None)),
-            );
+            item_findings(file, item, none, out);
+            name_findings(design, (file, &item.value().keys, item.base()), sections, none, out);
         }
         for item in &file.products {
-            item_findings(file, item, None, out);
-        }
-        for item in &file.members {
-            let mark = item.value().mark.value().map(String::as_str);
-            item_findings(file, item, mark, out);
-            names::check(&item.value().keys, design, &mut sections, &mut slips);
-            out.extend(
-                slips
-                    .drain(..)
-                    .map(|slip| slip_finding(file, slip.shifted(item.base()), mark)),
-            );
+            item_findings(file, item, none, out);
         }
     }
     links(design, out);

@@ -28,11 +28,11 @@ const SOUGHT: usize = 20;
 /// Marks under `supported by` and `steadies` that no member carries: of members, and once of groups and defaults.
 pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
     let mut search = Search { design, sought: 0, out };
-    for at in &design.members {
+    for at in design.members.iter() {
         let item = design.member(*at);
         let mark = item.value().mark.value().map(String::as_str);
         let who = mark.unwrap_or("this member");
-        search.block(&item.value().keys, who, mark, at.file, item.base());
+        search.block(&item.value().keys, who, Some((*at, mark)), at.file, item.base());
     }
     let mut groups: Vec<(usize, usize)> = design.groups.values().copied().collect();
     groups.sort_unstable();
@@ -52,8 +52,16 @@ struct Search<'a> {
 
 impl Search<'_> {
     /// The strange marks of one block of keys, whose text begins at `base` in its file.
-    fn block(&mut self, keys: &MemberKeys, who: &str, mark: Option<&str>, file: usize, base: u32) {
+    fn block(
+        &mut self,
+        keys: &MemberKeys,
+        who: &str,
+        member: Option<(MemberAt, Option<&str>)>,
+        file: usize,
+        base: u32,
+    ) {
         let file = &self.design.files[file];
+        let mark = member.and_then(|(_, mark)| mark);
         let marks = &self.design.marks;
         let lists = [
             ("supported by", "is said to be supported by", &keys.supported_by),
@@ -78,6 +86,7 @@ impl Search<'_> {
                 };
                 let near = near.filter(|_| !insert::through_alias(&file.text, place.span));
                 let mut finding = Finding::new(&DECLARATION, place.clone(), message);
+                finding.member = member.map(|(at, _)| at);
                 finding.mark = mark.map(str::to_owned);
                 finding.key = Some(key.to_owned());
                 finding.fixes.extend(near.map(|near| Fix {

@@ -28,7 +28,7 @@ members:
 /// Groups that no member names.
 pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
     let mut used: FxHashSet<&str> = FxHashSet::default();
-    for at in &design.members {
+    for at in design.members.iter() {
         let keys = design.inherited(design.member(*at).value());
         used.extend(keys.get(|keys| &keys.group).value().map(String::as_str));
     }

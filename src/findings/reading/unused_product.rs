@@ -33,7 +33,7 @@ products:
 /// Products of the design's libraries that no member uses.
 pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
     let mut used: FxHashSet<&str> = FxHashSet::default();
-    for at in &design.members {
+    for at in design.members.iter() {
         let keys = design.inherited(design.member(*at).value());
         let stated = keys.get(|keys| &keys.protection).value();
         used.extend(

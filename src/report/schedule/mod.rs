@@ -6,11 +6,13 @@ pub mod quantities;
 pub mod row;
 pub mod totals;
 
+use rustc_hash::FxHashMap;
 use serde::Serialize;
 
 use self::basis::Basis;
 use self::row::Row;
 use self::totals::{ProductTotal, Totals};
+use crate::analysis::design::MemberAt;
 use crate::analysis::source::FileKind;
 use crate::check::Checked;
 
@@ -61,22 +63,21 @@ pub fn schedule(checked: &[Checked]) -> Schedule {
 
 fn rows(checked: &Checked, out: &mut Vec<Row>) {
     let design = &checked.design;
-    let mut by_mark: rustc_hash::FxHashMap<&str, (Vec<String>, Vec<String>)> = rustc_hash::FxHashMap::default();
-    for finding in &checked.findings {
-        if let Some(mark) = &finding.mark {
-            by_mark.entry(mark).or_default().0.push(finding.name().to_owned());
-        }
-    }
-    for finding in &checked.agreed {
-        if let Some(mark) = &finding.mark {
-            by_mark.entry(mark).or_default().1.push(finding.name().to_owned());
+    let mut by_member: FxHashMap<MemberAt, (Vec<String>, Vec<String>)> = FxHashMap::default();
+    for (finding, agreed) in (checked.findings.iter().map(|finding| (finding, false)))
+        .chain(checked.agreed.iter().map(|finding| (finding, true)))
+    {
+        if let Some(member) = finding.member {
+            let (open, departures) = by_member.entry(member).or_default();
+            let names = if agreed { departures } else { open };
+            names.push(finding.name().to_owned());
         }
     }
     for (at, outcome) in design.members.iter().zip(&checked.outcomes) {
         let mut row = row::row(design, design.member(*at).value(), outcome);
-        if let Some((findings, departures)) = row.mark.as_deref().and_then(|mark| by_mark.get(mark)) {
-            row.findings.clone_from(findings);
-            row.departures.clone_from(departures);
+        if let Some((findings, departures)) = by_member.remove(at) {
+            row.findings = findings;
+            row.departures = departures;
         }
         out.push(row);
     }

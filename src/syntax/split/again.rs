@@ -5,25 +5,21 @@
 
 use super::frame::line_end;
 use super::items::{Step, Walk};
+use crate::syntax::MAX_BYTES;
 use crate::syntax::item::Form;
 use crate::syntax::line::{Line, Lines, is_entry};
 use crate::syntax::outline::{Piece, Resplit};
-use crate::syntax::MAX_BYTES;
 use crate::text::{Change, Span};
 
-pub(in crate::syntax) fn again(
-    old: &str,
-    new: &str,
-    change: Change,
-    key: Span,
-    items: &[&Piece],
-) -> Option<Resplit> {
+pub(in crate::syntax) fn again(old: &str, new: &str, change: Change, key: Span, items: &[&Piece]) -> Option<Resplit> {
     let start = |index: usize| items[index].span.start as usize;
     let end = |index: usize| items[index].span.end as usize;
     let first = first_line(old, items.first()?)?;
     let (from, to) = (change.at, change.at + change.removed);
     // Of the item before the change every character stands; of the first item its first line must.
-    let touched = items.partition_point(|item| (item.span.start as usize) < from).checked_sub(1)?;
+    let touched = items
+        .partition_point(|item| (item.span.start as usize) < from)
+        .checked_sub(1)?;
     let begin = touched.saturating_sub(1);
     if touched == 0 && from < line_end(old, first.to) || !is_entry(first.content(old)) {
         return None;

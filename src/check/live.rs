@@ -1,0 +1,405 @@
+//! A checked design that is checked again after a change: what the change does not reach is kept.
+//!
+//! A member's outcome and findings are kept while its text and its surroundings are what they were. What members do to
+//! each other is found in one pass over the design, and kept while no fact that it rests on has changed.
+
+use std::borrow::Cow;
+use std::sync::Arc;
+
+use jiff::civil::Date;
+use rayon::prelude::*;
+use rustc_hash::FxHashSet;
+
+use super::Checked;
+use super::around::{self, Around};
+use super::own::{self, Own};
+use crate::analysis::design::{Design, FileIndex, MemberAt};
+use crate::analysis::inputs::{Inputs, Names};
+use crate::analysis::memo::Memo;
+use crate::analysis::names::{Sections, lookup_options};
+use crate::analysis::outcome::Outcome;
+use crate::findings::finding::{Finding, Severity};
+use crate::findings::{self, departures, reading};
+use crate::text::Span;
+
+/// Asks whether the work is still wanted.
+pub type Cancelled<'a> = &'a (dyn Fn() -> bool + Sync);
+
+/// A checked design.
+#[derive(Debug)]
+pub struct Live {
+    /// The design.
+    pub design: Arc<Design>,
+    /// Outcomes in the order of the design's members.
+    pub outcomes: Vec<Arc<Outcome>>,
+    own: Vec<Arc<Own>>,
+    /// Findings outside the members.
+    outside: Vec<Finding>,
+    /// Findings between members, by member.
+    between: Vec<Finding>,
+    /// The marks that anything is said to be supported by.
+    supports: FxHashSet<String>,
+    on: Date,
+}
+
+/// A finding with what has moved it since it was made.
+#[derive(Debug)]
+pub struct Shown<'a> {
+    finding: Cow<'a, Finding>,
+    extent: Span,
+    by: i64,
+}
+
+/// Members so few that threads would not pay.
+const FEW: usize = 64;
+
+impl Live {
+    /// Checks a design, with what an older version of it left. `None` where the work was cancelled.
+    #[must_use]
+    pub fn check(
+        design: Arc<Design>,
+        older: Option<&Self>,
+        on: Date,
+        memo: &Memo,
+        cancelled: Cancelled<'_>,
+    ) -> Option<Self> {
+        let older = older.filter(|older| older.on == on);
+        let around = older.map_or(Around::Changed, |older| around::compare(&older.design, &design));
+        let kept = older
+            .filter(|_| around != Around::Changed)
+            .map(|older| Kept::of(older, &design));
+        let names = Names {
+            design: &design,
+            options: lookup_options(design.basis()),
+        };
+        let sections = || Sections::of(design.basis());
+        let one = |sections: &mut Sections, order: usize| {
+            let at = design.members[order];
+            let known = kept.as_ref().and_then(|kept| kept.old(at).map(|old| (kept.older, old)));
+            if let Some((older, old)) = known {
+                let (outcome, own) = (&older.outcomes[old], &older.own[old]);
+                if around == Around::Same || own.local {
+                    return Some((Arc::clone(outcome), Arc::clone(own)));
+                }
+                let own = Own::of(&design, at, outcome, on, sections);
+                return Some((Arc::clone(outcome), Arc::new(own)));
+            }
+            if cancelled() {
+                return None;
+            }
+            let outcome = memo.outcome(Inputs::of(design.member(at).value(), &names));
+            let own = Own::of(&design, at, &outcome, on, sections);
+            Some((outcome, Arc::new(own)))
+        };
+        let count = design.members.len();
+        let fresh = kept.as_ref().map_or(count, |kept| kept.fresh);
+        let members: Option<Vec<_>> = if fresh <= FEW && around != Around::Alike {
+            let mut sections = sections();
+            (0..count).map(|order| one(&mut sections, order)).collect()
+        } else {
+            (0..count).into_par_iter().map_init(sections, one).collect()
+        };
+        let (outcomes, own): (Vec<_>, Vec<_>) = members?.into_iter().unzip();
+        let mut live = Self {
+            outside: Vec::new(),
+            between: Vec::new(),
+            supports: FxHashSet::default(),
+            outcomes,
+            own,
+            on,
+            design: Arc::clone(&design),
+        };
+        reading::outside(&design, &mut sections(), &mut live.outside);
+        let reused = kept
+            .filter(|kept| around == Around::Same && kept.ties_hold(&live))
+            .map(|kept| kept.between(&design));
+        if let Some((between, supports)) = reused {
+            live.between = between;
+            live.supports = supports;
+        } else {
+            findings::between(&design, &live.outcomes, &mut live.between);
+            live.between.sort_by_key(|finding| finding.member);
+            live.supports = supports(&design);
+        }
+        Some(live)
+    }
+
+    /// Everything, as command line and reports want it.
+    #[must_use]
+    pub fn into_checked(self) -> Checked {
+        let settled: Vec<(Vec<Finding>, Vec<Finding>)> = (0..self.outcomes.len())
+            .into_par_iter()
+            .map(|order| self.settled(order))
+            .collect();
+        let between = self.between.iter().filter(|finding| finding.member.is_none());
+        let mut findings: Vec<Finding> = self.outside.iter().chain(between).cloned().collect();
+        let mut agreed = Vec::new();
+        for (mut open, mut accepted) in settled {
+            findings.append(&mut open);
+            agreed.append(&mut accepted);
+        }
+        let order = |finding: &Finding| (finding.place.path.to_path_buf(), finding.place.span, finding.severity);
+        findings.sort_by_cached_key(order);
+        agreed.sort_by_cached_key(order);
+        Checked {
+            design: self.design,
+            outcomes: self.outcomes,
+            findings,
+            agreed,
+        }
+    }
+
+    /// The open and the agreed findings of a member, by its place in the order of the design.
+    #[must_use]
+    pub fn settled(&self, order: usize) -> (Vec<Finding>, Vec<Finding>) {
+        let at = self.design.members[order];
+        let own = &self.own[order];
+        let (extent, by) = self.moved(at, own);
+        let here = |finding: &Finding| {
+            let mut finding = finding.clone();
+            finding.member = Some(at);
+            if by != 0 {
+                own::moved(&mut finding, extent, by);
+            }
+            finding
+        };
+        let mut open: Vec<Finding> = own.slips.iter().map(here).collect();
+        let between = self.between_of(at);
+        let (mut rest, agreed) = match &own.settled {
+            None => (
+                own.found.iter().map(here).chain(between.iter().cloned()).collect(),
+                Vec::new(),
+            ),
+            Some((open, agreed)) if between.is_empty() => {
+                (open.iter().map(here).collect(), agreed.iter().map(here).collect())
+            }
+            Some(_) => {
+                let (slips, ties): (Vec<Finding>, Vec<Finding>) = between.iter().cloned().partition(reading::is_slip);
+                let found = own.found.iter().map(here).chain(ties).collect();
+                let (mut rest, agreed) = departures::apply(&self.design, at, &self.outcomes[order], self.on, found);
+                rest.extend(slips);
+                (rest, agreed)
+            }
+        };
+        open.append(&mut rest);
+        (open, agreed)
+    }
+
+    /// The open findings of a file, in no order, without copying what need not be.
+    pub fn shown(&self, file: FileIndex) -> Vec<Shown<'_>> {
+        let path = &self.design.files[file].path;
+        let still = |finding| Shown {
+            finding: Cow::Borrowed(finding),
+            extent: Span::default(),
+            by: 0,
+        };
+        let between = self.between.iter().filter(|finding| finding.member.is_none());
+        let outside = self
+            .outside
+            .iter()
+            .chain(between)
+            .filter(|finding| finding.place.path == *path);
+        let mut shown: Vec<Shown<'_>> = outside.map(still).collect();
+        let first = self.design.members.partition_point(|at| at.file < file);
+        let last = self.design.members.partition_point(|at| at.file <= file);
+        let some = !self.between.is_empty();
+        for order in first..last {
+            let own = &self.own[order];
+            if own.settled.is_some() {
+                let (open, _) = self.settled(order);
+                shown.extend(open.into_iter().map(|finding| Shown {
+                    finding: Cow::Owned(finding),
+                    extent: Span::default(),
+                    by: 0,
+                }));
+                continue;
+            }
+            let at = self.design.members[order];
+            if !own.slips.is_empty() || !own.found.is_empty() {
+                let (extent, by) = self.moved(at, own);
+                shown.extend(own.slips.iter().chain(&own.found).map(|finding| Shown {
+                    finding: Cow::Borrowed(finding),
+                    extent,
+                    by,
+                }));
+            }
+            if some {
+                shown.extend(self.between_of(at).iter().map(still));
+            }
+        }
+        shown
+    }
+
+    /// Every open finding of a file, by position.
+    #[must_use]
+    pub fn findings(&self, file: FileIndex) -> Vec<Finding> {
+        let mut findings: Vec<Finding> = self.shown(file).into_iter().map(Shown::into_finding).collect();
+        findings.sort_by_key(|finding| (finding.place.span, finding.severity));
+        findings
+    }
+
+    /// Where the findings of a member were made, and how far it has moved since.
+    fn moved(&self, at: MemberAt, own: &Own) -> (Span, i64) {
+        let span = self.design.member(at).piece.span;
+        let extent = Span {
+            start: own.base,
+            end: own.base.saturating_add(span.len()),
+        };
+        (extent, i64::from(span.start) - i64::from(own.base))
+    }
+
+    fn between_of(&self, at: MemberAt) -> &[Finding] {
+        let first = self.between.partition_point(|finding| finding.member < Some(at));
+        let count = self.between[first..].partition_point(|finding| finding.member == Some(at));
+        &self.between[first..first + count]
+    }
+}
+
+impl Shown<'_> {
+    /// Its characters.
+    #[must_use]
+    pub fn span(&self) -> Span {
+        let span = self.finding.place.span;
+        if self.by != 0 && own::within(self.extent, span) {
+            own::shifted(span, self.by)
+        } else {
+            span
+        }
+    }
+
+    /// How grave it is.
+    #[must_use]
+    pub fn severity(&self) -> Severity {
+        self.finding.severity
+    }
+
+    /// The finding.
+    #[must_use]
+    pub fn into_finding(self) -> Finding {
+        let mut finding = self.finding.into_owned();
+        if self.by != 0 {
+            own::moved(&mut finding, self.extent, self.by);
+        }
+        finding
+    }
+}
+
+/// What an older version of a design leaves: the members at the beginning and at the end of each file that were not read
+/// anew.
+struct Kept<'a> {
+    older: &'a Live,
+    /// Of each file: members that stand as they stood, those behind a change, and how many there were and are.
+    files: Vec<Strip>,
+    fresh: usize,
+}
+
+struct Strip {
+    before: usize,
+    behind: usize,
+    old: usize,
+    new: usize,
+    /// The place of the file's first member in the older order.
+    first: usize,
+}
+
+impl<'a> Kept<'a> {
+    fn of(older: &'a Live, design: &Design) -> Self {
+        let mut first = 0;
+        let strips = older.design.files.iter().zip(&design.files).map(|(old, new)| {
+            let (a, b) = (&old.members, &new.members);
+            let same = |n: usize, m: usize| Arc::ptr_eq(&a[n].decoded, &b[m].decoded);
+            let shorter = a.len().min(b.len());
+            let (before, behind) = if Arc::ptr_eq(old, new) {
+                (shorter, 0)
+            } else {
+                let before = (0..shorter).take_while(|n| same(*n, *n)).count();
+                let left = shorter - before;
+                let behind = (1..=left).take_while(|n| same(a.len() - n, b.len() - n)).count();
+                (before, behind)
+            };
+            let strip = Strip {
+                before,
+                behind,
+                old: a.len(),
+                new: b.len(),
+                first,
+            };
+            first += a.len();
+            strip
+        });
+        let files: Vec<Strip> = strips.collect();
+        let fresh = files.iter().map(|strip| strip.new - strip.before - strip.behind).sum();
+        Self { older, files, fresh }
+    }
+
+    /// The place in the older order of a member that was not read anew.
+    fn old(&self, at: MemberAt) -> Option<usize> {
+        let strip = &self.files[at.file];
+        if at.index < strip.before {
+            Some(strip.first + at.index)
+        } else if at.index >= strip.new - strip.behind {
+            Some(strip.first + at.index + strip.old - strip.new)
+        } else {
+            None
+        }
+    }
+
+    /// Whether the findings between members are those of the older version.
+    fn ties_hold(&self, live: &Live) -> bool {
+        let (old, new) = (&self.older.design, &live.design);
+        Arc::ptr_eq(&old.marks, &new.marks)
+            && self.files.iter().enumerate().all(|(file, strip)| {
+                (strip.before..strip.new - strip.behind).all(|index| {
+                    let order = strip.first + index;
+                    let item = &old.files[file].members[index];
+                    let (a, b) = (item.value(), new.files[file].members[index].value());
+                    let mark = a.mark.value();
+                    let rests = mark.is_some_and(|mark| self.older.supports.contains(mark));
+                    let path = &old.files[file].path;
+                    a.broken == b.broken
+                        && a.keys.group == b.keys.group
+                        && a.keys.supported_by == b.keys.supported_by
+                        && a.keys.steadies == b.keys.steadies
+                        && a.keys.protection == b.keys.protection
+                        && a.keys.period == b.keys.period
+                        && a.keys.fire == b.keys.fire
+                        && (!rests || self.older.outcomes[order] == live.outcomes[order])
+                        && !self
+                            .older
+                            .between
+                            .iter()
+                            .any(|tie| own::touches(tie, path, item.piece.span))
+                })
+            })
+    }
+
+    /// The findings between members of the older version, at their places now.
+    fn between(&self, design: &Design) -> (Vec<Finding>, FxHashSet<String>) {
+        let mut between = self.older.between.clone();
+        for (file, strip) in self.files.iter().enumerate() {
+            let (old, new) = (&self.older.design.files[file], &design.files[file]);
+            let by = new.text.len() as i64 - old.text.len() as i64;
+            let Some(first) = old.members.get(strip.before).filter(|_| by != 0) else {
+                continue;
+            };
+            let extent = Span::new(first.base() as usize, usize::MAX);
+            for finding in &mut between {
+                own::moved_in(finding, &old.path, extent, by);
+            }
+        }
+        (between, self.older.supports.clone())
+    }
+}
+
+/// The marks that anything is said to be supported by.
+fn supports(design: &Design) -> FxHashSet<String> {
+    let members = design.members.iter().map(|at| &design.member(*at).value().keys);
+    let groups = design
+        .files
+        .iter()
+        .flat_map(|file| &file.groups)
+        .map(|item| &item.value().keys);
+    let keys = members.chain(groups).chain([&design.head().defaults]);
+    let names = keys.filter_map(|keys| keys.supported_by.value()).flatten();
+    names.map(|name| name.value.clone()).collect()
+}
