@@ -1,9 +1,13 @@
 //! Two levels of memo: members by their inputs, and beneath them families of marches.
+//!
+//! Each keeps two generations. What is asked for lives on in the young one; when that has grown past what the design at
+//! hand can need, it becomes the old one, and what nobody asked for since is dropped.
 
+use std::hash::{BuildHasher, Hash};
 use std::sync::atomic::{AtomicU64, Ordering};
-use std::sync::{Arc, RwLock};
+use std::sync::{Arc, Mutex, PoisonError};
 
-use rustc_hash::FxHashMap;
+use rustc_hash::{FxBuildHasher, FxHashMap};
 
 use crate::analysis::evaluate::evaluate;
 use crate::analysis::inputs::Inputs;
@@ -16,31 +20,29 @@ use crate::units::Length;
 
 type FamilyKey = (Fire, u64, u64, u64, u64, Insulation);
 
-/// What was worked out before. Grows with what is asked; one serves a whole check.
+/// What was worked out before.
 #[derive(Debug, Default)]
 pub struct Memo {
-    members: RwLock<FxHashMap<Inputs, Arc<Outcome>>>,
-    families: RwLock<FxHashMap<FamilyKey, Arc<Family>>>,
+    members: Shelves<Inputs, Outcome>,
+    families: Shelves<FamilyKey, Family>,
     evaluated: AtomicU64,
 }
+
+/// How many results are kept beyond what a design needs: enough to undo far back.
+const SPARE: usize = 4096;
+/// The most families of marches in a generation; one has some tens of kilobytes.
+const FAMILIES: usize = 512;
 
 impl Memo {
     /// The outcome of a member's inputs.
     #[must_use]
     pub fn outcome(&self, inputs: Inputs) -> Arc<Outcome> {
-        if let Some(known) = self
-            .members
-            .read()
-            .ok()
-            .and_then(|members| members.get(&inputs).cloned())
-        {
+        if let Some(known) = self.members.get(&inputs) {
             return known;
         }
         self.evaluated.fetch_add(1, Ordering::Relaxed);
         let outcome = Arc::new(evaluate(&inputs, self));
-        if let Ok(mut members) = self.members.write() {
-            members.insert(inputs, Arc::clone(&outcome));
-        }
+        self.members.put(inputs, &outcome);
         outcome
     }
 
@@ -48,6 +50,12 @@ impl Memo {
     #[must_use]
     pub fn evaluated(&self) -> u64 {
         self.evaluated.load(Ordering::Relaxed)
+    }
+
+    /// Lets go of what has not been asked for lately, by the number of members of the designs at hand.
+    pub fn settle(&self, members: usize) {
+        self.members.settle(2 * members + SPARE);
+        self.families.settle(FAMILIES);
     }
 }
 
@@ -61,12 +69,7 @@ impl Families for Memo {
             range.1.bits(),
             insulation.clone(),
         );
-        if let Some(known) = self
-            .families
-            .read()
-            .ok()
-            .and_then(|families| families.get(&key).cloned())
-        {
+        if let Some(known) = self.families.get(&key) {
             return known;
         }
         let family = Arc::new(Family::new(
@@ -76,9 +79,83 @@ impl Families for Memo {
             demand.period,
             range,
         ));
-        if let Ok(mut families) = self.families.write() {
-            families.insert(key, Arc::clone(&family));
-        }
+        self.families.put(key, &family);
         family
+    }
+}
+
+/// Shelves that threads seldom have to wait for each other at.
+#[derive(Debug)]
+struct Shelves<K, V>([Mutex<Generations<K, V>>; SHELVES]);
+
+const SHELVES: usize = 16;
+
+#[derive(Debug)]
+struct Generations<K, V> {
+    young: FxHashMap<K, Arc<V>>,
+    old: FxHashMap<K, Arc<V>>,
+}
+
+impl<K, V> Default for Shelves<K, V> {
+    fn default() -> Self {
+        Self(std::array::from_fn(|_| {
+            Mutex::new(Generations {
+                young: FxHashMap::default(),
+                old: FxHashMap::default(),
+            })
+        }))
+    }
+}
+
+impl<K: Hash + Eq, V> Shelves<K, V> {
+    fn shelf(&self, key: &K) -> std::sync::MutexGuard<'_, Generations<K, V>> {
+        let hash = FxBuildHasher.hash_one(key);
+        let shelf = &self.0[(hash >> 32) as usize % SHELVES];
+        // A panic elsewhere leaves a map whole: each insertion is one step.
+        shelf.lock().unwrap_or_else(PoisonError::into_inner)
+    }
+
+    fn get(&self, key: &K) -> Option<Arc<V>> {
+        let mut shelf = self.shelf(key);
+        if let Some(known) = shelf.young.get(key) {
+            return Some(Arc::clone(known));
+        }
+        let (key, known) = shelf.old.remove_entry(key)?;
+        shelf.young.insert(key, Arc::clone(&known));
+        Some(known)
+    }
+
+    fn put(&self, key: K, value: &Arc<V>) {
+        self.shelf(&key).young.insert(key, Arc::clone(value));
+    }
+
+    fn settle(&self, most: usize) {
+        for shelf in &self.0 {
+            let mut shelf = shelf.lock().unwrap_or_else(PoisonError::into_inner);
+            if shelf.young.len() > most.div_ceil(SHELVES) {
+                shelf.old = std::mem::take(&mut shelf.young);
+            }
+        }
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn what_is_asked_for_stays_and_the_rest_goes() {
+        let shelves = Shelves::<u32, u32>::default();
+        for key in 0..2000 {
+            shelves.put(key, &Arc::new(key));
+        }
+        shelves.settle(1000);
+        assert_eq!(shelves.get(&7).as_deref(), Some(&7));
+        for key in 2000..4000 {
+            shelves.put(key, &Arc::new(key));
+        }
+        shelves.settle(1000);
+        assert_eq!(shelves.get(&7).as_deref(), Some(&7));
+        assert_eq!(shelves.get(&8), None);
     }
 }

@@ -46,6 +46,8 @@ pub struct Live {
 #[derive(Debug)]
 pub struct Shown<'a> {
     finding: Cow<'a, Finding>,
+    /// The member that it is of, where that may have another number now.
+    member: Option<MemberAt>,
     extent: Span,
     by: i64,
 }
@@ -124,6 +126,12 @@ impl Live {
         Some(live)
     }
 
+    /// Whether it is the check of this very design on this date.
+    #[must_use]
+    pub fn is_of(&self, design: &Arc<Design>, on: Date) -> bool {
+        Arc::ptr_eq(&self.design, design) && self.on == on
+    }
+
     /// Everything, as command line and reports want it.
     #[must_use]
     pub fn into_checked(self) -> Checked {
@@ -190,6 +198,7 @@ impl Live {
         let path = &self.design.files[file].path;
         let still = |finding| Shown {
             finding: Cow::Borrowed(finding),
+            member: None,
             extent: Span::default(),
             by: 0,
         };
@@ -209,6 +218,7 @@ impl Live {
                 let (open, _) = self.settled(order);
                 shown.extend(open.into_iter().map(|finding| Shown {
                     finding: Cow::Owned(finding),
+                    member: None,
                     extent: Span::default(),
                     by: 0,
                 }));
@@ -219,6 +229,7 @@ impl Live {
                 let (extent, by) = self.moved(at, own);
                 shown.extend(own.slips.iter().chain(&own.found).map(|finding| Shown {
                     finding: Cow::Borrowed(finding),
+                    member: Some(at),
                     extent,
                     by,
                 }));
@@ -277,6 +288,7 @@ impl Shown<'_> {
     #[must_use]
     pub fn into_finding(self) -> Finding {
         let mut finding = self.finding.into_owned();
+        finding.member = self.member.or(finding.member);
         if self.by != 0 {
             own::moved(&mut finding, self.extent, self.by);
         }

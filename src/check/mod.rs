@@ -3,6 +3,7 @@
 mod around;
 pub mod live;
 mod own;
+pub mod session;
 
 use std::path::PathBuf;
 use std::sync::Arc;

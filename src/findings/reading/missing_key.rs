@@ -28,7 +28,8 @@ pub(super) fn check(cx: &mut Context<'_>) {
                 let message = format!("{} has no `{key}`, nor has its group or `defaults`", cx.mark);
                 cx.add(&DECLARATION, key, None, message);
             }
-            Gap::Missing(key) => {
+            // Of a key that the member itself lacks it is said once.
+            Gap::Missing(key) if !outcome.gaps.contains(&Gap::Unread(key)) => {
                 let message = format!(
                     "{} has no `{key}` in its `loading`, which its resistance in fire depends on",
                     cx.mark
