@@ -1,7 +1,13 @@
 //! What an editor shows beside the findings: plain functions on byte offsets, free of any protocol.
 
 pub mod definition;
+pub mod folding;
+mod layout;
+pub mod lens;
+pub mod links;
 pub mod names;
 pub mod references;
 pub mod rename;
+pub mod selection;
+pub mod symbols;
 pub mod view;

@@ -2,3 +2,4 @@
 
 mod fixture;
 mod names;
+mod outline;

@@ -2,6 +2,8 @@
 
 use crate::analysis::design::Design;
 use crate::analysis::outcome::Outcome;
+use crate::design::given::Given;
+use crate::design::inherit::Inherited;
 use crate::design::model::library::{NamedProduct, Rates};
 use crate::design::model::member::Member;
 use crate::protection::product::{Kind, Method};
@@ -48,12 +50,14 @@ pub struct Rated {
 
 impl Quantities {
     /// Steel and product together; unknown if either is.
-    pub(super) fn cost(&self) -> Option<f64> {
+    #[must_use]
+    pub fn cost(&self) -> Option<f64> {
         together(self.protected, self.steel_cost, self.product_cost)
     }
 
     /// Steel and product together; unknown if either is.
-    pub(super) fn carbon(&self) -> Option<f64> {
+    #[must_use]
+    pub fn carbon(&self) -> Option<f64> {
         together(self.protected, self.steel_carbon_kg, self.product_carbon_kg)
     }
 }
@@ -62,9 +66,21 @@ fn together(protected: bool, steel: Option<f64>, product: Option<f64>) -> Option
     if protected { Some(steel? + product?) } else { steel }
 }
 
-/// The quantities of a member of so many pieces.
-pub(super) fn quantities(design: &Design, member: &Member, outcome: &Outcome, count: Option<u32>) -> Quantities {
+/// How many pieces a member stands for; unknown where its count can't be read.
+#[must_use]
+pub fn count(keys: &Inherited<'_>) -> Option<u32> {
+    match keys.get(|k| &k.count).given {
+        Given::Value(count) => Some(count.value),
+        Given::Absent => Some(1),
+        Given::Unreadable(_) => None,
+    }
+}
+
+/// The quantities of all pieces of a member.
+#[must_use]
+pub fn quantities(design: &Design, member: &Member, outcome: &Outcome) -> Quantities {
     let keys = design.inherited(member);
+    let count = count(&keys);
     let basis = design.basis();
     let length = keys.get(|k| &k.length).value().map(|length| length.m());
     let total = length.zip(count).map(|(length, count)| length * f64::from(count));

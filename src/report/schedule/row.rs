@@ -2,7 +2,7 @@
 
 use serde::Serialize;
 
-use super::quantities::{Quantities, quantities};
+use super::quantities::{Quantities, count, quantities};
 use crate::analysis::design::Design;
 use crate::analysis::inputs::row_of;
 use crate::analysis::names::lookup_options;
@@ -73,7 +73,7 @@ pub struct Row {
 /// The row of a member. Its findings and departures are joined by the caller.
 pub(super) fn row(design: &Design, member: &Member, outcome: &Outcome) -> Row {
     let keys = design.inherited(member);
-    let count = or_built_in(keys.get(|k| &k.count).given, || 1);
+    let count = count(&keys);
     let choice = keys.get(|k| &k.section).value();
     let protection = keys.get(|k| &k.protection).value();
     let product = protection.and_then(|stated| stated.product.as_ref());
@@ -88,7 +88,7 @@ pub(super) fn row(design: &Design, member: &Member, outcome: &Outcome) -> Row {
     let state = outcome.protected.as_ref();
     let provided = state.and_then(|state| state.provided);
     let location = keys.get(|k| &k.location).value();
-    let quantities = quantities(design, member, outcome, count);
+    let quantities = quantities(design, member, outcome);
     Row {
         mark: member.mark.value().cloned(),
         count,

@@ -3,7 +3,7 @@
 
 use serde::Serialize;
 
-use super::quantities::Rated;
+use super::quantities::{Quantities, Rated};
 use super::row::Row;
 
 /// Totals of a product.
@@ -65,8 +65,8 @@ fn claimed(mut shares: impl Iterator<Item = (bool, Option<f64>)>) -> Option<f64>
     sum.ok().flatten()
 }
 
-fn pieces<'a>(rows: impl Iterator<Item = &'a Row>) -> u32 {
-    rows.filter_map(|row| row.count).fold(0, u32::saturating_add)
+fn added(counts: impl Iterator<Item = Option<u32>>) -> u32 {
+    counts.flatten().fold(0, u32::saturating_add)
 }
 
 /// Totals a product, in the order in which each first occurs.
@@ -92,7 +92,7 @@ fn product_total(product: &str, rows: &[&Row]) -> ProductTotal {
     let sums = || rows.iter().map(|row| &row.quantities);
     ProductTotal {
         product: product.to_owned(),
-        members: pieces(rows.iter().copied()),
+        members: added(rows.iter().map(|row| row.count)),
         surface_m2: known(sums().map(|q| q.surface_m2)).unwrap_or(0.0),
         coats: sums().filter_map(|q| q.coats).reduce(u32::saturating_add),
         litres: known(sums().map(|q| q.litres)),
@@ -103,29 +103,54 @@ fn product_total(product: &str, rows: &[&Row]) -> ProductTotal {
     }
 }
 
+/// A member's share of totals.
+#[derive(Debug, Clone, Copy)]
+pub struct Share<'a> {
+    /// Pieces.
+    pub count: Option<u32>,
+    /// Whether a product is named.
+    pub product: bool,
+    /// What it takes.
+    pub quantities: &'a Quantities,
+}
+
 /// Totals of all rows. Costs in several currencies are not added.
 pub(super) fn totals(rows: &[Row], one_currency: bool) -> Totals {
-    let protected = || rows.iter().filter(|row| row.product.is_some());
-    let rated = |row: &Row, rates: Rated| rates.steel && (rates.product || !row.quantities.protected);
+    let totals = sum(rows.iter().map(|row| Share {
+        count: row.count,
+        product: row.product.is_some(),
+        quantities: &row.quantities,
+    }));
     Totals {
-        marks: u32::try_from(rows.len()).unwrap_or(u32::MAX),
-        members: pieces(rows.iter()),
-        steel_mass_kg: known(rows.iter().map(|row| row.steel_mass_kg)).unwrap_or(0.0),
-        surface_m2: known(protected().map(|row| row.surface_m2)).unwrap_or(0.0),
-        product_mass_kg: known(protected().map(|row| row.quantities.product_mass_kg)),
-        cost: claimed(rows.iter().map(|row| (rated(row, row.quantities.cost_rates), row.cost)))
-            .filter(|_| one_currency),
-        carbon_kg: claimed(
-            rows.iter()
-                .map(|row| (rated(row, row.quantities.carbon_rates), row.carbon_kg)),
-        ),
+        cost: totals.cost.filter(|_| one_currency),
+        ..totals
+    }
+}
+
+/// Totals of members whose costs are in one currency.
+pub fn sum<'a>(shares: impl Iterator<Item = Share<'a>> + Clone) -> Totals {
+    let all = || shares.clone().map(|share| share.quantities);
+    let protected = || {
+        shares
+            .clone()
+            .filter(|share| share.product)
+            .map(|share| share.quantities)
+    };
+    let rated = |q: &Quantities, rates: Rated| rates.steel && (rates.product || !q.protected);
+    Totals {
+        marks: u32::try_from(shares.clone().count()).unwrap_or(u32::MAX),
+        members: added(shares.clone().map(|share| share.count)),
+        steel_mass_kg: known(all().map(|q| q.steel_mass_kg)).unwrap_or(0.0),
+        surface_m2: known(protected().map(|q| q.surface_m2)).unwrap_or(0.0),
+        product_mass_kg: known(protected().map(|q| q.product_mass_kg)),
+        cost: claimed(all().map(|q| (rated(q, q.cost_rates), q.cost()))),
+        carbon_kg: claimed(all().map(|q| (rated(q, q.carbon_rates), q.carbon()))),
     }
 }
 
 #[cfg(test)]
 mod tests {
     use super::*;
-    use crate::report::schedule::quantities::Quantities;
 
     fn row(cost: Option<f64>, rated: bool) -> Row {
         let rates = Rated {
@@ -141,6 +166,9 @@ mod tests {
                 protected: true,
                 product_cost: cost,
                 surface_m2: cost,
+                steel_mass_kg: Some(10.0),
+                // Steel that costs nothing leaves the cost of the product.
+                steel_cost: Some(0.0),
                 cost_rates: rates,
                 ..Quantities::default()
             },
