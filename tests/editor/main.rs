@@ -1,5 +1,6 @@
 //! What the editor shows, on texts with a cursor: `|` stands where it is.
 
+mod actions;
 mod fixture;
 mod names;
 mod outline;

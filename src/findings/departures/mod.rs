@@ -11,6 +11,7 @@ use jiff::civil::Date;
 
 use crate::analysis::design::{Design, MemberAt};
 use crate::analysis::outcome::Outcome;
+use crate::design::given::Given;
 use crate::design::keys::nearest;
 use crate::design::model::member::Departure;
 use crate::findings::context;
@@ -78,11 +79,11 @@ pub fn apply(
         }
         let error = declaration.severity == Severity::Error;
         let lacks = |given: bool, key: &str| (!given).then(|| format!("`{key}`"));
-        let mut missing: Vec<String> = lacks(departure.because.value().is_some(), "because")
-            .into_iter()
-            .collect();
+        // An empty text is a place kept for a reason, not one.
+        let said = |text: &Given<String>| text.value().is_some_and(|text| !text.trim().is_empty());
+        let mut missing: Vec<String> = lacks(said(&departure.because), "because").into_iter().collect();
         if error {
-            missing.extend(lacks(departure.by.value().is_some(), "by"));
+            missing.extend(lacks(said(&departure.by), "by"));
             missing.extend(lacks(departure.until.value().is_some(), "until"));
         }
         if !missing.is_empty() {

@@ -13,7 +13,7 @@ pub static DECLARATION: Declaration = Declaration {
     answer: "Take the next stock thickness, unless one size is wanted throughout.",
     fix: "Writes the next stock thickness, in the member itself, unless more than the thickness would have to change.",
     before: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, thickness: 30 } }",
-    after: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, thickness: 15 } }",
+    after: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, thickness: 20 } }",
 };
 
 /// A stated thickness past the next stock size.
