@@ -48,6 +48,11 @@ impl Sections {
         }
         &self.known[text]
     }
+
+    /// Whether the designation of a row means that row: what one table calls a section may be what others call theirs.
+    fn settles(&mut self, row: &CatalogueRow) -> bool {
+        matches!(self.find(&row.designation), Lookup::Found(_))
+    }
 }
 
 /// What is wrong with the names in one block of keys. Spans are those of the block's own text.
@@ -155,6 +160,7 @@ fn section_slip(text: &Spanned<&str>, sections: &mut Sections) -> Option<Slip> {
     match sections.find(text.value) {
         Lookup::Found(_) => None,
         Lookup::Ambiguous(rows) => {
+            let rows = rows.clone();
             let all: Vec<String> = rows
                 .iter()
                 .map(|row| {
@@ -175,7 +181,7 @@ fn section_slip(text: &Spanned<&str>, sections: &mut Sections) -> Option<Slip> {
             let mut slip = Slip::new(SlipKind::AmbiguousSection, text.span, message)
                 .at_key("section")
                 .remark("write the one that is meant, or settle it for the design by `basis: { section tables: [..], hollow: .. }`", None);
-            for row in rows {
+            for row in rows.into_iter().filter(|row| sections.settles(row)) {
                 slip = slip.repair(
                     format!("write `{}`", row.designation),
                     false,
@@ -195,7 +201,8 @@ fn section_slip(text: &Spanned<&str>, sections: &mut Sections) -> Option<Slip> {
                 ),
             };
             let mut slip = Slip::new(SlipKind::UnknownSection, text.span, message).at_key("section");
-            for row in nearest.iter().take(3) {
+            let nearest = nearest.clone();
+            for row in nearest.into_iter().filter(|row| sections.settles(row)).take(3) {
                 slip = slip.repair(
                     format!("write `{}`", row.designation),
                     false,

@@ -145,54 +145,17 @@ impl Covered<'_> {
 
     /// All that is stated of the protection, in one mapping, with a key.
     fn whole(&self, key: &str, value: &str) -> Option<String> {
-        let stated = self.stated;
-        let exact = |value: f64| significant(value, 6);
-        let thickness = stated.thickness.value().map(|layers| match layers.as_slice() {
-            [each] => exact(each.mm()),
-            layers => {
-                let layers: Vec<String> = layers.iter().map(|layer| exact(layer.mm())).collect();
-                format!("[{}]", layers.join(", "))
-            }
-        });
-        let keys = [
-            ("product", Some(insert::scalar(&stated.product.as_ref()?.value))),
-            (
-                "form",
-                stated
-                    .boxed
-                    .value()
-                    .map(|boxed| if *boxed { "box" } else { "profile" }.to_owned()),
-            ),
-            ("thickness", thickness),
-            ("layers", stated.layers.value().map(u32::to_string)),
-            ("dft", stated.dft.value().map(|film| exact(film.um()))),
-            ("reading", stated.reading.value().map(|film| exact(film.um()))),
-            ("primer", stated.primer.as_deref().map(insert::scalar)),
-            ("topcoat", stated.topcoat.as_deref().map(insert::scalar)),
-            (
-                "applied",
-                stated.on_site.map(|site| if site { "site" } else { "shop" }.to_owned()),
-            ),
-        ];
-        let written: Vec<String> = keys
-            .into_iter()
-            .filter_map(|(name, old)| {
-                let value = if name == key { Some(value.to_owned()) } else { old };
-                Some(format!("{name}: {}", value?))
-            })
-            .collect();
-        Some(format!("{{ {} }}", written.join(", ")))
+        insert::protection(self.stated, &[(key, value)])
     }
 
     fn written(&self, next: &BuildUp) -> String {
-        match next.layers.as_slice() {
-            [film] if self.film => significant(film.um(), 0),
-            [layer] => significant(layer.mm(), 3),
-            layers => {
-                let layers: Vec<String> = layers.iter().map(|layer| significant(layer.mm(), 3)).collect();
-                format!("[{}]", layers.join(", "))
+        insert::build_up(&next.layers, |layer| {
+            if self.film {
+                significant(layer.um(), 0)
+            } else {
+                significant(layer.mm(), 3)
             }
-        }
+        })
     }
 
     fn shown(&self, next: &BuildUp) -> String {

@@ -115,9 +115,22 @@ impl<'a> Context<'a> {
     /// Gives the finding last added a fix that replaces a value of the member's own. None changes the group or the
     /// defaults, for other members live by them.
     pub fn fix(&mut self, title: String, own: Span, text: String) {
-        let place = self.place(own);
-        if !insert::through_alias(&self.design.files[self.at.file].text, place.span) {
-            self.offer(title, place, text);
+        self.fixes(title, vec![(own, text)]);
+    }
+
+    /// The same of several values at once.
+    pub fn fixes(&mut self, title: String, mut own: Vec<(Span, String)>) {
+        own.sort_by_key(|(span, _)| *span);
+        let edits: Vec<FixEdit> = own
+            .into_iter()
+            .map(|(span, text)| FixEdit {
+                place: self.place(span),
+                text,
+            })
+            .collect();
+        let text = &self.design.files[self.at.file].text;
+        if !edits.iter().any(|edit| insert::through_alias(text, edit.place.span)) {
+            self.offer(title, edits);
         }
     }
 
@@ -125,16 +138,17 @@ impl<'a> Context<'a> {
     pub fn state(&mut self, title: String, key: &str, value: &str) {
         if let Some((span, text)) = insert::key(self.design, self.at, key, value) {
             let path = Arc::clone(&self.design.files[self.at.file].path);
-            self.offer(title, Place { path, span }, text);
+            let place = Place { path, span };
+            self.offer(title, vec![FixEdit { place, text }]);
         }
     }
 
-    fn offer(&mut self, title: String, place: Place, text: String) {
+    fn offer(&mut self, title: String, edits: Vec<FixEdit>) {
         if let Some(finding) = self.out.last_mut() {
             finding.fixes.push(Fix {
                 title,
                 safe: false,
-                edits: vec![FixEdit { place, text }],
+                edits,
             });
         }
     }
@@ -235,48 +249,32 @@ impl Stated<'_> {
         format!("{total} ({})", layers.join(" + "))
     }
 
-    /// Offers a build-up instead of the stated thickness. Where `layers` multiplies the thickness two keys would have to
-    /// change together, so nothing is offered.
+    /// Offers a build-up instead of the stated thickness: in the member itself, with all that it inherits beside the
+    /// thickness. A number of layers, which multiplies the thickness, changes with it.
     pub fn offer(&self, cx: &mut Context<'_>, next: &BuildUp) {
-        if !matches!(self.stated.layers.value(), None | Some(1)) {
-            return;
-        }
-        let text = match next.layers.as_slice() {
-            [film] if self.film => significant(film.um(), 0),
-            [layer] => significant(layer.mm(), 3),
-            layers => {
-                let layers: Vec<String> = layers.iter().map(|layer| significant(layer.mm(), 3)).collect();
-                format!("[{}]", layers.join(", "))
+        let text = insert::build_up(&next.layers, |layer| {
+            if self.film {
+                significant(layer.um(), 0)
+            } else {
+                significant(layer.mm(), 3)
             }
-        };
+        });
+        let count = next.layers.len().to_string();
         let title = format!("use the next stock thickness, {}", self.build_up(cx, next));
-        if let Some(span) = self.thickness_span(cx) {
-            cx.fix(title, span, text);
-        } else if self.only_thickness() {
-            let key = if self.film { "dft" } else { "thickness" };
-            let value = format!("{{ product: {}, {key}: {text} }}", insert::scalar(self.name));
-            cx.state(title, "protection", &value);
+        let layers = self.stated.layers.span();
+        match (self.thickness_span(cx), layers) {
+            (Some(span), None) => cx.fix(title, span, text),
+            (Some(span), Some(layers)) => cx.fixes(title, vec![(span, text), (layers, count)]),
+            (None, _) if cx.own().protection.is_absent() => {
+                let key = if self.film { "dft" } else { "thickness" };
+                let mut changed = vec![(key, text.as_str())];
+                changed.extend(layers.map(|_| ("layers", count.as_str())));
+                if let Some(value) = insert::protection(self.stated, &changed) {
+                    cx.state(title, "protection", &value);
+                }
+            }
+            (None, _) => {}
         }
-    }
-
-    /// Whether product and thickness are all that is stated: mappings are inherited whole, so that the rest would be
-    /// lost.
-    fn only_thickness(&self) -> bool {
-        let Protection {
-            boxed,
-            layers,
-            reading,
-            primer,
-            topcoat,
-            on_site,
-            ..
-        } = self.stated;
-        boxed.is_absent()
-            && layers.is_absent()
-            && reading.is_absent()
-            && primer.is_none()
-            && topcoat.is_none()
-            && on_site.is_none()
     }
 }
 

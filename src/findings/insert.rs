@@ -1,7 +1,9 @@
 //! Writing a key into a member that does not state it, in the style that the member is written in.
 
 use crate::analysis::design::{Design, MemberAt};
+use crate::design::model::member::Protection;
 use crate::text::Span;
+use crate::units::{Length, significant};
 
 /// Where in the file, and what, is written so that a member states `key: value` itself: after its mark, in flow style in
 /// a flow mapping and on a line of its own in a block. `None` where the member has no mark of its own to go by, or stands
@@ -49,6 +51,40 @@ pub fn key(design: &Design, at: MemberAt, key: &str, value: &str) -> Option<(Spa
     ))
 }
 
+/// All that is stated of a protection in one mapping, with some keys changed: a mapping is inherited whole, so that one
+/// which overrides it must say the rest as well. `None` of a bare member.
+pub fn protection(stated: &Protection, changed: &[(&str, &str)]) -> Option<String> {
+    let mm = |layers: &Vec<Length>| build_up(layers, |layer| significant(layer.mm(), 6));
+    let um = |film: &Length| significant(film.um(), 6);
+    let form = |boxed: &bool| if *boxed { "box" } else { "profile" }.to_owned();
+    let applied = |site| if site { "site" } else { "shop" }.to_owned();
+    let keys = [
+        ("product", Some(scalar(&stated.product.as_ref()?.value))),
+        ("form", stated.boxed.value().map(form)),
+        ("thickness", stated.thickness.value().map(mm)),
+        ("layers", stated.layers.value().map(u32::to_string)),
+        ("dft", stated.dft.value().map(um)),
+        ("reading", stated.reading.value().map(um)),
+        ("primer", stated.primer.as_deref().map(scalar)),
+        ("topcoat", stated.topcoat.as_deref().map(scalar)),
+        ("applied", stated.on_site.map(applied)),
+    ];
+    let written = keys.into_iter().filter_map(|(key, stated)| {
+        let new = changed.iter().find(|(name, _)| *name == key);
+        let value = new.map(|(_, value)| (*value).to_owned()).or(stated)?;
+        Some(format!("{key}: {value}"))
+    });
+    Some(format!("{{ {} }}", written.collect::<Vec<_>>().join(", ")))
+}
+
+/// The layers of a build-up: one thickness, or a list of several.
+pub fn build_up(layers: &[Length], each: impl Fn(&Length) -> String) -> String {
+    match layers {
+        [layer] => each(layer),
+        layers => format!("[{}]", layers.iter().map(each).collect::<Vec<_>>().join(", ")),
+    }
+}
+
 /// Whether a value stands in the file by an alias only: what is written there would not be the value.
 pub fn through_alias(text: &str, span: Span) -> bool {
     span.slice(text).starts_with('*')
@@ -60,7 +96,11 @@ pub fn scalar(name: &str) -> String {
         && !name.ends_with(' ')
         && name
             .chars()
-            .all(|c| c.is_alphanumeric() || matches!(c, ' ' | '_' | '.' | '/' | '-'));
+            .all(|c| c.is_alphanumeric() || matches!(c, ' ' | '_' | '.' | '/' | '-'))
+        && !matches!(
+            name.to_ascii_lowercase().as_str(),
+            "null" | "true" | "false" | "yes" | "no" | "on" | "off" | "y" | "n"
+        );
     if plain {
         return name.to_owned();
     }
@@ -76,6 +116,8 @@ mod tests {
         assert_eq!(scalar("grey board"), "grey board");
         assert_eq!(scalar("board: grey"), "'board: grey'");
         assert_eq!(scalar("1E2"), "'1E2'");
+        assert_eq!(scalar("null"), "'null'");
+        assert_eq!(scalar("No"), "'No'");
         assert_eq!(scalar("it's"), "'it''s'");
     }
 }

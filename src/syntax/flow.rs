@@ -249,9 +249,16 @@ impl Reader<'_> {
     /// Reports a bracket that nothing closes.
     fn unclosed(&mut self, open: usize, closing: u8) {
         let (opening, closing) = (char::from(self.bytes[open]), char::from(closing));
-        let before = self.text[open..self.at].trim_end();
-        let line = before.rfind(['\n', '\r']).map_or(0, |at| at + 1);
-        let end = open + line + without_comment(&before[line..]).len();
+        // Behind the last line that is more than a comment.
+        let mut before = self.text[open..self.at].trim_end();
+        let end = loop {
+            let line = before.rfind(['\n', '\r']).map_or(0, |at| at + 1);
+            let content = without_comment(&before[line..]).trim_end();
+            if line == 0 || !content.is_empty() {
+                break open + line + content.len();
+            }
+            before = before[..line].trim_end();
+        };
         let message = format!("this `{opening}` is never closed; a `{closing}` is missing");
         let error = words::not_yaml(Span::new(open, open + 1), message);
         let gap = Span::new(end, end);

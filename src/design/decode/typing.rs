@@ -67,8 +67,11 @@ pub(super) fn quantity_slip(
     };
     // A unit of the wrong kind is most often a slip for the right one: offer the number in the key's own unit.
     if slip.kind == SlipKind::WrongUnit && !node.through_alias && !unit.is_empty() {
-        let number = text.trim_end_matches(|c: char| !c.is_ascii_digit() && c != '.').trim();
-        if !number.is_empty() {
+        let end = text
+            .find(|c: char| !c.is_ascii_digit() && !matches!(c, '.' | '-' | '+' | ' '))
+            .unwrap_or(text.len());
+        let number = text[..end].trim();
+        if number.parse::<f64>().is_ok() {
             let repaired = format!("{number} {unit}");
             return slip.repair(format!("write `{repaired}`"), false, span, repaired);
         }

@@ -2,6 +2,7 @@
 
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
+use crate::findings::insert;
 use crate::findings::registry::Declaration;
 use crate::protection::product::Kind;
 
@@ -12,7 +13,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "common practice",
     summary: "A board is to follow the profile; boards box the section in.",
     answer: "Take the box form, or a spray that follows the profile.",
-    fix: "Writes `form: box`, where the member states the form itself.",
+    fix: "Writes `form: box` into the member itself.",
     before: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, form: profile } }",
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, form: box } }",
 };
@@ -34,7 +35,12 @@ pub(super) fn check(cx: &mut Context<'_>) {
         cx.mark, product.name
     );
     cx.add(&DECLARATION, "form", own, message);
-    if let Some(span) = own {
-        cx.fix("write `box`".to_owned(), span, "box".to_owned());
+    match own {
+        Some(span) => cx.fix("write `box`".to_owned(), span, "box".to_owned()),
+        None => {
+            if let Some(value) = insert::protection(product.stated, &[("form", "box")]) {
+                cx.state("box it in here".to_owned(), "protection", &value);
+            }
+        }
     }
 }

@@ -11,7 +11,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "common practice",
     summary: "The thickness stated is past the next stock size.",
     answer: "Take the next stock thickness, unless one size is wanted throughout.",
-    fix: "Writes the next stock thickness, in the member itself, unless more than the thickness would have to change.",
+    fix: "Writes the next stock thickness into the member itself.",
     before: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, thickness: 30 } }",
     after: r"- { mark: B1, section: IPE 300, critical temperature: 550, protection: { product: grey board, thickness: 20 } }",
 };

@@ -11,7 +11,7 @@ pub static DECLARATION: Declaration = Declaration {
     clause: "EN 1993-1-2:2005 4.2.5.2",
     summary: "The thickness stated is less than the one needed.",
     answer: "Take the next stock thickness.",
-    fix: "Writes the next stock thickness, in the member itself, unless more than the thickness would have to change.",
+    fix: "Writes the next stock thickness into the member itself.",
     before: r"- { mark: B1, section: IPE 200, critical temperature: 500, period: 90, protection: { product: grey board, thickness: 15 } }",
     after: r"- { mark: B1, section: IPE 200, critical temperature: 500, period: 90, protection: { product: grey board, thickness: [20, 15] } }",
 };

@@ -109,6 +109,10 @@ fn slip_finding(file: &SourceFile, slip: Slip, owner: Owner<'_>) -> Finding {
             place: remark.span.map(place),
         })
         .collect();
+    let names = matches!(
+        slip.kind,
+        SlipKind::UnknownGroup | SlipKind::UnknownFire | SlipKind::UnknownProduct
+    );
     finding.fixes = slip
         .repairs
         .into_iter()
@@ -124,7 +128,8 @@ fn slip_finding(file: &SourceFile, slip: Slip, owner: Owner<'_>) -> Finding {
                 .into_iter()
                 .map(|edit| FixEdit {
                     place: place(edit.span),
-                    text: edit.text,
+                    // A name of the author's choice may need quotes.
+                    text: if names { insert::scalar(&edit.text) } else { edit.text },
                 })
                 .collect(),
         })
