@@ -41,7 +41,7 @@ pub fn actions(view: &View<'_>, findings: &[Finding], range: Span) -> Vec<Action
     let here: Vec<(usize, &Finding)> = findings
         .iter()
         .enumerate()
-        .filter(|(_, finding)| finding.place.path == *path && meets(finding.place.span, range))
+        .filter(|(_, finding)| meets(finding.place.span, range) && finding.place.path == *path)
         .collect();
     let mut found = Vec::new();
     for (index, finding) in &here {

@@ -2,6 +2,8 @@
 
 use std::sync::Arc;
 
+use rustc_hash::FxHashMap;
+
 use crate::analysis::design::{Design, FileIndex};
 use crate::design::keys::NameOf;
 use crate::editor::names::{self, Occurrence, is_built_in};
@@ -67,6 +69,8 @@ pub fn edits(design: &Design, of: NameOf, old: &str, new_name: &str) -> Result<V
             "the {noun} `{old}` stands twice in the design, and which of the two is meant can't be told; change one of them by hand"
         ));
     }
+    // The old name is written in few ways, each of which is judged once.
+    let mut known: FxHashMap<&str, Option<String>> = FxHashMap::default();
     let edit = |(file, occurrence): (FileIndex, Occurrence<'_>)| {
         let source = &design.files[file];
         let text: &str = &source.text;
@@ -76,7 +80,9 @@ pub fn edits(design: &Design, of: NameOf, old: &str, new_name: &str) -> Result<V
                 "the {noun} `{old}` also stands behind the alias `{alias}`, which a rename can't follow; write the name there first"
             ));
         }
-        let Some(written) = written(new, occurrence.span.slice(text), old) else {
+        let before = occurrence.span.slice(text);
+        let written = known.entry(before).or_insert_with(|| written(new, before, old));
+        let Some(written) = written.clone() else {
             return Err(format!(
                 "the {noun} `{old}` is not written as a word on one line; write it so first"
             ));

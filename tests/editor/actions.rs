@@ -1,7 +1,7 @@
 //! What an editor offers at a cursor, and what it writes.
 
 use scorchline::editor::actions::{Action, ActionKind, actions};
-use scorchline::findings::registry::EXAMPLE_LIBRARY;
+use scorchline::findings::registry::{EXAMPLE_LIBRARY, REGISTRY, example_files};
 use scorchline::text::Span;
 
 use crate::fixture::{Fixture, several};
@@ -329,4 +329,49 @@ fn box_form_is_offered_where_the_product_then_holds_the_member() {
         "  - { mark: |B1, section: IPE 80, period: 180, protection: white spray }\n",
     ));
     assert!(!nothing.iter().any(|title| title.starts_with("move")), "{nothing:?}");
+}
+
+#[test]
+fn whatever_is_offered_leaves_the_file_readable() {
+    let mut made = 0;
+    for declaration in REGISTRY {
+        for crlf in [false, true] {
+            let files = example_files(declaration.before);
+            let files: Vec<(String, String)> = files
+                .into_iter()
+                .map(|(name, text)| (name, if crlf { text.replace('\n', "\r\n") } else { text }))
+                .collect();
+            let named: Vec<(&str, &str)> = files
+                .iter()
+                .map(|(name, text)| (name.as_str(), text.as_str()))
+                .collect();
+            let mut fixture = several(&named);
+            let unreadable = |fixture: &Fixture| {
+                let findings = fixture.checked.findings.iter();
+                findings.filter(|finding| finding.name() == "unreadable-yaml").count()
+            };
+            for file in 0..fixture.checked.design.files.len() {
+                fixture.file = file;
+                let whole = Span::new(0, fixture.view().text().len());
+                for action in actions(&fixture.view(), &fixture.checked.findings, whole) {
+                    let after = fixture.edited(&action.edits);
+                    let after: Vec<(&str, &str)> = named
+                        .iter()
+                        .map(|(name, text)| {
+                            let new = after.iter().find(|(other, _)| other == name);
+                            (*name, new.map_or(*text, |(_, text)| text.as_str()))
+                        })
+                        .collect();
+                    let after = several(&after);
+                    assert!(
+                        unreadable(&after) <= unreadable(&fixture),
+                        "{}: {action:?}",
+                        declaration.name
+                    );
+                    made += 1;
+                }
+            }
+        }
+    }
+    assert!(made > 100, "only {made} were made");
 }
