@@ -14,6 +14,7 @@ pub mod editor;
 pub mod exchange;
 pub mod findings;
 pub mod heating;
+pub mod lsp;
 pub mod protection;
 pub mod report;
 pub mod resistance;

@@ -278,6 +278,12 @@ impl Shown<'_> {
         }
     }
 
+    /// Whether it is a slip of the text.
+    #[must_use]
+    pub fn is_slip(&self) -> bool {
+        reading::is_slip(&self.finding)
+    }
+
     /// How grave it is.
     #[must_use]
     pub fn severity(&self) -> Severity {

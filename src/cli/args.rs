@@ -59,6 +59,12 @@ pub enum Command {
         /// Its name; all are listed without one.
         finding: Option<String>,
     },
+    /// The language server, on standard input and output.
+    Serve {
+        /// Accepted and ignored: there is no other way.
+        #[arg(long)]
+        stdio: bool,
+    },
 }
 
 /// What is checked, on which day, and what counts as failing.

@@ -4,13 +4,13 @@ use std::path::PathBuf;
 
 use super::args::{CheckForm, Color, FailOn, Input, RowForm};
 use super::built_in::BuiltIn;
-use super::disk::Disk;
 use super::search::{self, Shown};
 use super::{Ending, Trouble, output, progress, text};
 use crate::analysis::memo::Memo;
 use crate::check::{self, Checked};
 use crate::exchange::{csv, json, table};
 use crate::findings::finding::Severity;
+use crate::lsp::disk::Disk;
 use crate::report::schedule::schedule as schedule_of;
 use crate::scenario;
 
@@ -78,7 +78,7 @@ fn run(input: &Input) -> Result<Run, Trouble> {
                 .to_owned(),
         );
     }
-    let (checked, unread) = progress::during(&memo, || check::run(&Disk, &found.files, on, &memo));
+    let (checked, unread) = progress::during(&memo, || check::run(&Disk::default(), &found.files, on, &memo));
     let unread = unread
         .into_iter()
         .map(|(path, trouble)| format!("{} can't be read: {trouble}", found.shown.path(&path)));

@@ -4,7 +4,6 @@ mod args;
 mod begin;
 mod built_in;
 mod check;
-mod disk;
 mod output;
 mod progress;
 mod search;
@@ -36,6 +35,13 @@ enum Ending {
 #[must_use]
 pub fn main() -> ExitCode {
     let args = Args::parse();
+    if let Command::Serve { .. } = args.command {
+        let status = crate::lsp::serve().unwrap_or_else(|error| {
+            output::notice(&format!("the server can't start: {error}"));
+            2
+        });
+        return ExitCode::from(status);
+    }
     let ending = run(&args).unwrap_or_else(|trouble| {
         output::notice(&trouble);
         Ending::Incomplete
@@ -54,5 +60,7 @@ fn run(args: &Args) -> Result<Ending, Trouble> {
         Command::Sections { words, form, out } => sections::sections(words, *form, out.as_deref()),
         Command::Begin { folder } => begin::begin(folder),
         Command::Why { finding } => why::why(finding.as_deref()),
+        // The server runs until its editor ends it, and has a status of its own.
+        Command::Serve { .. } => Ok(Ending::Clear),
     }
 }

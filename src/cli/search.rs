@@ -2,10 +2,7 @@
 
 use std::path::{Path, PathBuf};
 
-use crate::analysis::read::kind_by_name;
-
-/// Folders that hold what programs made, not what engineers wrote.
-const SKIPPED: [&str; 2] = ["target", "node_modules"];
+use crate::lsp::folders::search;
 
 /// The design files among some paths.
 #[derive(Debug, Default)]
@@ -70,29 +67,6 @@ pub fn designs(paths: &[PathBuf]) -> Result<Found, String> {
     found.files.sort();
     found.files.dedup();
     Ok(found)
-}
-
-fn search(folder: &Path, files: &mut Vec<PathBuf>, troubles: &mut Vec<String>) {
-    let entries = match std::fs::read_dir(folder) {
-        Ok(entries) => entries,
-        Err(error) => {
-            troubles.push(format!("{} can't be searched: {error}", folder.display()));
-            return;
-        }
-    };
-    for entry in entries.flatten() {
-        let path = entry.path();
-        let name = entry.file_name();
-        let name = name.to_string_lossy();
-        // A folder behind a symlink may lead in a circle, so only true folders are searched.
-        if entry.file_type().is_ok_and(|kind| kind.is_dir()) {
-            if !name.starts_with('.') && !SKIPPED.contains(&&*name) {
-                search(&path, files, troubles);
-            }
-        } else if !path.is_dir() && kind_by_name(&path).is_some() {
-            files.push(path);
-        }
-    }
 }
 
 #[cfg(test)]

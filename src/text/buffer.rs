@@ -55,6 +55,24 @@ impl Buffer {
         self.rope.char_to_byte(self.char_at(position, encoding))
     }
 
+    /// The position of a byte offset. One inside a character counts as its start, one past the end as the end.
+    #[must_use]
+    pub fn position(&self, offset: usize, encoding: Encoding) -> Position {
+        let at = self.rope.byte_to_char(offset.min(self.rope.len_bytes()));
+        let line = self.rope.char_to_line(at);
+        let start = self.rope.line_to_char(line);
+        let column = match encoding {
+            Encoding::Utf8 => self.rope.char_to_byte(at) - self.rope.line_to_byte(line),
+            Encoding::Utf16 => self.rope.char_to_utf16_cu(at) - self.rope.char_to_utf16_cu(start),
+            Encoding::Utf32 => at - start,
+        };
+        let small = |number: usize| u32::try_from(number).unwrap_or(u32::MAX);
+        Position {
+            line: small(line),
+            column: small(column),
+        }
+    }
+
     /// The index of the character at a position.
     fn char_at(&self, position: Position, encoding: Encoding) -> usize {
         let line = position.line as usize;
@@ -122,6 +140,7 @@ mod tests {
             for (position, at) in model(&text, encoding) {
                 let offset = u32::try_from(at).unwrap();
                 prop_assert_eq!(index.position(&text, offset, encoding), position);
+                prop_assert_eq!(buffer.position(at, encoding), position);
                 // The LF of a CR LF has no position of its own: a line ends before its break.
                 if !text[..at].ends_with('\r') || !text[at..].starts_with('\n') {
                     prop_assert_eq!(index.offset(&text, position, encoding), offset);

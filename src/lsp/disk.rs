@@ -9,29 +9,36 @@ use crate::syntax::MAX_BYTES;
 use crate::text::decode;
 
 /// Files on disk.
-pub struct Disk;
+#[derive(Debug, Default)]
+pub struct Disk {
+    /// Folders that an editor has open; real paths.
+    pub folders: Vec<PathBuf>,
+}
 
-/// The workspace of a file: the nearest folder upward that holds `.git`, else its own folder.
-fn workspace(file: &Path) -> PathBuf {
+/// The workspace of a file: the nearest folder upward that holds `.git`, else the outermost folder of the editor's that
+/// holds the file, else its own folder.
+fn workspace(file: &Path, folders: &[PathBuf]) -> PathBuf {
     let folder = file.parent().unwrap_or(Path::new("."));
     let folder = std::fs::canonicalize(folder).unwrap_or_else(|_| folder.to_path_buf());
-    folder
-        .ancestors()
-        .find(|above| above.join(".git").exists())
+    let versioned = folder.ancestors().find(|above| above.join(".git").exists());
+    let open = folders.iter().filter(|open| folder.starts_with(open));
+    let outermost = open.min_by_key(|open| open.as_os_str().len());
+    versioned
+        .or(outermost.map(PathBuf::as_path))
         .unwrap_or(&folder)
         .to_path_buf()
 }
 
-impl Files for Disk {
-    fn follow(&self, from: &Path, relative: &str) -> Result<PathBuf, PathTrouble> {
+impl Disk {
+    /// Where a relative path leads by its words, and the workspace that it must stay in.
+    fn place(&self, from: &Path, relative: &str) -> Result<(PathBuf, PathBuf), PathTrouble> {
         let wanted = Path::new(relative);
         if wanted.is_absolute() || wanted.has_root() || relative.starts_with('\\') {
             return Err(PathTrouble::Outside("by an absolute path"));
         }
-        let root = workspace(from);
+        let root = workspace(from, &self.folders);
         let folder = from.parent().unwrap_or(Path::new("."));
-        let folder = std::fs::canonicalize(folder).map_err(|error| PathTrouble::Unreadable(error.to_string()))?;
-        let mut path = folder;
+        let mut path = std::fs::canonicalize(folder).map_err(|error| PathTrouble::Unreadable(error.to_string()))?;
         for part in wanted.components() {
             match part {
                 Component::ParentDir => {
@@ -45,6 +52,21 @@ impl Files for Disk {
                 Component::Prefix(_) | Component::RootDir => return Err(PathTrouble::Outside("by an absolute path")),
             }
         }
+        Ok((path, root))
+    }
+
+    /// Where a relative path leads, whether a file is there or not yet.
+    ///
+    /// # Errors
+    /// [`PathTrouble`], where it leads out of the workspace.
+    pub fn target(&self, from: &Path, relative: &str) -> Result<PathBuf, PathTrouble> {
+        self.place(from, relative).map(|(path, _)| path)
+    }
+}
+
+impl Files for Disk {
+    fn follow(&self, from: &Path, relative: &str) -> Result<PathBuf, PathTrouble> {
+        let (path, root) = self.place(from, relative)?;
         match std::fs::canonicalize(&path) {
             Ok(real) if !real.starts_with(&root) => Err(PathTrouble::Outside("by a symlink")),
             Ok(real) if real.is_file() => Ok(real),

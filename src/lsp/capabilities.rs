@@ -1,0 +1,43 @@
+//! What the server offers and what it asks for.
+
+use tower_lsp::lsp_types::*;
+
+/// What the server offers.
+pub fn capabilities(encoding: PositionEncodingKind) -> ServerCapabilities {
+    ServerCapabilities {
+        position_encoding: Some(encoding),
+        text_document_sync: Some(TextDocumentSyncCapability::Options(TextDocumentSyncOptions {
+            open_close: Some(true),
+            change: Some(TextDocumentSyncKind::INCREMENTAL),
+            save: Some(TextDocumentSyncSaveOptions::SaveOptions(SaveOptions {
+                include_text: Some(false),
+            })),
+            ..TextDocumentSyncOptions::default()
+        })),
+        workspace: Some(WorkspaceServerCapabilities {
+            workspace_folders: Some(WorkspaceFoldersServerCapabilities {
+                supported: Some(true),
+                change_notifications: Some(OneOf::Left(true)),
+            }),
+            file_operations: None,
+        }),
+        ..ServerCapabilities::default()
+    }
+}
+
+/// The files that the editor is asked to watch.
+pub fn watching() -> Registration {
+    let patterns = ["**/*.steelwork.{yaml,yml}", "**/*.protection.{yaml,yml}"];
+    let watchers = patterns.map(|pattern| FileSystemWatcher {
+        glob_pattern: GlobPattern::String(pattern.to_owned()),
+        kind: None,
+    });
+    let options = DidChangeWatchedFilesRegistrationOptions {
+        watchers: watchers.to_vec(),
+    };
+    Registration {
+        id: "design-files".to_owned(),
+        method: "workspace/didChangeWatchedFiles".to_owned(),
+        register_options: serde_json::to_value(options).ok(),
+    }
+}

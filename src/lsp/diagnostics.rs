@@ -1,0 +1,141 @@
+//! Findings as the editor shows them: which of many, how grave while a line is still being typed, and in its terms.
+
+use tower_lsp::lsp_types::{
+    Diagnostic, DiagnosticRelatedInformation, DiagnosticSeverity, DiagnosticTag, Location, NumberOrString,
+};
+
+use crate::analysis::design::FileIndex;
+use crate::check::live::{Live, Shown};
+use crate::editor::view::{View, Within};
+use crate::findings::finding::{Finding, Severity};
+use crate::findings::reading;
+use crate::lsp::convert::Lines;
+use crate::lsp::shared::Snapshot;
+use crate::text::Span;
+
+/// The most findings that are published of a file.
+pub const MOST: usize = 500;
+
+/// The line that is being typed: findings there that more typing may answer are hints for the moment.
+pub type Typed = Option<Span>;
+
+/// The findings of a file, those of the member last edited always among them.
+pub fn of_file(snapshot: &Snapshot, live: &Live, file: FileIndex, edited: Typed, calm: bool) -> Vec<Diagnostic> {
+    let lines = snapshot.lines(live, file);
+    let shown = live.shown(file);
+    let more = shown.len().saturating_sub(MOST);
+    let chosen = choose(shown, edited.map(|line| item_around(live, file, line)));
+    let mut diagnostics: Vec<Diagnostic> = chosen
+        .into_iter()
+        .map(|shown| {
+            let finding = shown.into_finding();
+            let typed = edited
+                .filter(|_| calm)
+                .is_some_and(|line| touches(line, finding.place.span));
+            diagnostic(snapshot, &finding, &lines, typed && reading::is_slip(&finding))
+        })
+        .collect();
+    if more > 0 {
+        diagnostics.push(Diagnostic {
+            severity: Some(DiagnosticSeverity::INFORMATION),
+            source: Some("scorchline".to_owned()),
+            message: format!(
+                "{more} more findings of this file are not shown here; `scorchline check --all` lists them"
+            ),
+            ..Diagnostic::default()
+        });
+    }
+    diagnostics
+}
+
+/// Whether any finding of the file is shown as a hint for the moment.
+pub fn calms(live: &Live, file: FileIndex, line: Span) -> bool {
+    let shown = live.shown(file);
+    shown
+        .into_iter()
+        .any(|shown| touches(line, shown.span()) && shown.is_slip())
+}
+
+fn touches(line: Span, span: Span) -> bool {
+    span.start <= line.end && line.start <= span.end
+}
+
+/// The member, group or entry around a line.
+fn item_around(live: &Live, file: FileIndex, line: Span) -> Span {
+    let view = View {
+        design: &live.design,
+        outcomes: &live.outcomes,
+        file,
+    };
+    match view.within(line.start) {
+        Within::Nothing => line,
+        within => view.piece(within).map_or(line, |piece| piece.span),
+    }
+}
+
+/// The gravest findings in the order of the file, after those of the member last edited.
+fn choose<'a>(mut shown: Vec<Shown<'a>>, favoured: Option<Span>) -> Vec<Shown<'a>> {
+    let key = |shown: &Shown<'a>| {
+        let span = shown.span();
+        let far = !favoured.is_some_and(|item| touches(item, span));
+        (far, shown.severity(), span)
+    };
+    if shown.len() > MOST {
+        shown.select_nth_unstable_by_key(MOST, key);
+        shown.truncate(MOST);
+    }
+    shown.sort_by_key(|shown| (shown.span(), shown.severity()));
+    shown
+}
+
+/// A finding in the terms of the protocol.
+pub fn diagnostic(snapshot: &Snapshot, finding: &Finding, lines: &Lines, calm: bool) -> Diagnostic {
+    let mut message = finding.message.clone();
+    let mut related = Vec::new();
+    for note in &finding.notes {
+        match place(snapshot, note.place.as_ref(), finding, lines) {
+            Some(location) if snapshot.client.related => related.push(DiagnosticRelatedInformation {
+                location,
+                message: note.text.clone(),
+            }),
+            _ => {
+                message.push('\n');
+                message.push_str(&note.text);
+            }
+        }
+    }
+    let severity = if calm { Severity::Hint } else { finding.severity };
+    let unused = finding.name().starts_with("unused-");
+    Diagnostic {
+        range: lines.range(finding.place.span),
+        severity: Some(match severity {
+            Severity::Error => DiagnosticSeverity::ERROR,
+            Severity::Warning => DiagnosticSeverity::WARNING,
+            Severity::Information => DiagnosticSeverity::INFORMATION,
+            Severity::Hint => DiagnosticSeverity::HINT,
+        }),
+        code: Some(NumberOrString::String(finding.name().to_owned())),
+        source: Some("scorchline".to_owned()),
+        message,
+        related_information: (!related.is_empty()).then_some(related),
+        tags: unused.then(|| vec![DiagnosticTag::UNNECESSARY]),
+        ..Diagnostic::default()
+    }
+}
+
+fn place(
+    snapshot: &Snapshot,
+    place: Option<&crate::findings::finding::Place>,
+    finding: &Finding,
+    lines: &Lines,
+) -> Option<Location> {
+    let place = place?;
+    let uri = snapshot.uri(&place.path)?;
+    let range = if place.path == finding.place.path {
+        lines.range(place.span)
+    } else {
+        let (live, file) = snapshot.find(&place.path)?;
+        snapshot.lines(live, file).range(place.span)
+    };
+    Some(Location { uri, range })
+}

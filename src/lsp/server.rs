@@ -1,0 +1,220 @@
+//! The server: what it can do, and one thin handler a message.
+
+use std::future::Future;
+use std::pin::Pin;
+use std::sync::Arc;
+use std::sync::atomic::{AtomicBool, Ordering};
+use std::task::{Context, Poll};
+use std::time::Duration;
+
+use tokio::sync::Notify;
+use tower_lsp::jsonrpc::{Request, Response, Result};
+use tower_lsp::lsp_types::*;
+use tower_lsp::{Client as Editor, LanguageServer, LspService, Server as Transport};
+use tower_service::Service;
+
+use crate::lsp::documents::{Document, path_of};
+use crate::lsp::settings::{Client, Settings, encoding_kind};
+use crate::lsp::shared::{Shared, lock};
+use crate::lsp::worker::Worker;
+use crate::text::Buffer;
+
+/// How long the editor may take to answer what the server asks of it.
+const PATIENCE: Duration = Duration::from_secs(10);
+
+/// The server.
+pub(super) struct Server {
+    editor: Editor,
+    shared: Arc<Shared>,
+    stopped: Arc<AtomicBool>,
+}
+
+/// Serves on standard input and output until the editor says `exit` or closes them. Answers the status of the process: 0
+/// after `shutdown`, else 1.
+///
+/// # Errors
+/// Where no threads can be had.
+pub fn serve() -> std::io::Result<u8> {
+    let runtime = tokio::runtime::Builder::new_multi_thread()
+        .worker_threads(2)
+        .enable_all()
+        .build()?;
+    let status = runtime.block_on(async {
+        let stopped = Arc::new(AtomicBool::new(false));
+        let (service, socket) = LspService::new(|editor| Server {
+            editor,
+            shared: Arc::default(),
+            stopped: Arc::clone(&stopped),
+        });
+        let exit = Arc::new(Notify::new());
+        let service = Watched {
+            service,
+            exit: Arc::clone(&exit),
+        };
+        let transport = Transport::new(tokio::io::stdin(), tokio::io::stdout(), socket);
+        tokio::select! {
+            () = transport.serve(service) => {}
+            () = exit.notified() => {
+                // What was answered before goes out.
+                tokio::time::sleep(Duration::from_millis(20)).await;
+            }
+        }
+        u8::from(!stopped.load(Ordering::SeqCst))
+    });
+    // The threads that read standard input and check can't be ended; they end with the process.
+    std::mem::forget(runtime);
+    Ok(status)
+}
+
+/// The service, watched for `exit`: by itself it would live on while standard input is open.
+struct Watched<S> {
+    service: S,
+    exit: Arc<Notify>,
+}
+
+impl<S> Service<Request> for Watched<S>
+where
+    S: Service<Request, Response = Option<Response>>,
+    S::Future: Send + 'static,
+{
+    type Response = Option<Response>;
+    type Error = S::Error;
+    type Future = Pin<Box<dyn Future<Output = std::result::Result<Option<Response>, S::Error>> + Send>>;
+
+    fn poll_ready(&mut self, context: &mut Context<'_>) -> Poll<std::result::Result<(), S::Error>> {
+        self.service.poll_ready(context)
+    }
+
+    fn call(&mut self, request: Request) -> Self::Future {
+        if request.method() == "exit" {
+            self.exit.notify_one();
+        }
+        Box::pin(self.service.call(request))
+    }
+}
+
+#[tower_lsp::async_trait]
+impl LanguageServer for Server {
+    async fn initialize(&self, params: InitializeParams) -> Result<InitializeResult> {
+        let settings = params
+            .initialization_options
+            .and_then(Settings::read)
+            .unwrap_or_default();
+        let mut client = Client::of(&params.capabilities);
+        client.images = settings.images.unwrap_or(client.images);
+        *lock(&self.shared.client) = client;
+        *lock(&self.shared.settings) = settings;
+        #[allow(deprecated)]
+        let root = params.root_uri;
+        let named = params.workspace_folders.unwrap_or_default();
+        let uris = named.into_iter().map(|folder| folder.uri);
+        let mut folders: Vec<Url> = uris.collect();
+        if folders.is_empty() {
+            folders.extend(root);
+        }
+        self.shared.change(|documents| {
+            documents.folders = folders.iter().filter_map(path_of).collect();
+        });
+        Ok(InitializeResult {
+            capabilities: super::capabilities::capabilities(encoding_kind(client.encoding)),
+            server_info: Some(ServerInfo {
+                name: "scorchline".to_owned(),
+                version: Some(env!("CARGO_PKG_VERSION").to_owned()),
+            }),
+        })
+    }
+
+    async fn initialized(&self, _: InitializedParams) {
+        let worker = Worker::new(
+            Arc::clone(&self.shared),
+            self.editor.clone(),
+            tokio::runtime::Handle::current(),
+        );
+        std::thread::spawn(|| worker.run());
+        if lock(&self.shared.client).watches {
+            let editor = self.editor.clone();
+            // A request to the editor inside a handler could wait for the handler.
+            tokio::spawn(async move {
+                let watching = editor.register_capability(vec![super::capabilities::watching()]);
+                let _ = tokio::time::timeout(PATIENCE, watching).await;
+            });
+        }
+    }
+
+    async fn shutdown(&self) -> Result<()> {
+        self.stopped.store(true, Ordering::SeqCst);
+        Ok(())
+    }
+
+    async fn did_open(&self, params: DidOpenTextDocumentParams) {
+        let opened = params.text_document;
+        let Some(path) = path_of(&opened.uri) else { return };
+        self.shared.change(|documents| {
+            let document = Document {
+                uri: opened.uri,
+                version: opened.version,
+                changed: documents.generation,
+                buffer: Buffer::new(&opened.text),
+                edited: None,
+            };
+            documents.open.insert(path, document);
+        });
+    }
+
+    async fn did_change(&self, params: DidChangeTextDocumentParams) {
+        let Some(path) = path_of(&params.text_document.uri) else {
+            return;
+        };
+        let encoding = lock(&self.shared.client).encoding;
+        self.shared.change(|documents| {
+            documents.change(&path, params.text_document.version, params.content_changes, encoding);
+        });
+    }
+
+    async fn did_save(&self, params: DidSaveTextDocumentParams) {
+        let Some(path) = path_of(&params.text_document.uri) else {
+            return;
+        };
+        self.shared.change(|documents| {
+            if let Some(document) = documents.open.get_mut(&path) {
+                document.edited = None;
+            }
+        });
+    }
+
+    async fn did_close(&self, params: DidCloseTextDocumentParams) {
+        let Some(path) = path_of(&params.text_document.uri) else {
+            return;
+        };
+        self.shared.change(|documents| {
+            documents.open.remove(&path);
+        });
+    }
+
+    async fn did_change_watched_files(&self, _: DidChangeWatchedFilesParams) {
+        self.shared.change(|documents| documents.listing += 1);
+    }
+
+    async fn did_change_workspace_folders(&self, params: DidChangeWorkspaceFoldersParams) {
+        let paths = |folders: Vec<WorkspaceFolder>| -> Vec<_> {
+            folders.iter().filter_map(|folder| path_of(&folder.uri)).collect()
+        };
+        let (added, removed) = (paths(params.event.added), paths(params.event.removed));
+        self.shared.change(|documents| {
+            documents.folders.retain(|folder| !removed.contains(folder));
+            documents.folders.extend(added);
+            documents.listing += 1;
+        });
+    }
+
+    async fn did_change_configuration(&self, params: DidChangeConfigurationParams) {
+        let Some(settings) = Settings::read(params.settings) else {
+            return;
+        };
+        *lock(&self.shared.settings) = settings;
+        if let Some(images) = settings.images {
+            lock(&self.shared.client).images = images;
+        }
+        self.shared.change(|_| {});
+    }
+}
