@@ -11,6 +11,7 @@ mod documents;
 pub mod folders;
 mod overlay;
 mod publish;
+mod requests;
 mod server;
 mod settings;
 mod shared;

@@ -14,6 +14,7 @@ use tower_lsp::{Client as Editor, LanguageServer, LspService, Server as Transpor
 use tower_service::Service;
 
 use crate::lsp::documents::{Document, path_of};
+use crate::lsp::requests::{ask, ask_all, links, names, outline};
 use crate::lsp::settings::{Client, Settings, encoding_kind};
 use crate::lsp::shared::{Shared, lock};
 use crate::lsp::worker::Worker;
@@ -216,5 +217,59 @@ impl LanguageServer for Server {
             lock(&self.shared.client).images = images;
         }
         self.shared.change(|_| {});
+    }
+
+    async fn goto_definition(&self, params: GotoDefinitionParams) -> Result<Option<GotoDefinitionResponse>> {
+        let at = params.text_document_position_params;
+        let found = ask(&self.shared, &at.text_document.uri, move |asked| names::definition(asked, at.position));
+        Ok(found.await?.map(GotoDefinitionResponse::Array))
+    }
+
+    async fn references(&self, params: ReferenceParams) -> Result<Option<Vec<Location>>> {
+        let (at, declaration) = (params.text_document_position, params.context.include_declaration);
+        ask(&self.shared, &at.text_document.uri, move |asked| {
+            names::references(asked, at.position, declaration)
+        })
+        .await
+    }
+
+    async fn prepare_rename(&self, at: TextDocumentPositionParams) -> Result<Option<PrepareRenameResponse>> {
+        ask(&self.shared, &at.text_document.uri, move |asked| names::prepare(asked, at.position)).await
+    }
+
+    async fn rename(&self, params: RenameParams) -> Result<Option<WorkspaceEdit>> {
+        let at = params.text_document_position;
+        let edit = ask(&self.shared, &at.text_document.uri, move |asked| {
+            Some(names::rename(asked, at.position, &params.new_name))
+        });
+        edit.await?.unwrap_or(Ok(None))
+    }
+
+    async fn document_symbol(&self, params: DocumentSymbolParams) -> Result<Option<DocumentSymbolResponse>> {
+        ask(&self.shared, &params.text_document.uri, outline::document).await
+    }
+
+    async fn symbol(&self, params: WorkspaceSymbolParams) -> Result<Option<Vec<SymbolInformation>>> {
+        ask_all(&self.shared, move |snapshot| outline::workspace(snapshot, &params.query)).await
+    }
+
+    async fn folding_range(&self, params: FoldingRangeParams) -> Result<Option<Vec<FoldingRange>>> {
+        ask(&self.shared, &params.text_document.uri, outline::folds).await
+    }
+
+    async fn selection_range(&self, params: SelectionRangeParams) -> Result<Option<Vec<SelectionRange>>> {
+        ask(&self.shared, &params.text_document.uri, move |asked| {
+            outline::selections(asked, &params.positions)
+        })
+        .await
+    }
+
+    async fn code_lens(&self, params: CodeLensParams) -> Result<Option<Vec<CodeLens>>> {
+        ask(&self.shared, &params.text_document.uri, outline::lenses).await
+    }
+
+    async fn document_link(&self, params: DocumentLinkParams) -> Result<Option<Vec<DocumentLink>>> {
+        let folders = self.shared.documents().folders.clone();
+        ask(&self.shared, &params.text_document.uri, move |asked| links::links(asked, folders)).await
     }
 }
