@@ -66,6 +66,8 @@ pub struct Design {
     pub members: Arc<Vec<MemberAt>>,
     /// Members by mark; the first that carries it.
     pub marks: Arc<FxHashMap<String, MemberAt>>,
+    /// Whether a mark stands twice.
+    pub repeated: bool,
     /// Groups by name: file and index there.
     pub groups: FxHashMap<String, (FileIndex, usize)>,
     /// Products by name: file and index there.

@@ -124,6 +124,7 @@ fn assemble(sources: &mut Sources<'_>, head: Arc<SourceFile>, before: Option<&Ar
         files: vec![Arc::clone(&head)],
         members: Arc::default(),
         marks: Arc::default(),
+        repeated: false,
         groups: FxHashMap::default(),
         products: FxHashMap::default(),
         fires: FxHashMap::default(),
@@ -253,6 +254,7 @@ fn index(design: &mut Design, before: Option<&Design>) {
     if let Some(before) = before.filter(|before| marked_alike(before, design)) {
         design.members = Arc::clone(&before.members);
         design.marks = Arc::clone(&before.marks);
+        design.repeated = before.repeated;
         return;
     }
     let mut members = Vec::new();
@@ -262,6 +264,7 @@ fn index(design: &mut Design, before: Option<&Design>) {
             let at = MemberAt { file, index };
             members.push(at);
             if let Some(mark) = item.value().mark.value() {
+                design.repeated |= marks.contains_key(mark);
                 marks.entry(mark.clone()).or_insert(at);
             }
         }

@@ -8,7 +8,6 @@ use std::sync::Arc;
 
 use jiff::civil::Date;
 use rayon::prelude::*;
-use rustc_hash::FxHashSet;
 
 use super::Checked;
 use super::around::{self, Around};
@@ -18,7 +17,9 @@ use crate::analysis::inputs::{Inputs, Names};
 use crate::analysis::memo::Memo;
 use crate::analysis::names::{Sections, lookup_options};
 use crate::analysis::outcome::Outcome;
+use crate::design::model::member::Member;
 use crate::findings::finding::{Finding, Severity};
+use crate::findings::uses::{Uses, is_linked};
 use crate::findings::{self, departures, reading};
 use crate::text::Span;
 
@@ -37,8 +38,8 @@ pub struct Live {
     outside: Vec<Finding>,
     /// Findings between members, by member.
     between: Vec<Finding>,
-    /// The marks that anything is said to be supported by.
-    supports: FxHashSet<String>,
+    /// What the members use.
+    uses: Uses,
     on: Date,
 }
 
@@ -105,7 +106,7 @@ impl Live {
         let mut live = Self {
             outside: Vec::new(),
             between: Vec::new(),
-            supports: FxHashSet::default(),
+            uses: Uses::default(),
             outcomes,
             own,
             on,
@@ -113,15 +114,15 @@ impl Live {
         };
         reading::outside(&design, &mut sections(), &mut live.outside);
         let reused = kept
-            .filter(|kept| around == Around::Same && kept.ties_hold(&live))
-            .map(|kept| kept.between(&design));
-        if let Some((between, supports)) = reused {
+            .filter(|_| around == Around::Same)
+            .and_then(|kept| Some((kept.uses(&live)?, kept.between(&design))));
+        if let Some((uses, between)) = reused {
+            live.uses = uses;
             live.between = between;
-            live.supports = supports;
         } else {
-            findings::between(&design, &live.outcomes, &mut live.between);
+            live.uses = Uses::of(&design);
+            findings::between(&design, &live.outcomes, &live.uses, &mut live.between);
             live.between.sort_by_key(|finding| finding.member);
-            live.supports = supports(&design);
         }
         Some(live)
     }
@@ -362,37 +363,53 @@ impl<'a> Kept<'a> {
         }
     }
 
-    /// Whether the findings between members are those of the older version.
-    fn ties_hold(&self, live: &Live) -> bool {
-        let (old, new) = (&self.older.design, &live.design);
-        Arc::ptr_eq(&old.marks, &new.marks)
-            && self.files.iter().enumerate().all(|(file, strip)| {
-                (strip.before..strip.new - strip.behind).all(|index| {
-                    let order = strip.first + index;
-                    let item = &old.files[file].members[index];
-                    let (a, b) = (item.value(), new.files[file].members[index].value());
-                    let mark = a.mark.value();
-                    let rests = mark.is_some_and(|mark| self.older.supports.contains(mark));
-                    let path = &old.files[file].path;
-                    a.broken == b.broken
-                        && a.keys.group == b.keys.group
-                        && a.keys.supported_by == b.keys.supported_by
-                        && a.keys.steadies == b.keys.steadies
-                        && a.keys.protection == b.keys.protection
-                        && a.keys.period == b.keys.period
-                        && a.keys.fire == b.keys.fire
-                        && (!rests || self.older.outcomes[order] == live.outcomes[order])
-                        && !self
-                            .older
-                            .between
-                            .iter()
-                            .any(|tie| own::touches(tie, path, item.piece.span))
-                })
-            })
+    /// What the members use now, where the findings between members are those of the older version.
+    fn uses(&self, live: &Live) -> Option<Uses> {
+        let (old, new) = (&*self.older.design, &*live.design);
+        if !Arc::ptr_eq(&old.marks, &new.marks) {
+            return None;
+        }
+        let mut uses = self.older.uses.clone();
+        for (file, strip) in self.files.iter().enumerate() {
+            for index in strip.before..strip.new - strip.behind {
+                let at = MemberAt { file, index };
+                let order = strip.first + index;
+                let (a, b) = (old.member(at), new.member(at));
+                let alike = self.older.outcomes[order] == live.outcomes[order];
+                let path = &old.files[file].path;
+                let touched = self
+                    .older
+                    .between
+                    .iter()
+                    .any(|tie| own::touches(tie, path, a.piece.span));
+                if touched || !self.tied_alike((old, a.value()), (new, b.value()), alike) {
+                    return None;
+                }
+                uses.remove(old, a.value());
+                uses.add(new, b.value());
+            }
+        }
+        uses.alike(&self.older.uses).then_some(uses)
+    }
+
+    /// Whether nothing has changed in a member that others could tell, where it has to do with others.
+    fn tied_alike(&self, (old, a): (&Design, &Member), (new, b): (&Design, &Member), alike: bool) -> bool {
+        let rests = a.mark.value().is_some_and(|mark| self.older.uses.support(mark));
+        if !rests && !is_linked(old, a) && !is_linked(new, b) {
+            return true;
+        }
+        a.broken == b.broken
+            && a.keys.group == b.keys.group
+            && a.keys.supported_by == b.keys.supported_by
+            && a.keys.steadies == b.keys.steadies
+            && a.keys.protection == b.keys.protection
+            && a.keys.period == b.keys.period
+            && a.keys.fire == b.keys.fire
+            && (!rests || alike)
     }
 
     /// The findings between members of the older version, at their places now.
-    fn between(&self, design: &Design) -> (Vec<Finding>, FxHashSet<String>) {
+    fn between(&self, design: &Design) -> Vec<Finding> {
         let mut between = self.older.between.clone();
         for (file, strip) in self.files.iter().enumerate() {
             let (old, new) = (&self.older.design.files[file], &design.files[file]);
@@ -405,19 +422,6 @@ impl<'a> Kept<'a> {
                 own::moved_in(finding, &old.path, extent, by);
             }
         }
-        (between, self.older.supports.clone())
+        between
     }
-}
-
-/// The marks that anything is said to be supported by.
-fn supports(design: &Design) -> FxHashSet<String> {
-    let members = design.members.iter().map(|at| &design.member(*at).value().keys);
-    let groups = design
-        .files
-        .iter()
-        .flat_map(|file| &file.groups)
-        .map(|item| &item.value().keys);
-    let keys = members.chain(groups).chain([&design.head().defaults]);
-    let names = keys.filter_map(|keys| keys.supported_by.value()).flatten();
-    names.map(|name| name.value.clone()).collect()
 }

@@ -11,6 +11,7 @@ pub mod fire;
 pub mod insert;
 pub mod reading;
 pub mod registry;
+pub mod uses;
 
 use std::sync::Arc;
 
@@ -18,6 +19,7 @@ use jiff::civil::Date;
 
 use self::context::Context;
 use self::finding::Finding;
+use self::uses::Uses;
 use crate::analysis::design::{Design, MemberAt};
 use crate::analysis::outcome::Outcome;
 
@@ -29,8 +31,10 @@ pub fn member(design: &Design, at: MemberAt, outcome: &Outcome, on: Date, out: &
     fire::member(&mut cx);
 }
 
-/// Every finding between members; outcomes in the order of the design's members.
-pub fn between(design: &Design, outcomes: &[Arc<Outcome>], out: &mut Vec<Finding>) {
-    reading::design(design, out);
-    design_intent::design(design, outcomes, out);
+/// Every finding between members; outcomes in the order of the design's members, and what those use.
+pub fn between(design: &Design, outcomes: &[Arc<Outcome>], uses: &Uses, out: &mut Vec<Finding>) {
+    reading::design(design, uses, out);
+    if uses.any_linked() {
+        design_intent::design(design, outcomes, out);
+    }
 }

@@ -221,7 +221,9 @@ impl LanguageServer for Server {
 
     async fn goto_definition(&self, params: GotoDefinitionParams) -> Result<Option<GotoDefinitionResponse>> {
         let at = params.text_document_position_params;
-        let found = ask(&self.shared, &at.text_document.uri, move |asked| names::definition(asked, at.position));
+        let found = ask(&self.shared, &at.text_document.uri, move |asked| {
+            names::definition(asked, at.position)
+        });
         Ok(found.await?.map(GotoDefinitionResponse::Array))
     }
 
@@ -234,7 +236,10 @@ impl LanguageServer for Server {
     }
 
     async fn prepare_rename(&self, at: TextDocumentPositionParams) -> Result<Option<PrepareRenameResponse>> {
-        ask(&self.shared, &at.text_document.uri, move |asked| names::prepare(asked, at.position)).await
+        ask(&self.shared, &at.text_document.uri, move |asked| {
+            names::prepare(asked, at.position)
+        })
+        .await
     }
 
     async fn rename(&self, params: RenameParams) -> Result<Option<WorkspaceEdit>> {
@@ -250,7 +255,10 @@ impl LanguageServer for Server {
     }
 
     async fn symbol(&self, params: WorkspaceSymbolParams) -> Result<Option<Vec<SymbolInformation>>> {
-        ask_all(&self.shared, move |snapshot| outline::workspace(snapshot, &params.query)).await
+        ask_all(&self.shared, move |snapshot| {
+            outline::workspace(snapshot, &params.query)
+        })
+        .await
     }
 
     async fn folding_range(&self, params: FoldingRangeParams) -> Result<Option<Vec<FoldingRange>>> {
@@ -270,6 +278,9 @@ impl LanguageServer for Server {
 
     async fn document_link(&self, params: DocumentLinkParams) -> Result<Option<Vec<DocumentLink>>> {
         let folders = self.shared.documents().folders.clone();
-        ask(&self.shared, &params.text_document.uri, move |asked| links::links(asked, folders)).await
+        ask(&self.shared, &params.text_document.uri, move |asked| {
+            links::links(asked, folders)
+        })
+        .await
     }
 }

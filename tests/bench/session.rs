@@ -1,15 +1,21 @@
 //! Steps of a keystroke.
+use scorchline::analysis::files::{Files, PathTrouble, ReadTrouble};
+use scorchline::check::session::Session;
 use std::path::{Path, PathBuf};
 use std::sync::{Arc, Mutex};
 use std::time::Instant;
-use scorchline::analysis::files::{Files, PathTrouble, ReadTrouble};
-use scorchline::check::session::Session;
 
 struct Two(Mutex<Arc<str>>, Arc<str>);
 impl Files for Two {
-    fn follow(&self, _: &Path, r: &str) -> Result<PathBuf, PathTrouble> { Ok(PathBuf::from(r)) }
+    fn follow(&self, _: &Path, r: &str) -> Result<PathBuf, PathTrouble> {
+        Ok(PathBuf::from(r))
+    }
     fn read(&self, p: &Path) -> Result<Arc<str>, ReadTrouble> {
-        Ok(if p.to_str().unwrap().contains("protection") { self.1.clone() } else { self.0.lock().unwrap().clone() })
+        Ok(if p.to_str().unwrap().contains("protection") {
+            self.1.clone()
+        } else {
+            self.0.lock().unwrap().clone()
+        })
     }
 }
 fn main() {
@@ -23,13 +29,17 @@ fn main() {
     session.check(&files, &paths, on, &|| false).unwrap();
     println!("cold {:?}", t.elapsed());
     let mid = text.len() / 2;
-    let at = mid + text[mid..].find("IPE 300").unwrap_or(0) + 7;
-    for i in 0..20 {
+    let at = mid + text[mid..].find("}\n").unwrap_or(0) + 1;
+    for i in 0..200 {
         let mut new = text.clone();
-        if i % 2 == 0 { new.insert(at, 'x'); }
+        if i % 2 == 0 {
+            new.insert(at, 'x');
+        }
         *files.0.lock().unwrap() = Arc::from(new.as_str());
         let t = Instant::now();
         session.check(&files, &paths, on, &|| false).unwrap();
-        eprintln!("key {:?}", t.elapsed());
+        if i > 190 {
+            eprintln!("key {:?}", t.elapsed());
+        }
     }
 }

@@ -2,8 +2,6 @@
 
 use std::sync::Arc;
 
-use rustc_hash::FxHashMap;
-
 use crate::analysis::design::{Design, MemberAt};
 use crate::design::inherit::Origin;
 use crate::findings::finding::{Finding, Note, Place};
@@ -32,7 +30,6 @@ pub(super) struct Links<'a> {
 
 impl<'a> Links<'a> {
     pub fn of(design: &'a Design) -> Self {
-        let index: FxHashMap<MemberAt, usize> = design.members.iter().enumerate().map(|(n, at)| (*at, n)).collect();
         let mut list = Vec::new();
         let mut first = vec![0];
         for (from, at) in design.members.iter().enumerate() {
@@ -40,10 +37,11 @@ impl<'a> Links<'a> {
                 .inherited(design.member(*at).value())
                 .get(|keys| &keys.supported_by);
             for name in found.value().into_iter().flatten() {
-                let to = design.marks.get(&name.value).and_then(|at| index.get(at));
+                let to = design.marks.get(&name.value);
+                let to = to.and_then(|at| design.members.binary_search(at).ok());
                 list.extend(to.map(|to| Link {
                     from,
-                    to: *to,
+                    to,
                     name,
                     origin: found.origin,
                 }));

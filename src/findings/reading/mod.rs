@@ -37,6 +37,7 @@ use crate::findings::context::Context;
 use crate::findings::finding::{Finding, Fix, FixEdit, Note, Place};
 use crate::findings::insert;
 use crate::findings::registry::Declaration;
+use crate::findings::uses::Uses;
 use crate::syntax::{ErrorKind, SyntaxError};
 
 /// What is declared here: slips of the files, which nobody can agree to leave.
@@ -307,9 +308,11 @@ pub(super) fn member(cx: &mut Context<'_>) {
 }
 
 /// Marks that stand twice or nowhere, and what nobody uses.
-pub(super) fn design(design: &Design, out: &mut Vec<Finding>) {
-    duplicate_mark::check(design, out);
-    unknown_mark::check(design, out);
-    unused_group::check(design, out);
-    unused_product::check(design, out);
+pub(super) fn design(design: &Design, uses: &Uses, out: &mut Vec<Finding>) {
+    if design.repeated {
+        duplicate_mark::check(design, out);
+    }
+    unknown_mark::check(design, uses.any_linked(), out);
+    unused_group::check(design, uses, out);
+    unused_product::check(design, uses, out);
 }

@@ -26,9 +26,10 @@ pub static DECLARATION: Declaration = Declaration {
 const SOUGHT: usize = 20;
 
 /// Marks under `supported by` and `steadies` that no member carries: of members, and once of groups and defaults.
-pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
+pub(super) fn check(design: &Design, linked: bool, out: &mut Vec<Finding>) {
     let mut search = Search { design, sought: 0, out };
-    for at in design.members.iter() {
+    let members = if linked { design.members.as_slice() } else { &[] };
+    for at in members {
         let item = design.member(*at);
         let mark = item.value().mark.value().map(String::as_str);
         let who = mark.unwrap_or("this member");

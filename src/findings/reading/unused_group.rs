@@ -3,7 +3,7 @@
 use crate::analysis::design::Design;
 use crate::findings::finding::{Finding, Place, Severity};
 use crate::findings::registry::Declaration;
-use rustc_hash::FxHashSet;
+use crate::findings::uses::Uses;
 use std::sync::Arc;
 
 /// What is known of it before any design is read.
@@ -26,16 +26,11 @@ members:
 };
 
 /// Groups that no member names.
-pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
-    let mut used: FxHashSet<&str> = FxHashSet::default();
-    for at in design.members.iter() {
-        let keys = design.inherited(design.member(*at).value());
-        used.extend(keys.get(|keys| &keys.group).value().map(String::as_str));
-    }
+pub(super) fn check(design: &Design, uses: &Uses, out: &mut Vec<Finding>) {
     for file in &design.files {
         for item in &file.groups {
             let name = &item.value().name;
-            if !used.contains(name.value.as_str()) {
+            if !uses.group(&name.value) {
                 let message = format!("no member is of the group `{}`", name.value);
                 let place = Place {
                     path: Arc::clone(&file.path),

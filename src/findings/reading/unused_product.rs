@@ -3,7 +3,7 @@
 use crate::analysis::design::Design;
 use crate::findings::finding::{Finding, Place, Severity};
 use crate::findings::registry::Declaration;
-use rustc_hash::FxHashSet;
+use crate::findings::uses::Uses;
 use std::sync::Arc;
 
 /// What is known of it before any design is read.
@@ -31,21 +31,11 @@ products:
 };
 
 /// Products of the design's libraries that no member uses.
-pub(super) fn check(design: &Design, out: &mut Vec<Finding>) {
-    let mut used: FxHashSet<&str> = FxHashSet::default();
-    for at in design.members.iter() {
-        let keys = design.inherited(design.member(*at).value());
-        let stated = keys.get(|keys| &keys.protection).value();
-        used.extend(
-            stated
-                .and_then(|stated| stated.product.as_ref())
-                .map(|name| name.value.as_str()),
-        );
-    }
+pub(super) fn check(design: &Design, uses: &Uses, out: &mut Vec<Finding>) {
     for file in &design.files {
         for item in &file.products {
             let name = &item.value().name;
-            if !used.contains(name.value.as_str()) {
+            if !uses.product(&name.value) {
                 let message = format!("no member uses the product `{}`", name.value);
                 let place = Place {
                     path: Arc::clone(&file.path),

@@ -62,7 +62,9 @@ pub async fn ask<T: Send + 'static>(
 ) -> Result<Option<T>> {
     let Some(path) = path_of(uri) else { return Ok(None) };
     let settings = *lock(&shared.settings);
-    let Some(snapshot) = shared.current().await else { return Ok(None) };
+    let Some(snapshot) = shared.current().await else {
+        return Ok(None);
+    };
     let found = snapshot.find(&path).map(|(live, file)| (Arc::clone(live), file));
     let Some((live, file)) = found else { return Ok(None) };
     fenced(move || {
@@ -86,7 +88,9 @@ pub async fn ask_all<T: Send + 'static>(
     shared: &Shared,
     answer: impl FnOnce(&Arc<Snapshot>) -> Option<T> + Send + 'static,
 ) -> Result<Option<T>> {
-    let Some(snapshot) = shared.current().await else { return Ok(None) };
+    let Some(snapshot) = shared.current().await else {
+        return Ok(None);
+    };
     fenced(move || answer(&snapshot)).await
 }
 

@@ -62,7 +62,12 @@ fn nested(symbol: Symbol, lines: &Lines) -> DocumentSymbol {
 type Flat<'a> = dyn FnMut(String, Option<String>, symbols::SymbolKind, crate::text::Span) + 'a;
 
 fn flatten(symbol: Symbol, container: Option<&str>, out: &mut Flat<'_>) {
-    out(symbol.name.clone(), container.map(str::to_owned), symbol.kind, symbol.span);
+    out(
+        symbol.name.clone(),
+        container.map(str::to_owned),
+        symbol.kind,
+        symbol.span,
+    );
     for child in symbol.children {
         flatten(child, Some(&symbol.name), out);
     }
@@ -90,10 +95,12 @@ pub fn workspace(snapshot: &Arc<Snapshot>, query: &str) -> Option<Vec<SymbolInfo
     let designs = snapshot.workspace.designs.iter();
     let designs = designs.map(|live| (&*live.design, live.outcomes.as_slice()));
     let mut lines = AllLines::of(snapshot);
-    let found = symbols::workspace(designs, query, MOST).into_iter().filter_map(|symbol| {
-        let location = lines.location(&symbol.place)?;
-        Some(information(symbol.name, symbol.detail, symbol.kind, location))
-    });
+    let found = symbols::workspace(designs, query, MOST)
+        .into_iter()
+        .filter_map(|symbol| {
+            let location = lines.location(&symbol.place)?;
+            Some(information(symbol.name, symbol.detail, symbol.kind, location))
+        });
     Some(found.collect())
 }
 
@@ -102,7 +109,11 @@ pub fn folds(asked: &Asked) -> Option<Vec<FoldingRange>> {
     let folds = folding::folding(&asked.view()).into_iter().map(|fold| {
         let range = asked.lines.range(fold.span);
         // A fold that ends where a line begins ends with the line before.
-        let end = if range.end.character == 0 { range.end.line.saturating_sub(1) } else { range.end.line };
+        let end = if range.end.character == 0 {
+            range.end.line.saturating_sub(1)
+        } else {
+            range.end.line
+        };
         FoldingRange {
             start_line: range.start.line,
             end_line: end.max(range.start.line),
@@ -118,12 +129,21 @@ pub fn selections(asked: &Asked, positions: &[Position]) -> Option<Vec<Selection
     let view = asked.view();
     let around = |position: &Position| {
         let spans = selection::selection(&view, asked.offset(*position));
-        let outermost = spans.into_iter().rev().fold(None, |parent: Option<Box<SelectionRange>>, span| {
-            let range = asked.lines.range(span);
-            Some(Box::new(SelectionRange { range, parent }))
-        });
+        let outermost = spans
+            .into_iter()
+            .rev()
+            .fold(None, |parent: Option<Box<SelectionRange>>, span| {
+                let range = asked.lines.range(span);
+                Some(Box::new(SelectionRange { range, parent }))
+            });
         let here = tower_lsp::lsp_types::Range::new(*position, *position);
-        outermost.map_or(SelectionRange { range: here, parent: None }, |around| *around)
+        outermost.map_or(
+            SelectionRange {
+                range: here,
+                parent: None,
+            },
+            |around| *around,
+        )
     };
     Some(positions.iter().map(around).collect())
 }
