@@ -34,6 +34,8 @@ pub struct Live {
     /// Outcomes in the order of the design's members.
     pub outcomes: Vec<Arc<Outcome>>,
     own: Vec<Arc<Own>>,
+    /// The members of which there is anything to say by themselves, by their place in the order.
+    loud: Vec<usize>,
     /// Findings outside the members.
     outside: Vec<Finding>,
     /// Findings between members, by member.
@@ -76,53 +78,75 @@ impl Live {
             options: lookup_options(design.basis()),
         };
         let sections = || Sections::of(design.basis());
-        let one = |sections: &mut Sections, order: usize| {
-            let at = design.members[order];
-            let known = kept.as_ref().and_then(|kept| kept.old(at).map(|old| (kept.older, old)));
-            if let Some((older, old)) = known {
-                let (outcome, own) = (&older.outcomes[old], &older.own[old]);
-                if around == Around::Same || own.local {
-                    return Some((Arc::clone(outcome), Arc::clone(own)));
-                }
-                let own = Own::of(&design, at, outcome, on, sections);
-                return Some((Arc::clone(outcome), Arc::new(own)));
-            }
+        let fresh = |sections: &mut Sections, order: usize| {
             if cancelled() {
                 return None;
             }
+            let at = design.members[order];
             let outcome = memo.outcome(Inputs::of(design.member(at).value(), &names));
             let own = Own::of(&design, at, &outcome, on, sections);
             Some((outcome, Arc::new(own)))
         };
         let count = design.members.len();
-        let fresh = kept.as_ref().map_or(count, |kept| kept.fresh);
-        let members: Option<Vec<_>> = if fresh <= FEW && around != Around::Alike {
+        let mut outcomes = Vec::with_capacity(count);
+        let mut own = Vec::with_capacity(count);
+        let mut loud = Vec::new();
+        for strip in strips(kept.as_ref(), &design) {
+            let first = outcomes.len();
+            if let Some((older, old)) = strip.kept {
+                outcomes.extend_from_slice(&older.outcomes[old.clone()]);
+                own.extend_from_slice(&older.own[old.clone()]);
+                let voices = older.loud.partition_point(|order| *order < old.start);
+                let voices = older.loud[voices..].iter().take_while(|order| **order < old.end);
+                loud.extend(voices.map(|order| order - old.start + first));
+                continue;
+            }
+            let orders = first..first + strip.fresh;
+            let checked: Option<Vec<_>> = if strip.fresh <= FEW {
+                let mut sections = sections();
+                orders.map(|order| fresh(&mut sections, order)).collect()
+            } else {
+                orders.into_par_iter().map_init(sections, fresh).collect()
+            };
+            for (outcome, mine) in checked? {
+                if !mine.is_silent() {
+                    loud.push(own.len());
+                }
+                outcomes.push(outcome);
+                own.push(mine);
+            }
+        }
+        if around == Around::Alike {
+            // What points at the surroundings may point elsewhere now.
             let mut sections = sections();
-            (0..count).map(|order| one(&mut sections, order)).collect()
-        } else {
-            (0..count).into_par_iter().map_init(sections, one).collect()
-        };
-        let (outcomes, own): (Vec<_>, Vec<_>) = members?.into_iter().unzip();
+            for order in &loud {
+                let (at, outcome) = (design.members[*order], &outcomes[*order]);
+                if !own[*order].local {
+                    own[*order] = Arc::new(Own::of(&design, at, outcome, on, &mut sections));
+                }
+            }
+        }
         let mut live = Self {
             outside: Vec::new(),
             between: Vec::new(),
             uses: Uses::default(),
             outcomes,
             own,
+            loud,
             on,
             design: Arc::clone(&design),
         };
         reading::outside(&design, &mut sections(), &mut live.outside);
-        let reused = kept
-            .filter(|_| around == Around::Same)
-            .and_then(|kept| Some((kept.uses(&live)?, kept.between(&design))));
-        if let Some((uses, between)) = reused {
-            live.uses = uses;
-            live.between = between;
-        } else {
-            live.uses = Uses::of(&design);
-            findings::between(&design, &live.outcomes, &live.uses, &mut live.between);
-            live.between.sort_by_key(|finding| finding.member);
+        let kept = kept.filter(|_| around == Around::Same);
+        live.uses = kept
+            .as_ref()
+            .map_or_else(|| Uses::of(&design), |kept| kept.uses(&design));
+        match kept.filter(|kept| kept.ties_hold(&live)) {
+            Some(kept) => live.between = kept.between(&design),
+            None => {
+                findings::between(&design, &live.outcomes, &live.uses, &mut live.between);
+                live.between.sort_by_key(|finding| finding.member);
+            }
         }
         Some(live)
     }
@@ -212,11 +236,12 @@ impl Live {
         let mut shown: Vec<Shown<'_>> = outside.map(still).collect();
         let first = self.design.members.partition_point(|at| at.file < file);
         let last = self.design.members.partition_point(|at| at.file <= file);
-        let some = !self.between.is_empty();
-        for order in first..last {
-            let own = &self.own[order];
+        let from = self.loud.partition_point(|order| *order < first);
+        let to = self.loud.partition_point(|order| *order < last);
+        for order in &self.loud[from..to] {
+            let (at, own) = (self.design.members[*order], &self.own[*order]);
             if own.settled.is_some() {
-                let (open, _) = self.settled(order);
+                let (open, _) = self.settled(*order);
                 shown.extend(open.into_iter().map(|finding| Shown {
                     finding: Cow::Owned(finding),
                     member: None,
@@ -225,20 +250,21 @@ impl Live {
                 }));
                 continue;
             }
-            let at = self.design.members[order];
-            if !own.slips.is_empty() || !own.found.is_empty() {
-                let (extent, by) = self.moved(at, own);
-                shown.extend(own.slips.iter().chain(&own.found).map(|finding| Shown {
-                    finding: Cow::Borrowed(finding),
-                    member: Some(at),
-                    extent,
-                    by,
-                }));
-            }
-            if some {
-                shown.extend(self.between_of(at).iter().map(still));
-            }
+            let (extent, by) = self.moved(at, own);
+            shown.extend(own.slips.iter().chain(&own.found).map(|finding| Shown {
+                finding: Cow::Borrowed(finding),
+                member: Some(at),
+                extent,
+                by,
+            }));
         }
+        // Of members with departures they are settled above.
+        let tied = self.between.iter().filter(|finding| {
+            let order = finding.member.filter(|at| at.file == file);
+            let order = order.and_then(|at| self.design.members.binary_search(&at).ok());
+            order.is_some_and(|order| self.own[order].settled.is_none())
+        });
+        shown.extend(tied.map(still));
         shown
     }
 
@@ -303,13 +329,37 @@ impl Shown<'_> {
     }
 }
 
+/// A run of members: kept from an older version, or fresh.
+struct Run<'a> {
+    kept: Option<(&'a Live, std::ops::Range<usize>)>,
+    fresh: usize,
+}
+
+/// The runs of a design's members, in their order.
+fn strips<'a>(kept: Option<&Kept<'a>>, design: &Design) -> Vec<Run<'a>> {
+    let Some(kept) = kept else {
+        let fresh = design.members.len();
+        return vec![Run { kept: None, fresh }];
+    };
+    let runs = kept.files.iter().flat_map(|strip| {
+        let (older, first) = (kept.older, strip.first);
+        let behind = first + strip.old - strip.behind..first + strip.old;
+        let fresh = strip.new - strip.before - strip.behind;
+        [
+            (Some((older, first..first + strip.before)), 0),
+            (None, fresh),
+            (Some((older, behind)), 0),
+        ]
+    });
+    runs.map(|(kept, fresh)| Run { kept, fresh }).collect()
+}
+
 /// What an older version of a design leaves: the members at the beginning and at the end of each file that were not read
 /// anew.
 struct Kept<'a> {
     older: &'a Live,
     /// Of each file: members that stand as they stood, those behind a change, and how many there were and are.
     files: Vec<Strip>,
-    fresh: usize,
 }
 
 struct Strip {
@@ -347,49 +397,49 @@ impl<'a> Kept<'a> {
             strip
         });
         let files: Vec<Strip> = strips.collect();
-        let fresh = files.iter().map(|strip| strip.new - strip.before - strip.behind).sum();
-        Self { older, files, fresh }
+        Self { older, files }
     }
 
-    /// The place in the older order of a member that was not read anew.
-    fn old(&self, at: MemberAt) -> Option<usize> {
-        let strip = &self.files[at.file];
-        if at.index < strip.before {
-            Some(strip.first + at.index)
-        } else if at.index >= strip.new - strip.behind {
-            Some(strip.first + at.index + strip.old - strip.new)
-        } else {
-            None
-        }
-    }
-
-    /// What the members use now, where the findings between members are those of the older version.
-    fn uses(&self, live: &Live) -> Option<Uses> {
-        let (old, new) = (&*self.older.design, &*live.design);
-        if !Arc::ptr_eq(&old.marks, &new.marks) {
-            return None;
-        }
+    /// What the members use now.
+    fn uses(&self, design: &Design) -> Uses {
         let mut uses = self.older.uses.clone();
         for (file, strip) in self.files.iter().enumerate() {
-            for index in strip.before..strip.new - strip.behind {
+            let old = &*self.older.design;
+            for item in &old.files[file].members[strip.before..strip.old - strip.behind] {
+                uses.remove(old, item.value());
+            }
+            for item in &design.files[file].members[strip.before..strip.new - strip.behind] {
+                uses.add(design, item.value());
+            }
+        }
+        uses
+    }
+
+    /// Whether the findings between members are those of the older version.
+    fn ties_hold(&self, live: &Live) -> bool {
+        let (old, new) = (&*self.older.design, &*live.design);
+        if !live.uses.alike(&self.older.uses) {
+            return false;
+        }
+        if !Arc::ptr_eq(&old.marks, &new.marks) {
+            let free = |design: &Design, uses: &Uses| !design.repeated && !uses.any_linked();
+            return free(old, &self.older.uses) && free(new, &live.uses) && self.older.between.iter().all(is_free);
+        }
+        self.files.iter().enumerate().all(|(file, strip)| {
+            (strip.before..strip.new - strip.behind).all(|index| {
                 let at = MemberAt { file, index };
                 let order = strip.first + index;
                 let (a, b) = (old.member(at), new.member(at));
                 let alike = self.older.outcomes[order] == live.outcomes[order];
                 let path = &old.files[file].path;
-                let touched = self
-                    .older
-                    .between
-                    .iter()
-                    .any(|tie| own::touches(tie, path, a.piece.span));
-                if touched || !self.tied_alike((old, a.value()), (new, b.value()), alike) {
-                    return None;
-                }
-                uses.remove(old, a.value());
-                uses.add(new, b.value());
-            }
-        }
-        uses.alike(&self.older.uses).then_some(uses)
+                self.tied_alike((old, a.value()), (new, b.value()), alike)
+                    && !self
+                        .older
+                        .between
+                        .iter()
+                        .any(|tie| own::touches(tie, path, a.piece.span))
+            })
+        })
     }
 
     /// Whether nothing has changed in a member that others could tell, where it has to do with others.
@@ -424,4 +474,9 @@ impl<'a> Kept<'a> {
         }
         between
     }
+}
+
+/// Whether a finding is of no member.
+fn is_free(finding: &Finding) -> bool {
+    finding.member.is_none()
 }

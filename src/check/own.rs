@@ -46,6 +46,13 @@ impl Own {
     }
 }
 
+impl Own {
+    /// Whether there is nothing to say.
+    pub fn is_silent(&self) -> bool {
+        self.slips.is_empty() && self.found.is_empty() && self.settled.is_none()
+    }
+}
+
 fn places(finding: &Finding) -> impl Iterator<Item = &crate::findings::finding::Place> {
     let notes = finding.notes.iter().filter_map(|note| note.place.as_ref());
     let edits = finding.fixes.iter().flat_map(|fix| &fix.edits).map(|edit| &edit.place);

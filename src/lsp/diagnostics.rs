@@ -20,9 +20,14 @@ pub const MOST: usize = 500;
 pub type Typed = Option<Span>;
 
 /// The findings of a file, those of the member last edited always among them.
-pub fn of_file(snapshot: &Snapshot, live: &Live, file: FileIndex, edited: Typed, calm: bool) -> Vec<Diagnostic> {
+pub fn of_file(
+    snapshot: &Snapshot,
+    (live, file): (&Live, FileIndex),
+    shown: Vec<Shown<'_>>,
+    edited: Typed,
+    calm: bool,
+) -> Vec<Diagnostic> {
     let lines = snapshot.lines(live, file);
-    let shown = live.shown(file);
     let more = shown.len().saturating_sub(MOST);
     let chosen = choose(shown, edited.map(|line| item_around(live, file, line)));
     let mut diagnostics: Vec<Diagnostic> = chosen
@@ -49,11 +54,8 @@ pub fn of_file(snapshot: &Snapshot, live: &Live, file: FileIndex, edited: Typed,
 }
 
 /// Whether any finding of the file is shown as a hint for the moment.
-pub fn calms(live: &Live, file: FileIndex, line: Span) -> bool {
-    let shown = live.shown(file);
-    shown
-        .into_iter()
-        .any(|shown| touches(line, shown.span()) && shown.is_slip())
+pub fn calms(shown: &[Shown<'_>], line: Span) -> bool {
+    shown.iter().any(|shown| touches(line, shown.span()) && shown.is_slip())
 }
 
 fn touches(line: Span, span: Span) -> bool {

@@ -25,7 +25,7 @@ pub struct Publisher {
     designs: Vec<Arc<Live>>,
 }
 
-#[derive(Debug, Default)]
+#[derive(Debug, Clone, Default)]
 struct Published {
     version: Option<i32>,
     /// The line that was left in peace.
@@ -58,20 +58,22 @@ impl Publisher {
                 let version = document.map(|document| document.version);
                 let typed = document.and_then(typed_line);
                 let fresh = typed.filter(|(edited, _)| edited.at.elapsed() < CALM);
-                let calm = fresh
-                    .filter(|(_, line)| calms(live, file, *line))
-                    .map(|(edited, _)| edited);
+                let before = self.published.get(&uri);
+                let before = before.filter(|before| same && before.version == version && before.calm.is_none());
+                if let (None, Some(before), false) = (fresh, before, now.contains_key(&uri)) {
+                    now.insert(uri, before.clone());
+                    continue;
+                }
+                let shown = live.shown(file);
+                let calm = fresh.filter(|(_, line)| calms(&shown, *line));
+                let calm = calm.map(|(edited, _)| edited);
                 if let Some(edited) = calm {
                     let until = edited.at + CALM;
                     calm_until = Some(calm_until.map_or(until, |other| other.min(until)));
                 }
                 let calm_line = calm.map(|edited| edited.line);
-                let before = self.published.get(&uri);
-                let kept = before.filter(|before| same && before.version == version && before.calm == calm_line);
-                let diagnostics = match kept {
-                    Some(before) if !now.contains_key(&uri) => before.diagnostics.clone(),
-                    _ => of_file(snapshot, live, file, typed.map(|(_, line)| line), calm.is_some()),
-                };
+                let line = typed.map(|(_, line)| line);
+                let diagnostics = of_file(snapshot, (live, file), shown, line, calm.is_some());
                 let entry = now.entry(uri).or_insert_with(|| Published {
                     version,
                     calm: calm_line,
