@@ -268,6 +268,19 @@ impl Live {
         shown
     }
 
+    /// The open findings of a file that touch a span, by position.
+    #[must_use]
+    pub fn findings_at(&self, file: FileIndex, span: Span) -> Vec<Finding> {
+        let touching = |shown: &Shown<'_>| {
+            let own = shown.span();
+            own.start <= span.end && span.start <= own.end
+        };
+        let shown = self.shown(file).into_iter().filter(touching);
+        let mut findings: Vec<Finding> = shown.map(Shown::into_finding).collect();
+        findings.sort_by_key(|finding| (finding.place.span, finding.severity));
+        findings
+    }
+
     /// Every open finding of a file, by position.
     #[must_use]
     pub fn findings(&self, file: FileIndex) -> Vec<Finding> {

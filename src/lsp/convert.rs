@@ -25,11 +25,6 @@ pub enum Lines {
 }
 
 impl Lines {
-    /// Those of a file on disk.
-    pub fn of_text(text: &Arc<str>, encoding: Encoding) -> Self {
-        Self::Closed(Arc::clone(text), Arc::new(LineIndex::new(text)), encoding)
-    }
-
     /// The position of an offset.
     pub fn position(&self, offset: u32) -> lsp::Position {
         let position = match self {

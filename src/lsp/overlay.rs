@@ -12,6 +12,9 @@ use crate::lsp::disk::Disk;
 /// When a file was changed, and its size: while both stay, its text is not read again.
 type Stamp = (Option<SystemTime>, u64);
 
+/// A text as it was read from disk, and the stamp of its file then.
+type ReadText = (Stamp, Result<Arc<str>, ReadTrouble>);
+
 /// Files on disk beneath the texts of the editor.
 #[derive(Debug, Default)]
 pub struct Overlay {
@@ -19,7 +22,7 @@ pub struct Overlay {
     pub disk: Disk,
     /// Texts of the editor.
     pub open: FxHashMap<PathBuf, Arc<str>>,
-    read: Mutex<FxHashMap<PathBuf, (Stamp, Result<Arc<str>, ReadTrouble>)>>,
+    read: Mutex<FxHashMap<PathBuf, ReadText>>,
 }
 
 fn stamp(path: &Path) -> Option<Stamp> {

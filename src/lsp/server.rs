@@ -14,7 +14,7 @@ use tower_lsp::{Client as Editor, LanguageServer, LspService, Server as Transpor
 use tower_service::Service;
 
 use crate::lsp::documents::{Document, path_of};
-use crate::lsp::requests::{ask, ask_all, links, names, outline};
+use crate::lsp::requests::{actions, ask, ask_all, diagnose, links, names, outline};
 use crate::lsp::settings::{Client, Settings, encoding_kind};
 use crate::lsp::shared::{Shared, lock};
 use crate::lsp::worker::Worker;
@@ -282,5 +282,22 @@ impl LanguageServer for Server {
             links::links(asked, folders)
         })
         .await
+    }
+
+    async fn code_action(&self, params: CodeActionParams) -> Result<Option<CodeActionResponse>> {
+        let uri = params.text_document.uri.clone();
+        ask(&self.shared, &uri, move |asked| actions::code_actions(asked, &params)).await
+    }
+
+    async fn diagnostic(&self, params: DocumentDiagnosticParams) -> Result<DocumentDiagnosticReportResult> {
+        let report = ask(&self.shared, &params.text_document.uri, diagnose::document).await?;
+        let nothing = DocumentDiagnosticReport::Full(RelatedFullDocumentDiagnosticReport::default());
+        Ok(report.unwrap_or(DocumentDiagnosticReportResult::Report(nothing)))
+    }
+
+    async fn workspace_diagnostic(&self, _: WorkspaceDiagnosticParams) -> Result<WorkspaceDiagnosticReportResult> {
+        let report = ask_all(&self.shared, diagnose::workspace).await?;
+        let nothing = WorkspaceDiagnosticReport::default();
+        Ok(report.unwrap_or(WorkspaceDiagnosticReportResult::Report(nothing)))
     }
 }

@@ -1,10 +1,12 @@
 //! Answers to requests: each takes what was asked to the editor's functions and their answer back to the protocol.
 
+pub mod actions;
+pub mod diagnose;
 pub mod links;
 pub mod names;
 pub mod outline;
 
-use std::path::PathBuf;
+use std::path::{Path, PathBuf};
 use std::sync::Arc;
 
 use rustc_hash::FxHashMap;
@@ -117,9 +119,9 @@ impl<'a> AllLines<'a> {
         }
     }
 
-    fn file(&mut self, path: &PathBuf) -> Option<&(Url, Lines)> {
+    fn file(&mut self, path: &Path) -> Option<&(Url, Lines)> {
         let snapshot = self.snapshot;
-        let known = self.known.entry(path.clone()).or_insert_with(|| {
+        let known = self.known.entry(path.to_path_buf()).or_insert_with(|| {
             let (live, file) = snapshot.find(path)?;
             Some((snapshot.uri(path)?, snapshot.lines(live, file)))
         });
