@@ -159,7 +159,7 @@ impl Live {
 
     /// Everything, as command line and reports want it.
     #[must_use]
-    pub fn into_checked(self) -> Checked {
+    pub fn checked(&self) -> Checked {
         let settled: Vec<(Vec<Finding>, Vec<Finding>)> = (0..self.outcomes.len())
             .into_par_iter()
             .map(|order| self.settled(order))
@@ -175,8 +175,8 @@ impl Live {
         findings.sort_by_cached_key(order);
         agreed.sort_by_cached_key(order);
         Checked {
-            design: self.design,
-            outcomes: self.outcomes,
+            design: Arc::clone(&self.design),
+            outcomes: self.outcomes.clone(),
             findings,
             agreed,
         }

@@ -38,5 +38,5 @@ pub fn run(files: &dyn Files, paths: &[PathBuf], on: Date, memo: &Memo) -> (Vec<
     let live = designs
         .into_iter()
         .filter_map(|design| Live::check(design, None, on, memo, &|| false));
-    (live.map(Live::into_checked).collect(), troubles)
+    (live.map(|live| live.checked()).collect(), troubles)
 }

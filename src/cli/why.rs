@@ -2,7 +2,8 @@
 
 use super::{Ending, Trouble, output};
 use crate::design::keys::nearest;
-use crate::findings::registry::{self, Declaration};
+use crate::findings::registry;
+use crate::report::why::explanation;
 
 /// Explains a finding, or lists all.
 pub fn why(name: Option<&str>) -> Result<Ending, Trouble> {
@@ -29,27 +30,4 @@ fn list() -> String {
         .iter()
         .map(|known| format!("{:<30} {:<12} {}\n", known.name, known.severity.word(), known.summary))
         .collect()
-}
-
-fn explanation(found: &Declaration) -> String {
-    format!(
-        "{} ({}; {})\n{}\n{}\nFix: {}\n\nBefore:\n{}\n\nAfter:\n{}\n",
-        found.name,
-        found.severity.word(),
-        found.clause,
-        found.summary,
-        found.answer,
-        found.fix,
-        indented(found.before),
-        indented(found.after)
-    )
-}
-
-/// An example, set off from the text around it.
-fn indented(example: &str) -> String {
-    example
-        .lines()
-        .map(|line| format!("    {line}"))
-        .collect::<Vec<_>>()
-        .join("\n")
 }

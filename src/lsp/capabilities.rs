@@ -2,10 +2,25 @@
 
 use tower_lsp::lsp_types::*;
 
+use crate::lsp::requests::commands;
+use crate::lsp::settings::{Client, encoding_kind};
+
 /// What the server offers.
-pub fn capabilities(encoding: PositionEncodingKind) -> ServerCapabilities {
+pub fn capabilities(client: &Client) -> ServerCapabilities {
     ServerCapabilities {
-        position_encoding: Some(encoding),
+        position_encoding: Some(encoding_kind(client.encoding)),
+        diagnostic_provider: client.pulls.then(|| {
+            DiagnosticServerCapabilities::Options(DiagnosticOptions {
+                identifier: Some("scorchline".to_owned()),
+                inter_file_dependencies: true,
+                workspace_diagnostics: true,
+                work_done_progress_options: WorkDoneProgressOptions::default(),
+            })
+        }),
+        execute_command_provider: Some(ExecuteCommandOptions {
+            commands: commands::NAMES.map(str::to_owned).to_vec(),
+            work_done_progress_options: WorkDoneProgressOptions::default(),
+        }),
         text_document_sync: Some(TextDocumentSyncCapability::Options(TextDocumentSyncOptions {
             open_close: Some(true),
             change: Some(TextDocumentSyncKind::INCREMENTAL),

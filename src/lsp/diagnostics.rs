@@ -10,6 +10,7 @@ use crate::editor::view::{View, Within};
 use crate::findings::finding::{Finding, Severity};
 use crate::findings::reading;
 use crate::lsp::convert::Lines;
+use crate::lsp::explain;
 use crate::lsp::shared::Snapshot;
 use crate::text::Span;
 
@@ -117,6 +118,10 @@ pub fn diagnostic(snapshot: &Snapshot, finding: &Finding, lines: &Lines, calm: b
             Severity::Hint => DiagnosticSeverity::HINT,
         }),
         code: Some(NumberOrString::String(finding.name().to_owned())),
+        code_description: snapshot
+            .explained
+            .as_deref()
+            .and_then(|folder| explain::link(folder, finding.name())),
         source: Some("scorchline".to_owned()),
         message,
         related_information: (!related.is_empty()).then_some(related),

@@ -8,6 +8,7 @@ mod convert;
 mod diagnostics;
 pub mod disk;
 mod documents;
+mod explain;
 pub mod folders;
 mod overlay;
 mod publish;

@@ -104,6 +104,9 @@ impl Publisher {
                 now.entry(document.uri.clone()).or_default().version = Some(document.version);
             }
         }
+        if snapshot.client.pulls {
+            return None;
+        }
         self.send(now);
         self.designs.clone_from(&snapshot.workspace.designs);
         calm_until

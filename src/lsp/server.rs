@@ -14,8 +14,8 @@ use tower_lsp::{Client as Editor, LanguageServer, LspService, Server as Transpor
 use tower_service::Service;
 
 use crate::lsp::documents::{Document, path_of};
-use crate::lsp::requests::{actions, ask, ask_all, diagnose, links, names, outline};
-use crate::lsp::settings::{Client, Settings, encoding_kind};
+use crate::lsp::requests::{actions, ask, ask_all, commands, diagnose, links, names, outline};
+use crate::lsp::settings::{Client, Settings};
 use crate::lsp::shared::{Shared, lock};
 use crate::lsp::worker::Worker;
 use crate::text::Buffer;
@@ -103,6 +103,7 @@ impl LanguageServer for Server {
             .unwrap_or_default();
         let mut client = Client::of(&params.capabilities);
         client.images = settings.images.unwrap_or(client.images);
+        client.pulls = settings.pull;
         *lock(&self.shared.client) = client;
         *lock(&self.shared.settings) = settings;
         #[allow(deprecated)]
@@ -117,7 +118,7 @@ impl LanguageServer for Server {
             documents.folders = folders.iter().filter_map(path_of).collect();
         });
         Ok(InitializeResult {
-            capabilities: super::capabilities::capabilities(encoding_kind(client.encoding)),
+            capabilities: super::capabilities::capabilities(&client),
             server_info: Some(ServerInfo {
                 name: "scorchline".to_owned(),
                 version: Some(env!("CARGO_PKG_VERSION").to_owned()),
@@ -299,5 +300,11 @@ impl LanguageServer for Server {
         let report = ask_all(&self.shared, diagnose::workspace).await?;
         let nothing = WorkspaceDiagnosticReport::default();
         Ok(report.unwrap_or(WorkspaceDiagnosticReportResult::Report(nothing)))
+    }
+
+    async fn execute_command(&self, params: ExecuteCommandParams) -> Result<Option<serde_json::Value>> {
+        ask_all(&self.shared, move |snapshot| Some(commands::run(snapshot, &params)))
+            .await?
+            .unwrap_or(Ok(None))
     }
 }

@@ -18,10 +18,14 @@ pub struct Client {
     pub images: bool,
     /// Whether it shows places beside a diagnostic.
     pub related: bool,
+    /// Whether it opens what a diagnostic's code links to.
+    pub links: bool,
     /// Whether it watches files for the server.
     pub watches: bool,
     /// Whether it shows progress.
     pub progress: bool,
+    /// Whether it will ask for diagnostics.
+    pub pulls: bool,
     /// Whether symbols may be nested.
     pub nested_symbols: bool,
     /// Whether inlay hints can be asked for again.
@@ -40,6 +44,8 @@ pub struct Settings {
     pub thickness_hints: bool,
     /// Code lenses.
     pub lenses: bool,
+    /// Diagnostics only when the editor asks for them, not of the server's own accord.
+    pub pull: bool,
     /// Pictures in hovers, where the editor does not say whether it shows them.
     pub images: Option<bool>,
 }
@@ -50,6 +56,7 @@ impl Default for Settings {
             section_hints: true,
             thickness_hints: true,
             lenses: true,
+            pull: false,
             images: None,
         }
     }
@@ -77,8 +84,10 @@ impl Default for Client {
             markdown: false,
             images: false,
             related: false,
+            links: false,
             watches: false,
             progress: false,
+            pulls: false,
             nested_symbols: false,
             refreshes_hints: false,
             refreshes_lenses: false,
@@ -106,6 +115,7 @@ impl Client {
                 .and_then(|general| general.markdown.as_ref())
                 .is_some_and(|markdown| markdown.parser == "marked"),
             related: yes(document.and_then(|document| document.publish_diagnostics.as_ref()?.related_information)),
+            links: yes(document.and_then(|document| document.publish_diagnostics.as_ref()?.code_description_support)),
             watches: yes(
                 workspace.and_then(|workspace| workspace.did_change_watched_files.as_ref()?.dynamic_registration)
             ),
@@ -113,6 +123,7 @@ impl Client {
                 .window
                 .as_ref()
                 .and_then(|window| window.work_done_progress)),
+            pulls: false,
             nested_symbols: yes(
                 document.and_then(|document| document.document_symbol.as_ref()?.hierarchical_document_symbol_support)
             ),

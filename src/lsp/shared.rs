@@ -40,6 +40,8 @@ pub struct Snapshot {
     pub documents: FxHashMap<PathBuf, Document>,
     /// What the editor can do.
     pub client: Client,
+    /// Where the explanations of findings are, for an editor that opens them.
+    pub explained: Option<Arc<PathBuf>>,
 }
 
 impl Default for Shared {

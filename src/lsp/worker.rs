@@ -14,6 +14,7 @@ use tower_lsp::lsp_types::MessageType;
 use crate::analysis::read::kind_by_name;
 use crate::check::session::{Session, Workspace};
 use crate::lsp::documents::Document;
+use crate::lsp::explain;
 use crate::lsp::folders::search;
 use crate::lsp::overlay::Overlay;
 use crate::lsp::publish::Publisher;
@@ -37,6 +38,7 @@ pub struct Worker {
     listed: Vec<PathBuf>,
     listing: Option<u64>,
     publisher: Publisher,
+    explained: Option<Arc<PathBuf>>,
 }
 
 impl Worker {
@@ -52,11 +54,15 @@ impl Worker {
             texts: FxHashMap::default(),
             listed: Vec::new(),
             listing: None,
+            explained: None,
         }
     }
 
     /// Works until the server ends.
     pub fn run(mut self) {
+        if lock(&self.shared.client).links {
+            self.explained = explain::write().map(Arc::new);
+        }
         let mut wanted = self.shared.wanted.subscribe();
         let mut calm: Option<Instant> = None;
         loop {
@@ -137,6 +143,7 @@ impl Worker {
             workspace,
             documents,
             client,
+            explained: self.explained.clone(),
         })
     }
 

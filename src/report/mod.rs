@@ -1,3 +1,4 @@
 //! Reports as plain data.
 
 pub mod schedule;
+pub mod why;

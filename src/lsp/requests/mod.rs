@@ -1,6 +1,7 @@
 //! Answers to requests: each takes what was asked to the editor's functions and their answer back to the protocol.
 
 pub mod actions;
+pub mod commands;
 pub mod diagnose;
 pub mod links;
 pub mod names;
