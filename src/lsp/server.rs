@@ -90,7 +90,20 @@ where
         if request.method() == "exit" {
             self.exit.notify_one();
         }
-        Box::pin(self.service.call(request))
+        Box::pin(self.service.call(without_null(request)))
+    }
+}
+
+/// Some editors send `null` where a message has no parameters, which the service would refuse.
+fn without_null(request: Request) -> Request {
+    if !matches!(request.params(), Some(serde_json::Value::Null)) {
+        return request;
+    }
+    let (method, id, _) = request.into_parts();
+    let bare = Request::build(method);
+    match id {
+        Some(id) => bare.id(id).finish(),
+        None => bare.finish(),
     }
 }
 

@@ -64,6 +64,8 @@ impl Worker {
             self.explained = explain::write().map(Arc::new);
         }
         let mut wanted = self.shared.wanted.subscribe();
+        // What was opened before this is wanted too.
+        wanted.mark_changed();
         let mut calm: Option<Instant> = None;
         loop {
             let Some(changed) = self.wait(&mut wanted, calm) else {
