@@ -10,6 +10,7 @@ pub mod analysis;
 pub mod check;
 pub mod cli;
 pub mod design;
+pub mod draw;
 pub mod editor;
 pub mod exchange;
 pub mod findings;

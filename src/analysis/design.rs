@@ -12,6 +12,7 @@ use crate::design::model::library::NamedProduct;
 use crate::design::model::member::Member;
 use crate::heating::fire::Fire;
 use crate::text::Span;
+use crate::units::DisplayUnits;
 
 /// Index of a file in [`Design::files`].
 pub type FileIndex = usize;
@@ -89,6 +90,16 @@ impl Design {
     #[must_use]
     pub fn basis(&self) -> &Basis {
         &self.head().basis
+    }
+
+    /// The units that its messages and papers are in.
+    #[must_use]
+    pub fn units(&self) -> DisplayUnits {
+        if self.basis().imperial {
+            DisplayUnits::Imperial
+        } else {
+            DisplayUnits::Metric
+        }
     }
 
     /// The headings of the papers.

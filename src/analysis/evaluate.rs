@@ -5,6 +5,7 @@ use crate::analysis::memo::Memo;
 use crate::analysis::outcome::{BareState, Critical, ExposedSection, Gap, LimitFrom, Outcome, ProtectedState, Verdict};
 use crate::design::model::head::Factors;
 use crate::design::model::member::{Load, Reduction, Role, Steel, Surface};
+use crate::heating::fire::Fire;
 use crate::heating::flux::{Bare, Emissivity, effective_factor};
 use crate::protection::product::{Kind as ProductKind, ShapeClass};
 use crate::protection::requirement::{self, Demand, Refusal};
@@ -14,7 +15,7 @@ use crate::resistance::grade::{Grade, YieldSource, governing_thickness, yield_st
 use crate::resistance::utilisation::{ActionMix, from_ambient, reduction_factor};
 use crate::section::shadow::shadow_factor;
 use crate::section::{Casing, Exposure, Geometry, Kind, heated};
-use crate::units::{Force, Length, Stress, Time};
+use crate::units::{Force, Length, Stress, Temperature, Time};
 
 /// Works out a member. Nothing is claimed that its inputs do not carry.
 #[must_use]
@@ -76,35 +77,50 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
         Err(Unverified::Missing(key)) => outcome.gaps.push(Gap::Missing(key)),
         Err(Unverified::NotCovered(why)) => outcome.gaps.push(Gap::CriticalTemperature(why)),
     }
-    let emissivity = match inputs.surface {
-        Surface::GalvanisedTo { category: 'A' | 'B' } => Emissivity::Galvanised,
-        _ => Emissivity::Steel,
-    };
-    let piece = Bare {
-        fire,
-        factor: effective_factor(exposed.bare_factor),
-        shadow: exposed.shadow_factor,
-        emissivity,
-    };
+    let piece = bare_piece(inputs, fire, &exposed);
     let limit = outcome.critical.as_ref();
     outcome.bare = Some(BareState {
         at_period: inputs.period.map(|period| piece.temperature_at(period)),
         resistance: limit.and_then(|limit| piece.time_to(limit.bare)),
     });
     if let (Cover::Product(product), Some(limit), Some(period)) = (&inputs.cover, limit, inputs.period) {
-        let demand = Demand {
-            fire,
-            factor: effective_factor(exposed.factor),
-            limit: limit.protected,
-            period,
-            shape: shape_class(geometry.kind),
-            sides: sides(inputs.reached.exposure, inputs.role),
-            beam: inputs.role.is_some_and(Role::reads_as_beam),
-        };
+        let demand = demand(inputs, fire, &exposed, geometry.kind, (limit.protected, period));
         outcome.protected = Some(protect(product, &demand, memo));
     }
     outcome.verdict = verdict(inputs, &outcome, cold);
     outcome
+}
+
+/// The member without protection.
+pub(super) fn bare_piece<'a>(inputs: &Inputs, fire: &'a Fire, exposed: &ExposedSection) -> Bare<'a> {
+    Bare {
+        fire,
+        factor: effective_factor(exposed.bare_factor),
+        shadow: exposed.shadow_factor,
+        emissivity: match inputs.surface {
+            Surface::GalvanisedTo { category: 'A' | 'B' } => Emissivity::Galvanised,
+            _ => Emissivity::Steel,
+        },
+    }
+}
+
+/// What is asked of its protection.
+pub(super) fn demand<'a>(
+    inputs: &Inputs,
+    fire: &'a Fire,
+    exposed: &ExposedSection,
+    kind: Option<Kind>,
+    (limit, period): (Temperature, Time),
+) -> Demand<'a> {
+    Demand {
+        fire,
+        factor: effective_factor(exposed.factor),
+        limit,
+        period,
+        shape: shape_class(kind),
+        sides: sides(inputs.reached.exposure, inputs.role),
+        beam: inputs.role.is_some_and(Role::reads_as_beam),
+    }
 }
 
 fn exposed(

@@ -1,5 +1,6 @@
 //! From files to outcomes: reading, names, and the evaluation of each member.
 
+pub mod curves;
 pub mod design;
 pub mod evaluate;
 pub mod exposure;

@@ -1,10 +1,13 @@
 //! What an editor shows beside the findings: plain functions on byte offsets, free of any protocol.
 
 pub mod actions;
+pub mod cursor;
 pub mod definition;
 mod depart;
 mod fill;
 pub mod folding;
+pub mod hints;
+pub mod hover;
 mod layout;
 pub mod lens;
 pub mod links;

@@ -72,7 +72,7 @@ impl<'a> Context<'a> {
             on,
             keys,
             mark: member.mark.value().map_or("this member", String::as_str),
-            units: units(design),
+            units: design.units(),
             period: match keys.get(|keys| &keys.period).value() {
                 Some(Period::Of(time)) => Some(*time),
                 _ => None,
@@ -275,15 +275,6 @@ impl Stated<'_> {
             }
             (None, _) => {}
         }
-    }
-}
-
-/// The units that a design's messages are in.
-pub(super) fn units(design: &Design) -> DisplayUnits {
-    if design.basis().imperial {
-        DisplayUnits::Imperial
-    } else {
-        DisplayUnits::Metric
     }
 }
 

@@ -29,6 +29,8 @@ pub fn capabilities(client: &Client) -> ServerCapabilities {
             })),
             ..TextDocumentSyncOptions::default()
         })),
+        hover_provider: Some(HoverProviderCapability::Simple(true)),
+        inlay_hint_provider: Some(OneOf::Left(true)),
         definition_provider: Some(OneOf::Left(true)),
         references_provider: Some(OneOf::Left(true)),
         rename_provider: Some(OneOf::Right(RenameOptions {

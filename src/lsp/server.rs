@@ -14,7 +14,7 @@ use tower_lsp::{Client as Editor, LanguageServer, LspService, Server as Transpor
 use tower_service::Service;
 
 use crate::lsp::documents::{Document, path_of};
-use crate::lsp::requests::{actions, ask, ask_all, commands, diagnose, links, names, outline};
+use crate::lsp::requests::{actions, ask, ask_all, commands, diagnose, links, names, outline, reading};
 use crate::lsp::settings::{Client, Settings};
 use crate::lsp::shared::{Shared, lock};
 use crate::lsp::worker::Worker;
@@ -319,5 +319,20 @@ impl LanguageServer for Server {
         ask_all(&self.shared, move |snapshot| Some(commands::run(snapshot, &params)))
             .await?
             .unwrap_or(Ok(None))
+    }
+
+    async fn hover(&self, params: HoverParams) -> Result<Option<Hover>> {
+        let at = params.text_document_position_params;
+        ask(&self.shared, &at.text_document.uri, move |asked| {
+            reading::hovered(asked, at.position)
+        })
+        .await
+    }
+
+    async fn inlay_hint(&self, params: InlayHintParams) -> Result<Option<Vec<InlayHint>>> {
+        ask(&self.shared, &params.text_document.uri, move |asked| {
+            reading::hinted(asked, params.range)
+        })
+        .await
     }
 }

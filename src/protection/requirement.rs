@@ -328,13 +328,31 @@ pub struct Performance {
     pub resistance: Option<Time>,
 }
 
+fn behind<'a>(
+    product: &Product,
+    insulation: &'a Insulation,
+    demand: &Demand<'a>,
+    provided: Length,
+) -> (Demand<'a>, Protected<'a>) {
+    let held = held_to_range(product, demand).map_or(*demand, |(held, _)| held);
+    (held, Protected::new(held.fire, held.factor, insulation, provided))
+}
+
+/// The steel behind a thickness; none for products whose assessment gives no temperatures.
+#[must_use]
+pub fn heating<'a>(product: &'a Product, demand: &Demand<'a>, provided: Length) -> Option<Protected<'a>> {
+    match &product.method {
+        Method::Properties(insulation) if provided.mm() > 0.0 => Some(behind(product, insulation, demand, provided).1),
+        _ => None,
+    }
+}
+
 /// What a thickness provides, within the assessed range.
 #[must_use]
 pub fn performance(product: &Product, demand: &Demand<'_>, provided: Length) -> Performance {
     match &product.method {
         Method::Properties(insulation) => {
-            let held = held_to_range(product, demand).map_or(*demand, |(held, _)| held);
-            let piece = Protected::new(held.fire, held.factor, insulation, provided);
+            let (held, piece) = behind(product, insulation, demand, provided);
             let at_period = Some(piece.temperature_at(demand.period));
             let longest = product.assessed.period.map_or(HORIZON, |range| range.1.min());
             let reached = piece.time_to(held.limit).map_or(HORIZON, Time::min);

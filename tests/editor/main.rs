@@ -2,5 +2,6 @@
 
 mod actions;
 mod fixture;
+mod hover;
 mod names;
 mod outline;

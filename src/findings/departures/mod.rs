@@ -14,7 +14,6 @@ use crate::analysis::outcome::Outcome;
 use crate::design::given::Given;
 use crate::design::keys::nearest;
 use crate::design::model::member::Departure;
-use crate::findings::context;
 use crate::findings::finding::{Finding, Place, Severity};
 use crate::findings::reading;
 use crate::findings::registry;
@@ -103,7 +102,7 @@ pub fn apply(
                         .map_or_else(String::new, |until| format!(" on {until}"))
                 ),
             );
-        } else if let Some(worse) = outgrown(departure, outcome, context::units(design)) {
+        } else if let Some(worse) = outgrown(departure, outcome, design.units()) {
             add(
                 &departure_outgrown::DECLARATION,
                 format!("{mark}: the departure from {} is outgrown: {worse}", from.value),

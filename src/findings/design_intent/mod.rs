@@ -18,7 +18,7 @@ use crate::analysis::design::{Design, MemberAt};
 use crate::analysis::exposure::{ShieldDoubt, reached};
 use crate::analysis::outcome::Outcome;
 use crate::design::model::member::Period;
-use crate::findings::context::{self, Context};
+use crate::findings::context::Context;
 use crate::findings::finding::{Finding, Severity};
 use crate::findings::registry::Declaration;
 use crate::section::Exposure;
@@ -138,7 +138,7 @@ pub(super) fn design(design: &Design, outcomes: &[Arc<Outcome>], out: &mut Vec<F
         let mut link = Support {
             links: &links,
             link: *link,
-            units: context::units(design),
+            units: design.units(),
             mark: links.mark(link.from),
             carried: cover(design, links.at(link.from)),
             demand,

@@ -6,6 +6,7 @@ pub mod diagnose;
 pub mod links;
 pub mod names;
 pub mod outline;
+pub mod reading;
 
 use std::path::{Path, PathBuf};
 use std::sync::Arc;

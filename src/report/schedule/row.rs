@@ -71,7 +71,8 @@ pub struct Row {
 }
 
 /// The row of a member. Its findings and departures are joined by the caller.
-pub(super) fn row(design: &Design, member: &Member, outcome: &Outcome) -> Row {
+#[must_use]
+pub fn row(design: &Design, member: &Member, outcome: &Outcome) -> Row {
     let keys = design.inherited(member);
     let count = count(&keys);
     let choice = keys.get(|k| &k.section).value();
