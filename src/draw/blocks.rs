@@ -97,7 +97,7 @@ mod tests {
             lines[4].starts_with("  550 °C ┤") && lines[4].ends_with("┄▁▂▃▄▅▆") || lines[4].contains('┄'),
             "{plot}"
         );
-        assert_eq!(lines[ROWS].chars().filter(|c| *c == '█').count() > 30, true, "{plot}");
+        assert!(lines[ROWS].chars().filter(|c| *c == '█').count() > 30, "{plot}");
         assert!(lines[ROWS + 2].contains("30 min"), "{plot}");
         let widths: Vec<usize> = lines[1..=ROWS].iter().map(|line| line.chars().count()).collect();
         assert!(widths.iter().all(|width| *width == 10 + COLUMNS), "{plot}");

@@ -67,12 +67,19 @@ fn thickness(view: &View<'_>, at: MemberAt) -> Option<Hint> {
     let name = &keys.get(|k| &k.protection).value()?.product.as_ref()?.value;
     let product = view.design.product(name)?.1.value().product.as_ref()?;
     let units = view.design.units();
-    // What is needed is rounded up, so that what is shown serves.
+    let film = product.kind == Kind::Coating;
     let shown = |value: Length| {
-        if product.kind == Kind::Coating {
-            units.film(Length::from_mm((value.mm() * 1000.0 - 1e-6).ceil() / 1000.0))
+        if film {
+            units.film(value)
         } else {
-            units.thickness(Length::from_mm((value.mm() * 10.0 - 1e-6).ceil() / 10.0))
+            units.thickness(value)
+        }
+    };
+    let needs = |value: Length| {
+        if film {
+            units.needed_film(value)
+        } else {
+            units.needed_thickness(value)
         }
     };
     let has = match state.provided {
@@ -83,6 +90,6 @@ fn thickness(view: &View<'_>, at: MemberAt) -> Option<Hint> {
     Some(Hint {
         at: item.place(written).end,
         kind: HintKind::Thickness,
-        label: format!("needs {}{has}", shown(needed.exact)),
+        label: format!("needs {}{has}", needs(needed.exact)),
     })
 }

@@ -213,14 +213,11 @@ impl<'a> Context<'a> {
 
     /// A thickness that is needed, rounded up in the last place shown, so that what is shown serves.
     pub fn needed(&self, value: Length, film: bool) -> String {
-        let step = match (self.units, film) {
-            (DisplayUnits::Metric, false) => 0.1,
-            (DisplayUnits::Metric, true) => 0.001,
-            (DisplayUnits::Imperial, false) => 0.0254,
-            (DisplayUnits::Imperial, true) => 0.002_54,
-        };
-        let up = (value.mm() / step - 1e-6).ceil() * step;
-        self.thickness(Length::from_mm(up), film)
+        if film {
+            self.units.needed_film(value)
+        } else {
+            self.units.needed_thickness(value)
+        }
     }
 }
 

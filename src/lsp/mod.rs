@@ -11,6 +11,7 @@ mod documents;
 mod explain;
 pub mod folders;
 mod overlay;
+mod progress;
 mod publish;
 mod requests;
 mod server;

@@ -10,8 +10,6 @@ use crate::text::Encoding;
 pub struct Client {
     /// How it counts columns.
     pub encoding: Encoding,
-    /// Whether it inserts snippets.
-    pub snippets: bool,
     /// Whether hovers may be Markdown.
     pub markdown: bool,
     /// Whether it shows pictures in Markdown.
@@ -80,7 +78,6 @@ impl Default for Client {
     fn default() -> Self {
         Self {
             encoding: Encoding::Utf16,
-            snippets: false,
             markdown: false,
             images: false,
             related: false,
@@ -106,9 +103,6 @@ impl Client {
         let yes = |flag: Option<bool>| flag.unwrap_or(false);
         Self {
             encoding: encoding(general.and_then(|general| general.position_encodings.as_deref())),
-            snippets: yes(
-                document.and_then(|document| document.completion.as_ref()?.completion_item.as_ref()?.snippet_support)
-            ),
             markdown: formats.is_some_and(|formats| formats.contains(&MarkupKind::Markdown)),
             // No capability tells whether pictures are shown; a parser of web pages' Markdown does show them.
             images: general

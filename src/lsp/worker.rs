@@ -17,6 +17,7 @@ use crate::lsp::documents::Document;
 use crate::lsp::explain;
 use crate::lsp::folders::search;
 use crate::lsp::overlay::Overlay;
+use crate::lsp::progress::Progress;
 use crate::lsp::publish::Publisher;
 use crate::lsp::shared::{Shared, Snapshot, lock};
 
@@ -83,7 +84,8 @@ impl Worker {
             if let Some(snapshot) = self.check() {
                 let snapshot = Arc::new(snapshot);
                 calm = self.publisher.publish(&snapshot);
-                self.shared.done.send_replace(snapshot);
+                let before = self.shared.done.send_replace(Arc::clone(&snapshot));
+                self.refresh(&before, &snapshot);
             }
         }
     }
@@ -149,6 +151,31 @@ impl Worker {
         })
     }
 
+    /// Where something else than the editor's own texts has changed, the editor does not know that hints and lenses have.
+    fn refresh(&self, before: &Snapshot, now: &Snapshot) {
+        let edited = |(path, document): (&PathBuf, &Document)| {
+            before
+                .documents
+                .get(path)
+                .is_none_or(|before| before.changed != document.changed)
+        };
+        if before.generation == 0 || now.documents.iter().any(edited) {
+            return;
+        }
+        let (editor, client) = (self.editor.clone(), now.client);
+        self.runtime.spawn(async move {
+            let asked = async {
+                if client.refreshes_hints {
+                    let _ = editor.inlay_hint_refresh().await;
+                }
+                if client.refreshes_lenses {
+                    let _ = editor.code_lens_refresh().await;
+                }
+            };
+            let _ = tokio::time::timeout(LOOK, asked).await;
+        });
+    }
+
     /// Takes over the texts of the open documents.
     fn take(&mut self, documents: &FxHashMap<PathBuf, Document>) {
         self.texts.retain(|path, _| documents.contains_key(path));
@@ -171,6 +198,8 @@ impl Worker {
 
     /// Checks the files. A panic costs what was kept, not the server.
     fn checked(&mut self, paths: &[PathBuf], generation: u64) -> Option<Workspace> {
+        let tells = lock(&self.shared.client).progress;
+        let _progress = tells.then(|| Progress::watch(&self.runtime, self.editor.clone(), generation));
         let on = jiff::ZonedDateTime::now().date();
         let wanted = self.shared.wanted.subscribe();
         let cancelled = || *wanted.borrow() != generation;

@@ -22,6 +22,18 @@ impl DisplayUnits {
         }
     }
 
+    /// A thickness that is needed, rounded up in the last place shown, so that what is shown serves.
+    #[must_use]
+    pub fn needed_thickness(self, value: Length) -> String {
+        self.thickness(up(value, if self == Self::Metric { 0.1 } else { 0.0254 }))
+    }
+
+    /// A dry film that is needed, rounded up likewise.
+    #[must_use]
+    pub fn needed_film(self, value: Length) -> String {
+        self.film(up(value, if self == Self::Metric { 0.001 } else { 0.002_54 }))
+    }
+
     /// A dry film thickness: `450 µm` or `17.7 mil`.
     #[must_use]
     pub fn film(self, value: Length) -> String {
@@ -46,6 +58,11 @@ impl DisplayUnits {
         let decimals = if value.per_m() < 99.95 { 1 } else { 0 };
         format!("{} 1/m", significant(value.per_m(), decimals))
     }
+}
+
+/// A length rounded up to a step in mm.
+fn up(value: Length, step: f64) -> Length {
+    Length::from_mm((value.mm() / step - 1e-6).ceil() * step)
 }
 
 /// A number with at most `decimals` decimals, trailing zeros and a negative zero dropped.

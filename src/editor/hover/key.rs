@@ -5,9 +5,9 @@ use crate::editor::cursor::Step;
 /// A key's meaning, kind and unit, from the one table of keys.
 pub fn document(step: &Step, owner: &str) -> Option<String> {
     let key = step.key?;
-    let required = if key.required && owner == "member" {
+    let required = if key.required && owner == "member" && key.name != "mark" {
         " Required, of the member itself, its group or `defaults`."
-    } else if key.required {
+    } else if key.required && owner != "group" && owner != "file" {
         " Required."
     } else {
         ""

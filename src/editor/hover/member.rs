@@ -107,7 +107,8 @@ fn behind(row: &Row, outcome: &Outcome, units: DisplayUnits) -> Option<String> {
         }
     };
     let needs = match &state.requirement {
-        Ok(needed) => format!("needs {}", shown(needed.exact)),
+        Ok(needed) if film => format!("needs {}", units.needed_film(needed.exact)),
+        Ok(needed) => format!("needs {}", units.needed_thickness(needed.exact)),
         Err(refusal) => format!("**{refusal}**"),
     };
     let has = state.provided.map(|provided| {
