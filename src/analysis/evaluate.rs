@@ -78,10 +78,11 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
         Err(Unverified::NotCovered(why)) => outcome.gaps.push(Gap::CriticalTemperature(why)),
     }
     let piece = bare_piece(inputs, fire, &exposed);
+    let history = memo.bare(&piece);
     let limit = outcome.critical.as_ref();
     outcome.bare = Some(BareState {
-        at_period: inputs.period.map(|period| piece.temperature_at(period)),
-        resistance: limit.and_then(|limit| piece.time_to(limit.bare)),
+        at_period: inputs.period.map(|period| history.temperature_at(&piece, period)),
+        resistance: limit.and_then(|limit| history.time_to(&piece, limit.bare)),
     });
     if let (Cover::Product(product), Some(limit), Some(period)) = (&inputs.cover, limit, inputs.period) {
         let demand = demand(inputs, fire, &exposed, geometry.kind, (limit.protected, period));
@@ -348,7 +349,7 @@ fn protect(input: &ProductInput, demand: &Demand<'_>, memo: &Memo) -> ProtectedS
         .map(|layers| Length::from_mm(layers.iter().map(|layer| layer.mm()).sum()));
     let performance = match (&requirement, provided) {
         (Ok(_) | Err(Refusal::TooSlender { .. }), Some(provided)) if provided.mm() > 0.0 => {
-            Some(requirement::performance(product, demand, provided))
+            Some(requirement::performance(product, demand, provided, memo))
         }
         _ => None,
     };

@@ -14,17 +14,28 @@ use crate::analysis::inputs::Inputs;
 use crate::analysis::outcome::Outcome;
 use crate::heating::family::Family;
 use crate::heating::fire::Fire;
-use crate::heating::flux::Insulation;
+use crate::heating::flux::{Bare, Emissivity, Insulation, Protected};
+use crate::heating::history::History;
 use crate::protection::requirement::{Demand, Families};
 use crate::units::Length;
 
 type FamilyKey = (Fire, u64, u64, u64, u64, Insulation);
+
+/// What a march depends on, numbers by their bits.
+#[derive(Debug, Clone, PartialEq, Eq, Hash)]
+enum HistoryKey {
+    /// Fire, section factor, shadow factor and surface.
+    Bare(Fire, u64, u64, Emissivity),
+    /// Fire, section factor, thickness and material.
+    Protected(Fire, u64, u64, Insulation),
+}
 
 /// What was worked out before.
 #[derive(Debug, Default)]
 pub struct Memo {
     members: Shelves<Inputs, Outcome>,
     families: Shelves<FamilyKey, Family>,
+    histories: Shelves<HistoryKey, History>,
     evaluated: AtomicU64,
 }
 
@@ -32,6 +43,8 @@ pub struct Memo {
 const SPARE: usize = 4096;
 /// The most families of marches in a generation; one has some tens of kilobytes.
 const FAMILIES: usize = 512;
+/// The most marches in a generation; one has a few kilobytes.
+const HISTORIES: usize = 4096;
 
 impl Memo {
     /// The outcome of a member's inputs.
@@ -46,6 +59,14 @@ impl Memo {
         outcome
     }
 
+    /// The march of a bare member.
+    #[must_use]
+    pub fn bare(&self, piece: &Bare<'_>) -> Arc<History> {
+        let (factor, shadow) = (piece.factor.bits(), piece.shadow.to_bits());
+        let key = HistoryKey::Bare(piece.fire.clone(), factor, shadow, piece.emissivity);
+        self.histories.get_or(key, || History::of_bare(piece))
+    }
+
     /// How many members were worked out, those known before not counted.
     #[must_use]
     pub fn evaluated(&self) -> u64 {
@@ -56,6 +77,7 @@ impl Memo {
     pub fn settle(&self, members: usize) {
         self.members.settle(2 * members + SPARE);
         self.families.settle(FAMILIES);
+        self.histories.settle(HISTORIES);
     }
 }
 
@@ -69,18 +91,27 @@ impl Families for Memo {
             range.1.bits(),
             insulation.clone(),
         );
-        if let Some(known) = self.families.get(&key) {
-            return known;
-        }
-        let family = Arc::new(Family::new(
-            demand.fire.clone(),
-            demand.factor,
-            insulation.clone(),
-            demand.period,
-            range,
-        ));
-        self.families.put(key, &family);
-        family
+        self.families.get_or(key, || {
+            Family::new(
+                demand.fire.clone(),
+                demand.factor,
+                insulation.clone(),
+                demand.period,
+                range,
+            )
+        })
+    }
+
+    fn history(
+        &self,
+        piece: &Protected<'_>,
+        insulation: &Insulation,
+        demand: &Demand<'_>,
+        thickness: Length,
+    ) -> Arc<History> {
+        let (factor, thickness) = (demand.factor.bits(), thickness.bits());
+        let key = HistoryKey::Protected(demand.fire.clone(), factor, thickness, insulation.clone());
+        self.histories.get_or(key, || History::of_protected(piece))
     }
 }
 
@@ -123,6 +154,15 @@ impl<K: Hash + Eq, V> Shelves<K, V> {
         let (key, known) = shelf.old.remove_entry(key)?;
         shelf.young.insert(key, Arc::clone(&known));
         Some(known)
+    }
+
+    fn get_or(&self, key: K, make: impl FnOnce() -> V) -> Arc<V> {
+        if let Some(known) = self.get(&key) {
+            return known;
+        }
+        let made = Arc::new(make());
+        self.put(key, &made);
+        made
     }
 
     fn put(&self, key: K, value: &Arc<V>) {

@@ -222,7 +222,7 @@ impl<'a> Protected<'a> {
     }
 
     /// Marches, holding the steel at 100 °C for the moisture delay; shows each step with what was marched.
-    fn run(&self, until: f64, mut each: impl FnMut(&Stage<'_>, Step) -> Go) {
+    pub(super) fn run(&self, until: f64, mut each: impl FnMut(&Stage<'_>, Step) -> Go) {
         let mut stage = Stage {
             piece: self,
             start: 0.0,
@@ -261,6 +261,16 @@ impl<'a> Protected<'a> {
         }
     }
 
+    /// The piece from the start of the fire, for what is asked of a kept march.
+    #[must_use]
+    pub const fn stage(&self) -> Stage<'_> {
+        Stage {
+            piece: self,
+            start: 0.0,
+            enthalpy: 0.0,
+        }
+    }
+
     /// The steel temperature at a time.
     #[must_use]
     pub fn temperature_at(&self, time: Time) -> Temperature {
@@ -289,7 +299,8 @@ impl<'a> Protected<'a> {
 }
 
 /// Protected steel from some moment on.
-struct Stage<'a> {
+#[derive(Debug)]
+pub struct Stage<'a> {
     piece: &'a Protected<'a>,
     start: f64,
     enthalpy: f64,
@@ -325,6 +336,11 @@ pub fn moisture_delay(insulation: &Insulation, thickness: f64, percent: f64) -> 
 }
 
 impl Bare<'_> {
+    /// Marches to a time in s, showing each step.
+    pub(super) fn run(&self, until: f64, each: impl FnMut(Step) -> Go) {
+        march(self, until, each);
+    }
+
     /// The steel temperature at a time.
     #[must_use]
     pub fn temperature_at(&self, time: Time) -> Temperature {

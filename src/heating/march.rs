@@ -254,6 +254,22 @@ pub fn time_within(piece: &impl Heated, step: Step, wanted: f64) -> f64 {
     step.from + if h_low.abs() < h_high.abs() { low } else { high }
 }
 
+/// The enthalpy within a step at a time in s, by a step of the same pair from its start.
+#[must_use]
+pub fn enthalpy_within(piece: &impl Heated, step: Step, time: f64) -> f64 {
+    // Where the steel is held as it is, the rate that the pair would take is not the one that was marched.
+    if time >= step.to || step.enthalpy_from == step.enthalpy_to {
+        return step.enthalpy_to;
+    }
+    if time <= step.from {
+        return step.enthalpy_from;
+    }
+    let heat = piece.specific_heat();
+    let rate = rate_at(piece, heat, step.from + INSIDE, step.enthalpy_from);
+    let stride = pair(piece, heat, step.from, step.enthalpy_from, time - step.from, rate);
+    stride.enthalpy.max(0.0)
+}
+
 /// What a step of the pair comes to.
 #[derive(Clone, Copy)]
 struct Stride {

@@ -8,6 +8,7 @@ pub mod explicit;
 pub mod family;
 pub mod fire;
 pub mod flux;
+pub mod history;
 pub mod march;
 pub mod parametric;
 pub mod steel;

@@ -6,6 +6,7 @@ use std::sync::Arc;
 use crate::heating::family::{Family, Needed};
 use crate::heating::fire::Fire;
 use crate::heating::flux::{HORIZON, Insulation, Protected};
+use crate::heating::history::History;
 use crate::protection::product::{Kind, Method, Product, ShapeClass};
 use crate::protection::stock::{BuildUp, next_stock};
 use crate::protection::table::{NoFilm, Table};
@@ -85,6 +86,15 @@ impl fmt::Display for Refusal {
 pub trait Families {
     /// The family of a fire, section factor, material and period over a range of thicknesses.
     fn family(&self, demand: &Demand<'_>, insulation: &Insulation, range: (Length, Length)) -> Arc<Family>;
+
+    /// The march of a piece behind a thickness, whose fire and factor are the demand's.
+    fn history(
+        &self,
+        piece: &Protected<'_>,
+        insulation: &Insulation,
+        demand: &Demand<'_>,
+        thickness: Length,
+    ) -> Arc<History>;
 }
 
 /// Families made anew for every question.
@@ -100,6 +110,10 @@ impl Families for Fresh {
             demand.period,
             range,
         ))
+    }
+
+    fn history(&self, piece: &Protected<'_>, _: &Insulation, _: &Demand<'_>, _: Length) -> Arc<History> {
+        Arc::new(History::of_protected(piece))
     }
 }
 
@@ -349,13 +363,14 @@ pub fn heating<'a>(product: &'a Product, demand: &Demand<'a>, provided: Length) 
 
 /// What a thickness provides, within the assessed range.
 #[must_use]
-pub fn performance(product: &Product, demand: &Demand<'_>, provided: Length) -> Performance {
+pub fn performance(product: &Product, demand: &Demand<'_>, provided: Length, families: &impl Families) -> Performance {
     match &product.method {
         Method::Properties(insulation) => {
             let (held, piece) = behind(product, insulation, demand, provided);
-            let at_period = Some(piece.temperature_at(demand.period));
+            let history = families.history(&piece, insulation, &held, provided);
+            let at_period = Some(history.temperature_at(&piece.stage(), demand.period));
             let longest = product.assessed.period.map_or(HORIZON, |range| range.1.min());
-            let reached = piece.time_to(held.limit).map_or(HORIZON, Time::min);
+            let reached = history.time_to(&piece.stage(), held.limit).map_or(HORIZON, Time::min);
             Performance {
                 at_period,
                 resistance: Some(Time::from_min(reached.min(longest))),
