@@ -1,5 +1,6 @@
 //! A cold check of many members beside reading the same file into values by serde_yaml, in one run: time and peak memory
-//! of each, taken in a process of its own. `cargo bench --bench cold_check -- 100000`.
+//! of each, taken in a process of its own. `cargo bench --bench cold_check -- 100000`; with `write FOLDER 10000` it only
+//! writes the frame, for the benchmark of the server.
 
 mod frame;
 
@@ -127,6 +128,14 @@ fn main() {
         Some("values") => Some(values(number(1).unwrap_or(100_000))),
         _ => None,
     };
+    if let (Some("write"), Some(folder)) = (arguments.first().map(String::as_str), arguments.get(1)) {
+        let (text, library) = frame::frame(number(2).unwrap_or(10_000));
+        std::fs::create_dir_all(folder).expect("the folder can be made");
+        for (name, text) in [("frame.steelwork.yaml", text), ("frame.protection.yaml", library)] {
+            std::fs::write(Path::new(folder).join(name), text).expect("the file can be written");
+        }
+        return;
+    }
     if let Some(taken) = one {
         println!("{} {} {}", taken.seconds, taken.before, taken.peak);
         return;

@@ -66,12 +66,14 @@ pub fn frame(members: usize) -> (String, String) {
         }
         let _ = write!(
             text,
-            "    length: {}.{} m\n    loading: {{ utilisation: 0.{:06}{} }}\n    protection: {{ product: product {} }}\n    location: {{ level: {}, grid: {}/{} }}\n",
+            "    length: {}.{} m\n    loading: {{ utilisation: 0.{:06}{} }}\n    protection: {{ product: product {}{} }}\n    location: {{ level: {}, grid: {}/{} }}\n",
             3 + random.below(6),
             random.below(10),
             300_000 + random.below(350_000),
             if column { ", buckling length: 2.1 m" } else { "" },
             n % 8,
+            // As in every frame, some are not right yet.
+            if n % 20 == 7 { ", thickness: 15" } else { "" },
             n % 8,
             char::from(b'A' + (n % 26) as u8),
             n % 40
