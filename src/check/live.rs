@@ -18,7 +18,7 @@ use crate::analysis::memo::Memo;
 use crate::analysis::names::{Sections, lookup_options};
 use crate::analysis::outcome::Outcome;
 use crate::design::model::member::Member;
-use crate::findings::finding::{Finding, Severity};
+use crate::findings::finding::{Finding, Place, Severity};
 use crate::findings::uses::{Uses, is_linked};
 use crate::findings::{self, departures, reading};
 use crate::text::Span;
@@ -310,12 +310,7 @@ impl Shown<'_> {
     /// Its characters.
     #[must_use]
     pub fn span(&self) -> Span {
-        let span = self.finding.place.span;
-        if self.by != 0 && own::within(self.extent, span) {
-            own::shifted(span, self.by)
-        } else {
-            span
-        }
+        self.now(&self.finding.place)
     }
 
     /// Whether it is a slip of the text.
@@ -328,6 +323,23 @@ impl Shown<'_> {
     #[must_use]
     pub fn severity(&self) -> Severity {
         self.finding.severity
+    }
+
+    /// The finding, its places as they were when it was made.
+    #[must_use]
+    pub fn made(&self) -> &Finding {
+        &self.finding
+    }
+
+    /// Where a place of the finding is now.
+    #[must_use]
+    pub fn now(&self, place: &Place) -> Span {
+        let moved = self.by != 0 && place.path == self.finding.place.path && own::within(self.extent, place.span);
+        if moved {
+            own::shifted(place.span, self.by)
+        } else {
+            place.span
+        }
     }
 
     /// The finding.

@@ -7,8 +7,7 @@ use tower_lsp::lsp_types::{
 use crate::analysis::design::FileIndex;
 use crate::check::live::{Live, Shown};
 use crate::editor::view::{View, Within};
-use crate::findings::finding::{Finding, Severity};
-use crate::findings::reading;
+use crate::findings::finding::{Finding, Place, Severity};
 use crate::lsp::convert::Lines;
 use crate::lsp::explain;
 use crate::lsp::shared::Snapshot;
@@ -34,11 +33,9 @@ pub fn of_file(
     let mut diagnostics: Vec<Diagnostic> = chosen
         .into_iter()
         .map(|shown| {
-            let finding = shown.into_finding();
-            let typed = edited
-                .filter(|_| calm)
-                .is_some_and(|line| touches(line, finding.place.span));
-            diagnostic(snapshot, &finding, &lines, typed && reading::is_slip(&finding))
+            let typed = edited.filter(|_| calm).is_some_and(|line| touches(line, shown.span()));
+            let calm = typed && shown.is_slip();
+            diagnostic(snapshot, shown.made(), |place| shown.now(place), &lines, calm)
         })
         .collect();
     if more > 0 {
@@ -91,13 +88,24 @@ fn choose<'a>(mut shown: Vec<Shown<'a>>, favoured: Option<Span>) -> Vec<Shown<'a
     shown
 }
 
-/// A finding in the terms of the protocol.
-pub fn diagnostic(snapshot: &Snapshot, finding: &Finding, lines: &Lines, calm: bool) -> Diagnostic {
+/// A finding in the terms of the protocol; `now` tells where its places are.
+pub fn diagnostic(
+    snapshot: &Snapshot,
+    finding: &Finding,
+    now: impl Fn(&Place) -> Span,
+    lines: &Lines,
+    calm: bool,
+) -> Diagnostic {
     let mut message = finding.message.clone();
     let mut related = Vec::new();
     for note in &finding.notes {
-        match place(snapshot, note.place.as_ref(), finding, lines) {
-            Some(location) if snapshot.client.related => related.push(DiagnosticRelatedInformation {
+        match note
+            .place
+            .as_ref()
+            .filter(|_| snapshot.client.related)
+            .and_then(|place| location(snapshot, place, now(place), finding, lines))
+        {
+            Some(location) => related.push(DiagnosticRelatedInformation {
                 location,
                 message: note.text.clone(),
             }),
@@ -110,7 +118,7 @@ pub fn diagnostic(snapshot: &Snapshot, finding: &Finding, lines: &Lines, calm: b
     let severity = if calm { Severity::Hint } else { finding.severity };
     let unused = finding.name().starts_with("unused-");
     Diagnostic {
-        range: lines.range(finding.place.span),
+        range: lines.range(now(&finding.place)),
         severity: Some(match severity {
             Severity::Error => DiagnosticSeverity::ERROR,
             Severity::Warning => DiagnosticSeverity::WARNING,
@@ -130,19 +138,13 @@ pub fn diagnostic(snapshot: &Snapshot, finding: &Finding, lines: &Lines, calm: b
     }
 }
 
-fn place(
-    snapshot: &Snapshot,
-    place: Option<&crate::findings::finding::Place>,
-    finding: &Finding,
-    lines: &Lines,
-) -> Option<Location> {
-    let place = place?;
+fn location(snapshot: &Snapshot, place: &Place, span: Span, finding: &Finding, lines: &Lines) -> Option<Location> {
     let uri = snapshot.uri(&place.path)?;
     let range = if place.path == finding.place.path {
-        lines.range(place.span)
+        lines.range(span)
     } else {
         let (live, file) = snapshot.find(&place.path)?;
-        snapshot.lines(live, file).range(place.span)
+        snapshot.lines(live, file).range(span)
     };
     Some(Location { uri, range })
 }

@@ -35,6 +35,8 @@ pub struct Worker {
     files: Overlay,
     /// Texts of open documents, with the generation that they are of.
     texts: FxHashMap<PathBuf, (u64, Arc<str>)>,
+    /// Memory for a text on its way there.
+    scratch: String,
     /// Design files in the folders of the editor.
     listed: Vec<PathBuf>,
     listing: Option<u64>,
@@ -53,6 +55,7 @@ impl Worker {
             session: Session::default(),
             files: Overlay::default(),
             texts: FxHashMap::default(),
+            scratch: String::new(),
             listed: Vec::new(),
             listing: None,
             explained: None,
@@ -185,7 +188,8 @@ impl Worker {
                 .get(path)
                 .is_some_and(|(changed, _)| *changed == document.changed);
             if !known {
-                let text = Arc::from(document.buffer.text());
+                document.buffer.write_to(&mut self.scratch);
+                let text = Arc::from(self.scratch.as_str());
                 self.texts.insert(path.clone(), (document.changed, text));
             }
         }

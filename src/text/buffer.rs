@@ -26,6 +26,13 @@ impl Buffer {
         String::from(&self.rope)
     }
 
+    /// Writes the whole text over another, whose memory serves again.
+    pub fn write_to(&self, text: &mut String) {
+        text.clear();
+        text.reserve(self.len());
+        text.extend(self.rope.chunks());
+    }
+
     /// Its length in bytes.
     #[must_use]
     pub fn len(&self) -> usize {
@@ -58,13 +65,27 @@ impl Buffer {
     /// The position of a byte offset. One inside a character counts as its start, one past the end as the end.
     #[must_use]
     pub fn position(&self, offset: usize, encoding: Encoding) -> Position {
-        let at = self.rope.byte_to_char(offset.min(self.rope.len_bytes()));
-        let line = self.rope.char_to_line(at);
-        let start = self.rope.line_to_char(line);
-        let column = match encoding {
-            Encoding::Utf8 => self.rope.char_to_byte(at) - self.rope.line_to_byte(line),
-            Encoding::Utf16 => self.rope.char_to_utf16_cu(at) - self.rope.char_to_utf16_cu(start),
-            Encoding::Utf32 => at - start,
+        let offset = offset.min(self.rope.len_bytes());
+        let (chunk, begin, _, first) = self.rope.chunk_at_byte(offset);
+        let mut local = offset - begin;
+        while !chunk.is_char_boundary(local) {
+            local -= 1;
+        }
+        let (lines, line_start) = breaks(chunk, local);
+        let line = first + lines;
+        let width = |text: &str| match encoding {
+            Encoding::Utf8 => text.len(),
+            Encoding::Utf16 => text.encode_utf16().count(),
+            Encoding::Utf32 => text.chars().count(),
+        };
+        let column = match line_start {
+            Some(start) => width(&chunk[start..local]),
+            // The line began in a chunk before.
+            None => {
+                let start = self.rope.line_to_byte(line);
+                let head = self.rope.byte_slice(start..begin);
+                head.chunks().map(width).sum::<usize>() + width(&chunk[..local])
+            }
         };
         let small = |number: usize| u32::try_from(number).unwrap_or(u32::MAX);
         Position {
@@ -95,6 +116,20 @@ impl Buffer {
         }
         at
     }
+}
+
+/// How many lines end before an offset of a chunk, and where the last of them ends. A CR LF ends where its LF does; chunks
+/// never part one.
+fn breaks(chunk: &str, to: usize) -> (usize, Option<usize>) {
+    let bytes = chunk.as_bytes();
+    let ends = |at: &usize| bytes[*at] == b'\n' || bytes.get(at + 1) != Some(&b'\n');
+    let mut lines = 0;
+    let mut last = None;
+    for at in memchr::memchr2_iter(b'\n', b'\r', &bytes[..to]).filter(ends) {
+        lines += 1;
+        last = Some(at + 1);
+    }
+    (lines, last)
 }
 
 #[cfg(test)]

@@ -24,7 +24,7 @@ pub fn code_actions(asked: &Asked, params: &CodeActionParams) -> Option<Vec<Code
             }
             let answers = action.answers.iter().filter_map(|answer| findings.get(*answer));
             let diagnostics: Vec<_> = answers
-                .map(|finding| diagnostic(&asked.snapshot, finding, &asked.lines, false))
+                .map(|finding| diagnostic(&asked.snapshot, finding, |place| place.span, &asked.lines, false))
                 .collect();
             Some(CodeActionOrCommand::CodeAction(CodeAction {
                 title: action.title,
