@@ -15,7 +15,7 @@ use crate::resistance::grade::{Grade, YieldSource, governing_thickness, yield_st
 use crate::resistance::utilisation::{ActionMix, from_ambient, reduction_factor};
 use crate::section::shadow::shadow_factor;
 use crate::section::{Casing, Exposure, Geometry, Kind, heated};
-use crate::units::{Force, Length, Stress, Temperature, Time};
+use crate::units::{Force, Length, SectionFactor, Stress, Temperature, Time};
 
 /// Works out a member. Nothing is claimed that its inputs do not carry.
 #[must_use]
@@ -113,9 +113,28 @@ pub(super) fn demand<'a>(
     kind: Option<Kind>,
     (limit, period): (Temperature, Time),
 ) -> Demand<'a> {
+    asked(inputs, fire, exposed.factor, kind, (limit, period))
+}
+
+/// What a member would ask of a protection that encases it at a section factor; `limit` is the critical temperature of
+/// the protected member. `None` where its section, fire or period is not known, or no fire resistance is wanted.
+#[must_use]
+pub fn demand_at(inputs: &Inputs, factor: SectionFactor, limit: Temperature) -> Option<Demand<'_>> {
+    let kind = inputs.section.as_ref()?.shape.geometry().ok()?.kind;
+    let fire = inputs.fire.as_ref()?;
+    Some(asked(inputs, fire, factor, kind, (limit, inputs.period?)))
+}
+
+fn asked<'a>(
+    inputs: &Inputs,
+    fire: &'a Fire,
+    factor: SectionFactor,
+    kind: Option<Kind>,
+    (limit, period): (Temperature, Time),
+) -> Demand<'a> {
     Demand {
         fire,
-        factor: effective_factor(exposed.factor),
+        factor: effective_factor(factor),
         limit,
         period,
         shape: shape_class(kind),

@@ -272,11 +272,7 @@ fn cover(keys: &Inherited<'_>, design: &Design, fire: &str) -> Cover {
     let Some(product) = named.product.as_ref().filter(|_| !item.is_broken()) else {
         return Cover::Unknown;
     };
-    let fire_assessed = if named.fires.is_empty() {
-        fire == "standard"
-    } else {
-        named.fires.iter().any(|assessed| assessed.value == fire)
-    };
+    let fire_assessed = named.serves_in(fire);
     let layers = if product.kind == crate::protection::product::Kind::Coating {
         stated.dft.value().copied().into_iter().collect()
     } else {

@@ -1,6 +1,7 @@
 //! What an editor shows beside the findings: plain functions on byte offsets, free of any protocol.
 
 pub mod actions;
+pub mod completion;
 pub mod cursor;
 pub mod definition;
 mod depart;

@@ -27,6 +27,17 @@ pub struct NamedProduct {
     pub extent: Extent,
 }
 
+impl NamedProduct {
+    /// Whether it was assessed for a fire, by its name.
+    #[must_use]
+    pub fn serves_in(&self, fire: &str) -> bool {
+        if self.fires.is_empty() {
+            return fire == "standard";
+        }
+        self.fires.iter().any(|assessed| assessed.value == fire)
+    }
+}
+
 /// The report that a product's data comes from.
 #[derive(Debug, Clone, PartialEq, Default)]
 pub struct Evidence {

@@ -70,7 +70,13 @@ pub static SLIPS: &[&Declaration] = &[
 /// Whether a finding is a slip of a file.
 #[must_use]
 pub fn is_slip(finding: &Finding) -> bool {
-    SLIPS.iter().any(|slip| std::ptr::eq(*slip, finding.declaration))
+    is_declared_slip(finding.declaration)
+}
+
+/// Whether a declaration is one of slips.
+#[must_use]
+pub fn is_declared_slip(declaration: &Declaration) -> bool {
+    SLIPS.iter().any(|slip| std::ptr::eq(*slip, declaration))
 }
 
 /// The declaration of a slip's finding.

@@ -123,7 +123,7 @@ impl Index {
 }
 
 /// Other names in the trade for a family, taken only where no row goes by the name itself.
-fn other_name(letters: &str, numbers: usize) -> Option<&'static str> {
+pub(super) fn other_name(letters: &str, numbers: usize) -> Option<&'static str> {
     Some(match letters {
         "unp" => "upn",
         "u" if numbers == 1 => "upn",
@@ -140,7 +140,7 @@ fn other_name(letters: &str, numbers: usize) -> Option<&'static str> {
 }
 
 /// The keys under which a row is found: its designation, and the short forms in use.
-fn keys(row: &CatalogueRow) -> Vec<String> {
+pub(super) fn keys(row: &CatalogueRow) -> Vec<String> {
     let Some(key) = Key::of(&row.designation) else {
         return Vec::new();
     };

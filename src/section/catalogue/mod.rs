@@ -8,12 +8,14 @@ mod find;
 mod key;
 mod nearest;
 mod read;
+mod typed;
 
 use std::fmt;
 use std::sync::OnceLock;
 
 pub use family::family_neighbours;
 pub use find::{Lookup, LookupOptions, find, row};
+pub use typed::{Begun, alike, beginning};
 
 use crate::section::geometry::Geometry;
 use crate::section::properties::Properties;

@@ -50,7 +50,7 @@ impl Form {
 }
 
 /// A text as written, squeezed: lower case, without spaces.
-fn squeezed(text: &str) -> String {
+pub(super) fn squeezed(text: &str) -> String {
     text.chars()
         .filter(|c| !c.is_whitespace() && !matches!(c, '-' | '_'))
         .flat_map(char::to_lowercase)

@@ -1,0 +1,144 @@
+//! Section designations.
+
+use std::fmt::Write;
+
+use crate::analysis::exposure::reached;
+use crate::analysis::inputs::row_of;
+use crate::analysis::names::lookup_options;
+use crate::design::model::member::SectionChoice;
+use crate::editor::completion::item::{Completion, CompletionKind, Completions, Writer, scalar};
+use crate::editor::completion::{Here, MOST, value};
+use crate::section::catalogue::{Begun, CatalogueRow, LookupOptions, alike, beginning};
+use crate::section::{Casing, Exposure, heated};
+use crate::units::{DisplayUnits, significant};
+
+/// What the figures of a section are worked out for.
+struct Shown {
+    exposure: Exposure,
+    casing: Casing,
+    units: DisplayUnits,
+}
+
+impl Here<'_> {
+    pub(super) fn sections(&self, writer: &Writer, found: &mut Completions) {
+        let options = lookup_options(self.view.design.basis());
+        let typed = writer.typed.trim();
+        let (mut begun, more) = beginning(typed, &options, MOST);
+        found.incomplete |= more;
+        let shown = self.shown();
+        if begun.is_empty() {
+            // What is misspelt is compared anew as it changes.
+            found.incomplete = true;
+            let near = alike(typed, &options).into_iter();
+            found.items.extend(near.map(|row| shown.item(writer, row, "")));
+            return;
+        }
+        if let Some(like) = self.neighbour(&options) {
+            if more {
+                // Those of its family may lie behind the first that fit.
+                begun = family_first(begun, like, typed, &options);
+            }
+            let other = |begun: &Begun| begun.row.family != like.family || begun.row.table != like.table;
+            begun.sort_by_key(|begun| (!begun.rest.is_empty(), other(begun)));
+        }
+        let items = begun.iter().map(|begun| shown.item(writer, begun.row, &begun.rest));
+        found.items.extend(items);
+    }
+
+    fn shown(&self) -> Shown {
+        let keys = self.inherited();
+        let stated = value(keys.as_ref(), |keys| &keys.exposure).copied();
+        let shield = value(keys.as_ref(), |keys| &keys.shield).copied();
+        let protection = value(keys.as_ref(), |keys| &keys.protection);
+        let product = protection.and_then(|stated| {
+            let name = stated.product.as_ref()?;
+            self.view.design.product(&name.value)?.1.value().product.as_ref()
+        });
+        let boxed = product.is_some_and(|product| {
+            let stated = protection.and_then(|stated| stated.boxed.value().copied());
+            stated.unwrap_or_else(|| product.boxes_by_default())
+        });
+        Shown {
+            exposure: reached(stated.unwrap_or(Exposure::AllRound), shield).exposure,
+            casing: if boxed { Casing::Box } else { Casing::Profile },
+            units: self.units(),
+        }
+    }
+
+    pub(super) fn units(&self) -> DisplayUnits {
+        if self.view.design.basis().imperial {
+            DisplayUnits::Imperial
+        } else {
+            DisplayUnits::Metric
+        }
+    }
+
+    /// The section of the member before this one: its family is the likeliest.
+    fn neighbour(&self, options: &LookupOptions) -> Option<&'static CatalogueRow> {
+        let members = &self.view.source().members;
+        let before = members.partition_point(|item| item.base() < self.place.replaces.start);
+        let own = usize::from(self.member.is_some());
+        let near = members[..before.saturating_sub(own)].iter().rev().take(3);
+        near.map(|item| item.value().keys.section.value())
+            .find_map(|choice: Option<&SectionChoice>| row_of(choice, options))
+    }
+}
+
+/// The rows of a family before all others that were found.
+fn family_first(begun: Vec<Begun>, like: &CatalogueRow, typed: &str, options: &LookupOptions) -> Vec<Begun> {
+    let only = LookupOptions {
+        tables: Some(vec![like.table]),
+        ..options.clone()
+    };
+    let (own, _) = beginning(typed, &only, usize::MAX);
+    let own = own.into_iter().filter(|begun| begun.row.family == like.family);
+    let mut all: Vec<Begun> = own.collect();
+    for begun in begun {
+        if !all.iter().any(|known| std::ptr::eq(known.row, begun.row)) {
+            all.push(begun);
+        }
+    }
+    all
+}
+
+impl Shown {
+    fn item(&self, writer: &Writer, row: &'static CatalogueRow, rest: &str) -> Completion {
+        let mut item = writer.text(&row.designation, CompletionKind::Section, &scalar(&row.designation));
+        if !writer.typed.trim().is_empty() {
+            item.filter = writer.filter(rest);
+        }
+        let mass = format!("{} kg/m", significant(row.mass.kg_m(), 1));
+        let factor = heated(row.geometry(), self.exposure, self.casing).ok();
+        let word = if self.casing == Casing::Box { "boxed " } else { "" };
+        let detail = match factor {
+            Some(heated) => format!("{mass}, {word}{}", self.units.section_factor(heated.factor)),
+            None => mass,
+        };
+        item.with(detail, self.table(row))
+    }
+
+    /// The section factors of each exposure, with dimensions and standard.
+    fn table(&self, row: &CatalogueRow) -> String {
+        let geometry = row.geometry();
+        let mut text = format!(
+            "{}, {} table, {} kg/m, {} mm²\n\n| exposure | profile | box |\n|---|---|---|\n",
+            row.standard,
+            row.table,
+            significant(row.mass.kg_m(), 1),
+            significant(geometry.area.mm2(), 0)
+        );
+        for (words, exposure) in [("all round", Exposure::AllRound), ("three sides", Exposure::ThreeSides)] {
+            let cell = |casing| match heated(geometry, exposure, casing) {
+                Ok(heated) => format!(
+                    "{} (V/A {})",
+                    self.units.section_factor(heated.factor),
+                    self.units.thickness(heated.effective_thickness())
+                ),
+                Err(_) => "-".to_owned(),
+            };
+            // Writing to a string does not fail.
+            let _ = writeln!(text, "| {words} | {} | {} |", cell(Casing::Profile), cell(Casing::Box));
+        }
+        text
+    }
+}
