@@ -2,7 +2,9 @@
 
 use crate::analysis::inputs::{Cover, Inputs, ProductInput, SectionInput};
 use crate::analysis::memo::Memo;
-use crate::analysis::outcome::{BareState, Critical, ExposedSection, Gap, LimitFrom, Outcome, ProtectedState, Verdict};
+use crate::analysis::outcome::{
+    BareState, Buckling, Critical, ExposedSection, Gap, LimitFrom, Outcome, ProtectedState, Verdict,
+};
 use crate::design::model::head::Factors;
 use crate::design::model::member::{Load, Reduction, Role, Steel, Surface};
 use crate::heating::fire::Fire;
@@ -10,6 +12,7 @@ use crate::heating::flux::{Bare, Emissivity, effective_factor};
 use crate::protection::product::{Kind as ProductKind, ShapeClass};
 use crate::protection::requirement::{self, Demand, Refusal};
 use crate::protection::stock;
+use crate::resistance::buckling::{Lengths, governing_slenderness};
 use crate::resistance::critical::{self, Actions, Loading, Unverified, critical_temperature};
 use crate::resistance::grade::{Grade, YieldSource, governing_thickness, yield_strength};
 use crate::resistance::utilisation::{ActionMix, from_ambient, reduction_factor};
@@ -63,19 +66,24 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
     if inputs.not_covered.iter().any(|(key, _)| *key != "method") {
         return outcome;
     }
-    match limit(inputs, section, &geometry) {
-        Ok(critical) => {
+    // What is written of the limit and can't be read is told where it stands, and nothing is taken in its place.
+    let unread = |key| inputs.unread.contains(&key);
+    let hidden = unread("critical temperature") || inputs.stated.is_none() && unread("loading");
+    let found = (!hidden).then(|| limit(inputs, section, &geometry));
+    match found {
+        None => {}
+        Some(Ok(critical)) => {
             if let Some(section) = &mut outcome.section {
                 section.class = critical.1;
             }
             outcome.critical = Some(critical.0);
         }
-        Err(Unverified::FailsCold { utilisation, .. }) => {
+        Some(Err(Unverified::FailsCold { utilisation, .. })) => {
             cold = true;
             outcome.gaps.push(Gap::FailsCold(utilisation));
         }
-        Err(Unverified::Missing(key)) => outcome.gaps.push(Gap::Missing(key)),
-        Err(Unverified::NotCovered(why)) => outcome.gaps.push(Gap::CriticalTemperature(why)),
+        Some(Err(Unverified::Missing(key))) => outcome.gaps.push(Gap::Missing(key)),
+        Some(Err(Unverified::NotCovered(why))) => outcome.gaps.push(Gap::CriticalTemperature(why)),
     }
     let piece = bare_piece(inputs, fire, &exposed);
     let history = memo.bare(&piece);
@@ -203,6 +211,7 @@ fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result
             by_loading: by_loading.as_ref().map(|(critical, _)| critical.as_built),
             from: LimitFrom::Stated,
             governing: "stated".to_owned(),
+            buckling: None,
         };
         return Ok((critical, by_loading.and_then(|(_, class)| class)));
     }
@@ -237,8 +246,36 @@ fn by_loading(
         by_loading: None,
         from: LimitFrom::Loading,
         governing: if bare { limit.governing_bare } else { limit.governing },
+        buckling: ignored_buckling(loading, section, member.fy, role),
     };
     Ok((critical, limit.class))
+}
+
+/// The least slenderness from which on buckling counts (EN 1993-1-1:2005 6.3.1.2 (4)).
+const STOCKY: f64 = 0.2;
+
+/// What a utilisation leaves out: (4.22) is not for members whose stability is to be considered (EN 1993-1-2:2005 4.2.4
+/// (2)), as that of all that may be compressed is.
+fn ignored_buckling(
+    loading: &crate::design::model::member::Loading,
+    section: &SectionInput,
+    fy: Stress,
+    role: Role,
+) -> Option<Buckling> {
+    let alone = matches!(loading.load, Load::Utilisation(_) | Load::Ambient { .. });
+    if !alone || role.reads_as_beam() || role.is_tie() {
+        return None;
+    }
+    let restraint = &loading.restraint;
+    let (Some(major), Ok(Some(properties))) = (restraint.buckling_length, section.shape.properties()) else {
+        return Some(Buckling::LengthUnknown);
+    };
+    let lengths = Lengths {
+        y: major,
+        z: restraint.buckling_length_minor.unwrap_or(major),
+    };
+    let (_, slenderness) = governing_slenderness(&section.shape, &properties, fy, lengths);
+    (slenderness > STOCKY).then_some(Buckling::Slender(slenderness))
 }
 
 fn default_limit(inputs: &Inputs) -> Result<(Critical, Option<u8>), Unverified> {
@@ -253,6 +290,7 @@ fn default_limit(inputs: &Inputs) -> Result<(Critical, Option<u8>), Unverified> 
                 by_loading: None,
                 from: LimitFrom::Default,
                 governing: "the named default of the basis of design".to_owned(),
+                buckling: None,
             },
             None,
         )),

@@ -70,6 +70,18 @@ pub struct Critical {
     pub from: LimitFrom,
     /// The clause that set it.
     pub governing: String,
+    /// Whether a utilisation set it that takes no account of buckling, though the member may buckle.
+    pub buckling: Option<Buckling>,
+}
+
+/// What is known of the buckling of a member whose critical temperature ignores it.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub enum Buckling {
+    /// Its buckling length is not given.
+    LengthUnknown,
+    /// The non-dimensional slenderness at 20 °C by its buckling length; above 0.2, below which buckling may be ignored
+    /// (EN 1993-1-1:2005 6.3.1.2 (4)).
+    Slender(f64),
 }
 
 impl Critical {

@@ -1,6 +1,7 @@
 //! The one sequence that server, command line and tests call: read, evaluate, find, depart.
 
 mod around;
+mod kept;
 pub mod live;
 mod own;
 pub mod session;

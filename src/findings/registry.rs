@@ -65,6 +65,7 @@ pub static REGISTRY: &[&Declaration] = &[
     &fire::critical_temperature_unknown::DECLARATION,
     &fire::critical_temperature_assumed::DECLARATION,
     &fire::critical_temperature_too_high::DECLARATION,
+    &fire::critical_temperature_ignores_buckling::DECLARATION,
     &fire::class_4_temperature::DECLARATION,
     &fire::ambient_check_fails::DECLARATION,
     &fire::section_factor_low::DECLARATION,

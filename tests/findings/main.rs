@@ -1,5 +1,6 @@
 //! Every finding's example through the one sequence: the text before has the finding, the text after has not.
 
+mod limits;
 mod every_verdict;
 mod supports;
 

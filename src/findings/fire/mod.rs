@@ -5,6 +5,7 @@ pub mod bare_steel_fails;
 pub mod class_4_temperature;
 pub mod coating_environment;
 pub mod critical_temperature_assumed;
+pub mod critical_temperature_ignores_buckling;
 pub mod critical_temperature_too_high;
 pub mod critical_temperature_unknown;
 pub mod evidence_expired;
@@ -30,6 +31,7 @@ pub(super) fn member(cx: &mut Context<'_>) {
     critical_temperature_unknown::check(cx);
     critical_temperature_assumed::check(cx);
     critical_temperature_too_high::check(cx);
+    critical_temperature_ignores_buckling::check(cx);
     class_4_temperature::check(cx);
     section_factor_low::check(cx);
     fire_outside_validity::check(cx);
