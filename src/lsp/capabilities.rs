@@ -29,6 +29,10 @@ pub fn capabilities(client: &Client) -> ServerCapabilities {
             })),
             ..TextDocumentSyncOptions::default()
         })),
+        completion_provider: Some(CompletionOptions {
+            trigger_characters: Some([" ", ":", ",", "{", "[", "-"].map(str::to_owned).to_vec()),
+            ..CompletionOptions::default()
+        }),
         hover_provider: Some(HoverProviderCapability::Simple(true)),
         inlay_hint_provider: Some(OneOf::Left(true)),
         definition_provider: Some(OneOf::Left(true)),

@@ -14,7 +14,7 @@ use tower_lsp::{Client as Editor, LanguageServer, LspService, Server as Transpor
 use tower_service::Service;
 
 use crate::lsp::documents::{Document, path_of};
-use crate::lsp::requests::{actions, ask, ask_all, commands, diagnose, links, names, outline, reading};
+use crate::lsp::requests::{actions, ask, ask_all, commands, complete, diagnose, links, names, outline, reading};
 use crate::lsp::settings::{Client, Settings};
 use crate::lsp::shared::{Shared, lock};
 use crate::lsp::worker::Worker;
@@ -332,6 +332,14 @@ impl LanguageServer for Server {
     async fn inlay_hint(&self, params: InlayHintParams) -> Result<Option<Vec<InlayHint>>> {
         ask(&self.shared, &params.text_document.uri, move |asked| {
             reading::hinted(asked, params.range)
+        })
+        .await
+    }
+
+    async fn completion(&self, params: CompletionParams) -> Result<Option<CompletionResponse>> {
+        let at = params.text_document_position;
+        ask(&self.shared, &at.text_document.uri, move |asked| {
+            complete::completed(asked, at.position)
         })
         .await
     }

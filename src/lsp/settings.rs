@@ -1,7 +1,7 @@
 //! What the editor can do and what its user wants.
 
 use serde::Deserialize;
-use tower_lsp::lsp_types::{ClientCapabilities, MarkupKind, PositionEncodingKind};
+use tower_lsp::lsp_types::{ClientCapabilities, InsertTextMode, MarkupKind, PositionEncodingKind};
 
 use crate::text::Encoding;
 
@@ -10,6 +10,10 @@ use crate::text::Encoding;
 pub struct Client {
     /// How it counts columns.
     pub encoding: Encoding,
+    /// Whether it inserts snippets.
+    pub snippets: bool,
+    /// Whether it indents the lines of a completion as the first.
+    pub indents: bool,
     /// Whether hovers may be Markdown.
     pub markdown: bool,
     /// Whether it shows pictures in Markdown.
@@ -78,6 +82,8 @@ impl Default for Client {
     fn default() -> Self {
         Self {
             encoding: Encoding::Utf16,
+            snippets: false,
+            indents: false,
             markdown: false,
             images: false,
             related: false,
@@ -100,9 +106,14 @@ impl Client {
         let general = capabilities.general.as_ref();
         let hover = document.and_then(|document| document.hover.as_ref());
         let formats = hover.and_then(|hover| hover.content_format.as_ref());
+        let item = document.and_then(|document| document.completion.as_ref()?.completion_item.as_ref());
         let yes = |flag: Option<bool>| flag.unwrap_or(false);
         Self {
             encoding: encoding(general.and_then(|general| general.position_encodings.as_deref())),
+            snippets: yes(item.and_then(|item| item.snippet_support)),
+            indents: item
+                .and_then(|item| item.insert_text_mode_support.as_ref())
+                .is_some_and(|modes| modes.value_set.contains(&InsertTextMode::ADJUST_INDENTATION)),
             markdown: formats.is_some_and(|formats| formats.contains(&MarkupKind::Markdown)),
             // No capability tells whether pictures are shown; a parser of web pages' Markdown does show them.
             images: general

@@ -10,9 +10,16 @@ fn an_unreadable_loading_is_told_once_and_proves_nothing() {
         let text = format!("- {{ mark: B1, section: IPE 300, protection: grey board, loading: {loading} }}");
         let checked = check(&text);
         let names = names(&checked);
-        assert!(!names.contains(&"critical-temperature-unknown"), "{loading}: {:#?}", messages(&checked));
+        assert!(
+            !names.contains(&"critical-temperature-unknown"),
+            "{loading}: {:#?}",
+            messages(&checked)
+        );
         assert_eq!(checked.outcomes[0].verdict, Verdict::NotVerified, "{loading}");
-        let errors = checked.findings.iter().filter(|finding| finding.severity == Severity::Error);
+        let errors = checked
+            .findings
+            .iter()
+            .filter(|finding| finding.severity == Severity::Error);
         assert_eq!(errors.count(), 1, "{loading}: {:#?}", messages(&checked));
     }
 }
@@ -20,9 +27,14 @@ fn an_unreadable_loading_is_told_once_and_proves_nothing() {
 #[test]
 fn a_utilisation_of_what_may_buckle_is_doubted() {
     let of = |role: &str, loading: &str| {
-        let text = format!("- {{ mark: C1, role: {role}, section: HE 200 B, period: 30, protection: grey board, loading: {loading} }}");
+        let text = format!(
+            "- {{ mark: C1, role: {role}, section: HE 200 B, period: 30, protection: grey board, loading: {loading} }}"
+        );
         let checked = check(&text);
-        let doubts = checked.findings.iter().filter(|f| f.name() == "critical-temperature-ignores-buckling");
+        let doubts = checked
+            .findings
+            .iter()
+            .filter(|f| f.name() == "critical-temperature-ignores-buckling");
         doubts.map(|finding| finding.message.clone()).collect::<Vec<_>>()
     };
     for role in ["column", "brace", "truss chord", "truss web"] {

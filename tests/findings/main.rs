@@ -1,7 +1,7 @@
 //! Every finding's example through the one sequence: the text before has the finding, the text after has not.
 
-mod limits;
 mod every_verdict;
+mod limits;
 mod supports;
 
 use std::path::{Path, PathBuf};

@@ -197,3 +197,37 @@ fn the_schedule_and_explanations_come_by_command() {
     assert!(client.answer(id).get("error").is_some());
     assert_eq!(client.stop(), 0);
 }
+
+#[test]
+fn what_fits_is_offered_as_it_is_typed() {
+    let items = |capabilities: Value, section: &str| {
+        let (mut client, _) = Client::start(capabilities, Value::Null, &[]);
+        let text = PAIR.replace("IPE 300", section);
+        client.open(URI, 1, &text);
+        let line = text.lines().nth(5).unwrap();
+        let at_end = line.find("section: ").unwrap() + "section: ".len() + section.len();
+        let list = client.request("textDocument/completion", at(5, u32::try_from(at_end).unwrap()));
+        let mut blank = text.clone();
+        blank.push_str("  -");
+        client.change(URI, 2, json!([{ "text": blank }]));
+        let lines = u32::try_from(blank.lines().count()).unwrap();
+        let members = client.request("textDocument/completion", at(lines - 1, 3));
+        assert_eq!(client.stop(), 0);
+        (list, members)
+    };
+    let snippets = json!({ "textDocument": { "completion": { "completionItem": { "snippetSupport": true } } } });
+    let (list, members) = items(snippets, "heb24");
+    assert_eq!(list["items"][0]["label"], "HE 240 B");
+    assert_eq!(list["items"][0]["textEdit"]["newText"], "HE 240 B");
+    assert_eq!(list["items"][0]["textEdit"]["range"]["start"]["line"], 5);
+    assert!(members.to_string().contains("\"insertTextFormat\":2"), "{members}");
+    let (list, members) = items(json!({}), "IPE 3");
+    let labels: Vec<&str> = list["items"]
+        .as_array()
+        .unwrap()
+        .iter()
+        .filter_map(|item| item["label"].as_str())
+        .collect();
+    assert!(labels.contains(&"IPE 300") && labels.contains(&"IPE 330"), "{labels:?}");
+    assert!(!members.to_string().contains("${"), "{members}");
+}

@@ -2,6 +2,7 @@
 
 pub mod actions;
 pub mod commands;
+pub mod complete;
 pub mod diagnose;
 pub mod links;
 pub mod names;
