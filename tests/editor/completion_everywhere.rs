@@ -64,14 +64,8 @@ fn nothing_breaks_in_a_scenario_that_is_broken_off() {
     }
 }
 
-/// How many texts of the file are no YAML.
-fn unreadable(text: &str) -> usize {
-    scorchline::syntax::file::read(text).all_errors().len()
-}
-
-#[test]
-fn what_is_chosen_leaves_a_text_that_reads() {
-    let block = "members:
+/// Members in many ways of writing.
+const BLOCK: &str = "members:
   - mark: B1
     group: floors
     length: 7.5   # between grids
@@ -94,7 +88,15 @@ fn what_is_chosen_leaves_a_text_that_reads() {
     section:
   -
 ";
-    let block = format!("{HEAD}{block}");
+
+/// How many places of a text are no YAML.
+fn unreadable(text: &str) -> usize {
+    scorchline::syntax::file::read(text).all_errors().len()
+}
+
+#[test]
+fn what_is_chosen_leaves_a_text_that_reads() {
+    let block = format!("{HEAD}{BLOCK}");
     let crlf = block.replace('\n', "\r\n");
     let mut texts: Vec<(&str, &str)> = vec![("frame.steelwork.yaml", &block), ("frame.steelwork.yaml", &crlf)];
     texts.push(scorchline::scenario::FILES[0]);
@@ -103,16 +105,14 @@ fn what_is_chosen_leaves_a_text_that_reads() {
     for (name, text) in texts {
         let before = unreadable(text);
         let files = [(name, text), ("demo.protection.yaml", EXAMPLE_LIBRARY)];
-        let step = if text.len() > 3000 { 7 } else { 1 };
+        let step = if text.len() > 3000 { 13 } else { 2 };
         everywhere(&files, name, step, |fixture, text| {
             let kept = |item: &&Completion| item.kind != CompletionKind::Section;
             for item in asked(fixture).items.iter().filter(kept) {
                 let after = applied(text, item);
-                let errors = scorchline::syntax::file::read(&after).all_errors();
-                let line = text[..fixture.offset as usize].matches('\n').count() + 1;
                 assert!(
-                    errors.len() <= before,
-                    "`{}` at {line}: {:?}\n{errors:?}\n{after}",
+                    unreadable(&after) <= before,
+                    "`{}` at {}:\n{after}",
                     item.label,
                     fixture.offset
                 );
@@ -121,4 +121,26 @@ fn what_is_chosen_leaves_a_text_that_reads() {
         });
     }
     assert!(count > 10_000, "{count}");
+}
+
+#[test]
+fn what_is_chosen_where_the_text_still_ends_leaves_no_more_that_does_not_read() {
+    let whole = format!("{HEAD}{BLOCK}");
+    let mut count = 0;
+    for cut in (HEAD.len()..whole.len()).step_by(2) {
+        let text = &whole[..cut];
+        let before = unreadable(text);
+        let mut fixture = several(&[
+            ("frame.steelwork.yaml", text),
+            ("demo.protection.yaml", EXAMPLE_LIBRARY),
+        ]);
+        fixture.offset = u32::try_from(cut).unwrap();
+        sound(&fixture, text);
+        for item in asked(&fixture).items.iter().take(40) {
+            let after = applied(text, item);
+            assert!(unreadable(&after) <= before, "`{}`:\n{after}", item.label);
+            count += 1;
+        }
+    }
+    assert!(count > 2_000, "{count}");
 }

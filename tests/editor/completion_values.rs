@@ -207,3 +207,61 @@ fn findings_of_the_member_come_first_in_a_departure() {
         &["bare-steel-fails"],
     );
 }
+
+#[test]
+fn the_form_that_is_stated_is_the_one_judged() {
+    let needs = |form: &str| {
+        let items = offered(&format!(
+            "  - {{ mark: B1, section: IPE 300, protection: {{ form: {form}, product: | }} }}\n"
+        ));
+        let item = items.into_iter().find(|item| item.label == "grey board").unwrap();
+        item.documentation
+    };
+    assert_ne!(needs("box"), needs("profile"));
+}
+
+#[test]
+fn an_editor_finds_what_was_typed_in_the_filter() {
+    for (typed, quote) in [
+        ("heb2", ""),
+        ("HE 2", ""),
+        ("unp", ""),
+        ("hfshs 150", ""),
+        ("\"ipe 3", "\""),
+    ] {
+        let items = offered(&format!("  - {{ mark: B1, section: {typed}|{quote} }}\n"));
+        assert_eq!(items[0].kind, CompletionKind::Section);
+        for item in items.iter().filter(|item| item.kind == CompletionKind::Section) {
+            assert!(item.filter.starts_with(typed), "{typed}: {}", item.filter);
+        }
+    }
+    let quoted = offered("  - { mark: C1 }\n  - { mark: B1, supported by: ['C|'] }\n");
+    assert_eq!((quoted[0].filter.as_str(), quoted[0].text.as_str()), ("'C1", "C1"));
+}
+
+#[test]
+fn many_products_are_judged_those_first_whose_name_is_typed() {
+    let board = |n: u32| {
+        format!(
+            "  board {n}: {{ kind: board, method: constant properties, conductivity: 0.2, specific heat: 1000, density: 800, assessed: {{ section factor: [40, 400], thickness: [10, 80], steel temperature: [350, 750], period: [30, 180] }} }}\n"
+        )
+    };
+    let library: String = (1..=50).map(board).collect();
+    let ask = |typed: &str| {
+        let frame = format!(
+            "steelwork: 1\nlibraries: [many.protection.yaml]\ndefaults: {{ role: beam, steel: S355, period: 60 }}\nmembers:\n  - {{ mark: B1, section: IPE 300, critical temperature: 550, protection: {typed}| }}\n"
+        );
+        asked(&crate::fixture::several(&[
+            ("frame.steelwork.yaml", &frame),
+            ("many.protection.yaml", &format!("protection: 1\nproducts:\n{library}")),
+        ]))
+    };
+    let judged = |label: &str, typed: &str| {
+        let found = ask(typed);
+        assert!(found.incomplete);
+        let item = found.items.into_iter().find(|item| item.label == label);
+        item.unwrap().detail.contains("needs")
+    };
+    assert!(judged("board 1", "") && !judged("board 50", ""));
+    assert!(judged("board 50", "board 5"));
+}

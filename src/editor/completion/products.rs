@@ -12,6 +12,9 @@ use crate::protection::product::{Kind, Product};
 use crate::protection::requirement::{Fresh, Refusal, requirement};
 use crate::units::{Length, SectionFactor, significant};
 
+/// How many products are judged at once: a march through a fire takes its time.
+const JUDGED: usize = 32;
+
 /// A product judged for the member.
 enum Judged {
     /// It holds the member: the thickness needed, and what to buy.
@@ -37,16 +40,21 @@ impl Here<'_> {
     pub(super) fn products(&self, writer: &Writer, found: &mut Completions) {
         let design = self.view.design;
         let mut products: Vec<_> = design.products.iter().collect();
-        products.sort_by_key(|(_, place)| **place);
+        products.sort_by_key(|(name, place)| (writer.fits(name).unwrap_or(u8::MAX), **place));
+        found.incomplete |= products.len() > JUDGED;
         let asked = self.asked();
         let mut judged: Vec<(&String, &NamedProduct, Judged)> = products
             .into_iter()
-            .map(|(name, (file, index))| {
+            .enumerate()
+            .map(|(nth, (name, (file, index)))| {
                 let item = &design.files[*file].products[*index];
                 let named = item.value();
                 let verdict = match (&asked, named.product.as_deref().filter(|_| !item.is_broken())) {
                     (_, None) => Judged::Fails("its entry can't be read".to_owned()),
                     (Err(why), Some(_)) => Judged::Unknown(why.clone()),
+                    (Ok(_), Some(_)) if nth >= JUDGED => {
+                        Judged::Unknown("What is needed of it is told when more of its name is typed.".to_owned())
+                    }
                     (Ok(asked), Some(product)) => self.judge(asked, named, product),
                 };
                 (name, named, verdict)

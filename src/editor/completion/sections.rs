@@ -8,7 +8,7 @@ use crate::analysis::names::lookup_options;
 use crate::design::model::member::SectionChoice;
 use crate::editor::completion::item::{Completion, CompletionKind, Completions, Writer, scalar};
 use crate::editor::completion::{Here, MOST, value};
-use crate::section::catalogue::{Begun, CatalogueRow, LookupOptions, alike, beginning};
+use crate::section::catalogue::{CatalogueRow, LookupOptions, alike, beginning};
 use crate::section::{Casing, Exposure, heated};
 use crate::units::{DisplayUnits, significant};
 
@@ -23,7 +23,9 @@ impl Here<'_> {
     pub(super) fn sections(&self, writer: &Writer, found: &mut Completions) {
         let options = lookup_options(self.view.design.basis());
         let typed = writer.typed.trim();
-        let (mut begun, more) = beginning(typed, &options, MOST);
+        // The family of the neighbour is the likeliest.
+        let like = self.neighbour(&options);
+        let (begun, more) = beginning(typed, &options, like, MOST);
         found.incomplete |= more;
         let shown = self.shown();
         if begun.is_empty() {
@@ -32,14 +34,6 @@ impl Here<'_> {
             let near = alike(typed, &options).into_iter();
             found.items.extend(near.map(|row| shown.item(writer, row, "")));
             return;
-        }
-        if let Some(like) = self.neighbour(&options) {
-            if more {
-                // Those of its family may lie behind the first that fit.
-                begun = family_first(begun, like, typed, &options);
-            }
-            let other = |begun: &Begun| begun.row.family != like.family || begun.row.table != like.table;
-            begun.sort_by_key(|begun| (!begun.rest.is_empty(), other(begun)));
         }
         let items = begun.iter().map(|begun| shown.item(writer, begun.row, &begun.rest));
         found.items.extend(items);
@@ -73,7 +67,7 @@ impl Here<'_> {
         }
     }
 
-    /// The section of the member before this one: its family is the likeliest.
+    /// The section of a member shortly before this one.
     fn neighbour(&self, options: &LookupOptions) -> Option<&'static CatalogueRow> {
         let members = &self.view.source().members;
         let before = members.partition_point(|item| item.base() < self.place.replaces.start);
@@ -82,23 +76,6 @@ impl Here<'_> {
         near.map(|item| item.value().keys.section.value())
             .find_map(|choice: Option<&SectionChoice>| row_of(choice, options))
     }
-}
-
-/// The rows of a family before all others that were found.
-fn family_first(begun: Vec<Begun>, like: &CatalogueRow, typed: &str, options: &LookupOptions) -> Vec<Begun> {
-    let only = LookupOptions {
-        tables: Some(vec![like.table]),
-        ..options.clone()
-    };
-    let (own, _) = beginning(typed, &only, usize::MAX);
-    let own = own.into_iter().filter(|begun| begun.row.family == like.family);
-    let mut all: Vec<Begun> = own.collect();
-    for begun in begun {
-        if !all.iter().any(|known| std::ptr::eq(known.row, begun.row)) {
-            all.push(begun);
-        }
-    }
-    all
 }
 
 impl Shown {

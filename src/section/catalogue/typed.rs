@@ -43,11 +43,11 @@ fn forms(row: &CatalogueRow) -> Vec<Box<str>> {
 }
 
 /// The rows whose designation begins with a text, however it is written, in the order of the tables; what is written to
-/// its end comes first. Of the very same section in several tables the first is named. Left out are rows that their own
+/// its end comes first, then the family of the row `like`. Of the very same section in several tables the first is named. Left out are rows that their own
 /// designation does not settle under `options`, and those of other tables or finishes than preferred where some of these
 /// begin so. At most `most` rows, and whether there are more.
 #[must_use]
-pub fn beginning(text: &str, options: &LookupOptions, most: usize) -> (Vec<Begun>, bool) {
+pub fn beginning(text: &str, options: &LookupOptions, like: Option<&CatalogueRow>, most: usize) -> (Vec<Begun>, bool) {
     static FORMS: OnceLock<Forms> = OnceLock::new();
     let rows = rows();
     let forms = FORMS.get_or_init(|| Forms::of(rows));
@@ -76,7 +76,8 @@ pub fn beginning(text: &str, options: &LookupOptions, most: usize) -> (Vec<Begun
     if let Some(hollow) = options.hollow {
         prefer(&mut found, |row| row.finish.is_none_or(|own| own == hollow));
     }
-    found.sort_by_key(|begun| !begun.rest.is_empty());
+    let family = |row: &CatalogueRow| like.is_some_and(|like| (row.table, &row.family) == (like.table, &like.family));
+    found.sort_by_key(|begun| (!begun.rest.is_empty(), !family(begun.row)));
     let mut named: Vec<Begun> = Vec::new();
     for begun in found {
         // What the designation means must be the row, or one alike that was named before.
@@ -124,7 +125,7 @@ mod tests {
     use super::*;
 
     fn names(text: &str) -> Vec<String> {
-        let (found, _) = beginning(text, &LookupOptions::default(), 20);
+        let (found, _) = beginning(text, &LookupOptions::default(), None, 20);
         found.iter().map(|begun| begun.row.designation.to_string()).collect()
     }
 
@@ -147,9 +148,9 @@ mod tests {
 
     #[test]
     fn the_rest_completes_what_was_typed() {
-        let (found, _) = beginning("heb24", &LookupOptions::default(), 5);
+        let (found, _) = beginning("heb24", &LookupOptions::default(), None, 5);
         assert_eq!(found[0].rest, "0");
-        let (found, more) = beginning("", &LookupOptions::default(), 100);
+        let (found, more) = beginning("", &LookupOptions::default(), None, 100);
         assert!(more && found.len() == 100);
     }
 
