@@ -133,8 +133,11 @@ fn totals(schedule: &Schedule) -> String {
     };
     let mut out = String::new();
     for total in &schedule.products {
+        let namesakes = schedule.products.iter().filter(|other| other.product == total.product);
+        let library = total.library.as_ref().filter(|_| namesakes.count() > 1);
+        let library = library.map_or_else(String::new, |library| format!(" ({library})"));
         out.push_str(&format!(
-            "{}: {} pieces, {:.0} m²{}{}{}{}{}, on {:.0} kg of steel\n",
+            "{}{library}: {} pieces, {:.0} m²{}{}{}{}{}, on {:.0} kg of steel\n",
             total.product,
             total.members,
             total.surface_m2,

@@ -25,6 +25,62 @@ fn several_designs_stand_in_one_schedule() {
     assert_eq!(csv.lines().count(), 3);
 }
 
+#[test]
+fn a_row_names_the_fault_that_its_member_inherits() {
+    let folder = tempfile::tempdir().unwrap();
+    let text = "steelwork: 1
+defaults: { role: beam, steel: S355, critical temperature: 550 }
+groups:
+  upper: { period: 60 kN }
+  lower: { period: 15 }
+members:
+  - { mark: A, group: upper, section: IPE 300 }
+  - { mark: B, group: lower, section: HE 1000 M }
+  - { mark: A, group: lower, section: HE 1000 M, colour: red }
+";
+    fs::write(folder.path().join("a.steelwork.yaml"), text).unwrap();
+    let output = run(folder.path(), &["schedule", "--as", "json"]);
+    let json: serde_json::Value = serde_json::from_slice(&output.stdout).unwrap();
+    let of = |at: usize| {
+        let row = &json["members"][at];
+        let names: Vec<String> = serde_json::from_value(row["findings"].clone()).unwrap();
+        (row["verdict"].as_str().unwrap().to_owned(), names)
+    };
+    let (verdict, names) = of(0);
+    assert_eq!(verdict, "not verified");
+    assert!(names.contains(&"wrong-unit".to_owned()), "{names:?}");
+    assert_eq!(of(1), ("passes".to_owned(), Vec::new()));
+    // The second of two members of one mark has its own findings, and the first has none of them.
+    let (_, names) = of(2);
+    assert!(
+        names.contains(&"duplicate-mark".to_owned()) && names.contains(&"unknown-key".to_owned()),
+        "{names:?}"
+    );
+    assert!(!of(0).1.contains(&"unknown-key".to_owned()));
+}
+
+#[test]
+fn namesakes_of_two_libraries_are_not_added_up() {
+    let folder = tempfile::tempdir().unwrap();
+    for (name, density) in [("a", 400), ("b", 800)] {
+        let library = format!(
+            "protection: 1\nproducts:\n  grey board: {{ kind: board, method: constant properties, conductivity: 0.2, specific heat: 1000, density: {density}, thicknesses: [15, 20, 25], assessed: {{ section factor: [40, 320], thickness: [15, 25], steel temperature: [350, 750], period: [30, 180], shapes: [open], orientation: [beam], fires: [standard] }} }}\n"
+        );
+        fs::write(folder.path().join(format!("{name}.protection.yaml")), library).unwrap();
+        let text = format!(
+            "{HEAD}  - {{ mark: {name}1, section: IPE 300, length: 4, period: 30, critical temperature: 550, protection: grey board }}\nlibraries: [{name}.protection.yaml]\n"
+        );
+        fs::write(folder.path().join(format!("{name}.steelwork.yaml")), text).unwrap();
+    }
+    let output = run(folder.path(), &["schedule", "--as", "json"]);
+    let json: serde_json::Value = serde_json::from_slice(&output.stdout).unwrap();
+    let products = json["products"].as_array().unwrap();
+    let libraries: Vec<&str> = products.iter().filter_map(|total| total["library"].as_str()).collect();
+    assert_eq!(libraries, ["a.protection.yaml", "b.protection.yaml"]);
+    let table = text(&run(folder.path(), &["schedule"]));
+    assert!(table.contains("grey board (a.protection.yaml): 1 pieces"), "{table}");
+}
+
 /// The keys of a member in the schedule, in their order; CSV has the same.
 const MEMBER_KEYS: &str = "mark count length_m section shape role steel exposure form fire period_min area_mm2 \
     heated_perimeter_mm section_factor_per_m box_section_factor_per_m effective_thickness_mm \

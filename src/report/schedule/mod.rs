@@ -12,9 +12,13 @@ use serde::Serialize;
 use self::basis::Basis;
 use self::row::Row;
 use self::totals::{ProductTotal, Totals};
-use crate::analysis::design::MemberAt;
+use crate::analysis::design::{Design, FileIndex, MemberAt};
+use crate::analysis::outcome::Verdict;
 use crate::analysis::source::FileKind;
 use crate::check::Checked;
+use crate::design::model::member::Member;
+use crate::findings::finding::{Finding, Severity};
+use crate::text::Span;
 
 /// The schedule.
 #[derive(Debug, Clone, Default, Serialize)]
@@ -73,12 +77,51 @@ fn rows(checked: &Checked, out: &mut Vec<Row>) {
             names.push(finding.name().to_owned());
         }
     }
+    let shared = faults(checked);
     for (at, outcome) in design.members.iter().zip(&checked.outcomes) {
-        let mut row = row::row(design, design.member(*at).value(), outcome);
+        let member = design.member(*at).value();
+        let mut row = row::row(design, member, outcome);
         if let Some((findings, departures)) = by_member.remove(at) {
             row.findings = findings;
             row.departures = departures;
         }
+        if outcome.verdict == Verdict::NotVerified {
+            row.findings.extend(inherited_faults(design, member, &shared));
+        }
         out.push(row);
     }
+}
+
+/// Errors outside the members.
+fn faults(checked: &Checked) -> Vec<&Finding> {
+    let outside = |finding: &&Finding| finding.member.is_none() && finding.severity == Severity::Error;
+    checked.findings.iter().filter(outside).collect()
+}
+
+/// The errors, outside a member that is not verified, in what it inherits or is protected by: its group, its product, and
+/// what the head file says for all.
+fn inherited_faults(design: &Design, member: &Member, faults: &[&Finding]) -> Vec<String> {
+    let keys = design.inherited(member);
+    let group = keys.get(|keys| &keys.group).value().and_then(|name| design.group(name));
+    let stated = keys.get(|keys| &keys.protection).value();
+    let product = stated.and_then(|stated| design.product(&stated.product.as_ref()?.value));
+    let items = [
+        group.map(|(file, item)| (file, item.piece.span)),
+        product.map(|(file, item)| (file, item.piece.span)),
+    ];
+    let head = design.files[0].entries.iter().map(|piece| (0, piece.span));
+    let pieces: Vec<(FileIndex, Span)> = items.into_iter().flatten().chain(head).collect();
+    let within = |finding: &&&Finding| {
+        let (path, at) = (&finding.place.path, finding.place.span);
+        pieces
+            .iter()
+            .any(|(file, piece)| design.files[*file].path == *path && piece.start <= at.start && at.end <= piece.end)
+    };
+    let mut names: Vec<String> = faults
+        .iter()
+        .filter(within)
+        .map(|finding| finding.name().to_owned())
+        .collect();
+    names.dedup();
+    names
 }

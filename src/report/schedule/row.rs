@@ -1,5 +1,8 @@
 //! A row of the schedule: one member as it is evaluated, with its quantities.
 
+use std::path::PathBuf;
+use std::sync::Arc;
+
 use serde::Serialize;
 
 use super::quantities::{Quantities, count, quantities};
@@ -65,6 +68,9 @@ pub struct Row {
     pub evidence: Option<String>,
     pub findings: Vec<String>,
     pub departures: Vec<String>,
+    /// The library that describes its product.
+    #[serde(skip)]
+    pub library: Option<Arc<PathBuf>>,
     /// What the totals are made of.
     #[serde(skip)]
     pub quantities: Quantities,
@@ -169,6 +175,9 @@ pub fn row(design: &Design, member: &Member, outcome: &Outcome) -> Row {
         evidence: named.and_then(|named| named.evidence.report.clone()),
         findings: Vec::new(),
         departures: Vec::new(),
+        library: product
+            .and_then(|name| design.product(&name.value))
+            .map(|(file, _)| Arc::clone(&design.files[file].path)),
         quantities,
     }
 }

@@ -1,6 +1,8 @@
 //! Totals of a product and of the whole. They sum what is known, and a caution says what is left out; without the rates
 //! of every share no cost or carbon is claimed.
 
+use std::path::{Path, PathBuf};
+
 use serde::Serialize;
 
 use super::quantities::{Quantities, Rated};
@@ -11,6 +13,8 @@ use super::row::Row;
 pub struct ProductTotal {
     /// Its name.
     pub product: String,
+    /// The library that describes it, by the name of its file; none where no library does.
+    pub library: Option<String>,
     /// Pieces that it protects.
     pub members: u32,
     /// Surface in m².
@@ -71,16 +75,19 @@ fn added(counts: impl Iterator<Item = Option<u32>>) -> u32 {
 
 /// Totals a product, in the order in which each first occurs.
 pub(super) fn by_product(rows: &[Row]) -> Vec<ProductTotal> {
-    let mut places: rustc_hash::FxHashMap<&str, usize> = rustc_hash::FxHashMap::default();
+    // Two designs may call different products by one name.
+    let mut places: rustc_hash::FxHashMap<(Option<&Path>, &str), usize> = rustc_hash::FxHashMap::default();
     let mut of: Vec<(&str, Vec<&Row>)> = Vec::new();
     for row in rows {
         let Some(product) = row.product.as_deref() else {
             continue;
         };
-        let at = *places.entry(product).or_insert_with(|| {
-            of.push((product, Vec::new()));
-            of.len() - 1
-        });
+        let at = *places
+            .entry((row.library.as_deref().map(PathBuf::as_path), product))
+            .or_insert_with(|| {
+                of.push((product, Vec::new()));
+                of.len() - 1
+            });
         of[at].1.push(row);
     }
     of.into_iter()
@@ -92,6 +99,10 @@ fn product_total(product: &str, rows: &[&Row]) -> ProductTotal {
     let sums = || rows.iter().map(|row| &row.quantities);
     ProductTotal {
         product: product.to_owned(),
+        library: rows.first().and_then(|row| {
+            let name = row.library.as_ref()?.file_name()?;
+            Some(name.to_string_lossy().into_owned())
+        }),
         members: added(rows.iter().map(|row| row.count)),
         surface_m2: known(sums().map(|q| q.surface_m2)).unwrap_or(0.0),
         coats: sums().filter_map(|q| q.coats).reduce(u32::saturating_add),
