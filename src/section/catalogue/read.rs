@@ -2,6 +2,7 @@
 
 use std::sync::OnceLock;
 
+use super::radii::{slope_of_mc, within_printed_area};
 use super::{CatalogueRow, Finish, Table};
 use crate::section::shape::{
     Angle, Channel, CircularHollow, ParallelI, RectangularHollow, Shape, TaperChannel, TaperI, TaperTee, Tee, WeldedI,
@@ -66,7 +67,7 @@ fn row(table: Table, line: &Line) -> Option<CatalogueRow> {
     let mut shape = shape(table, line)?;
     let printed_area = Area::from_mm2(line.area_cm2 * 100.0);
     if table == Table::US {
-        shape = with_fillets_of(shape, printed_area);
+        shape = within_printed_area(shape, printed_area);
     }
     Some(CatalogueRow {
         designation: line.designation.into(),
@@ -81,35 +82,6 @@ fn row(table: Table, line: &Line) -> Option<CatalogueRow> {
         geometry: shape.geometry().ok()?,
         properties: OnceLock::new(),
     })
-}
-
-/// The shape with no more fillet than its printed area leaves room for.
-///
-/// The radius of the US table comes from k, which M, MT and a few HP shapes print for detailing only: too large, by up
-/// to 5 % of the area. Where a shape without toes would exceed its printed area by more than 1 %, its fillets are what
-/// that area has beyond the sharp-cornered plates, (4 - π) r² of an I and half of it of a tee.
-fn with_fillets_of(shape: Shape, printed_area: Area) -> Shape {
-    let area = |shape: &Shape| shape.geometry().map_or(0.0, |g| g.area.mm2());
-    if area(&shape) <= 1.01 * printed_area.mm2() {
-        return shape;
-    }
-    let sharp = Length::from_mm(0.0);
-    let fillets = 4.0 - std::f64::consts::PI;
-    let radius = |plates: Shape, share: f64| {
-        let rest = printed_area.mm2() - area(&plates);
-        Length::from_mm((rest.max(0.0) / (share * fillets)).sqrt())
-    };
-    match shape {
-        Shape::I(i) => Shape::I(ParallelI {
-            r: radius(Shape::I(ParallelI { r: sharp, ..i }), 1.0),
-            ..i
-        }),
-        Shape::Tee(tee) => Shape::Tee(Tee {
-            r: radius(Shape::Tee(Tee { r: sharp, ..tee }), 0.5),
-            ..tee
-        }),
-        other => other,
-    }
 }
 
 fn shape(table: Table, line: &Line) -> Option<Shape> {
@@ -238,7 +210,8 @@ fn taper(table: Table, line: &Line) -> Option<Taper> {
         "ISWB" => (6_f64.to_radians().tan(), middle_of_outstand),
         "ISMC" => (6_f64.to_radians().tan(), middle_of_channel),
         // ASTM A6: 1 in 6, at the middle of the outstand.
-        "C" | "MC" => (1.0 / 6.0, middle_of_channel),
+        "C" => (1.0 / 6.0, middle_of_channel),
+        "MC" => (slope_of_mc(line.designation), middle_of_channel),
         "S" | "ST" | "SLB" => (1.0 / 6.0, middle_of_outstand),
         _ => return None,
     };
