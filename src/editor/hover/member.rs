@@ -4,7 +4,7 @@ use super::{HoverOptions, escaped, picture};
 use crate::analysis::design::MemberAt;
 use crate::analysis::inputs::row_of;
 use crate::analysis::names::lookup_options;
-use crate::analysis::outcome::{Gap, Outcome};
+use crate::analysis::outcome::{Gap, LimitFrom, Outcome};
 use crate::design::inherit::{Inherited, Origin};
 use crate::design::model::member::SectionChoice;
 use crate::editor::hover::product;
@@ -67,15 +67,14 @@ fn factor(row: &Row, outcome: &Outcome, units: DisplayUnits) -> Option<String> {
 
 fn limit(outcome: &Outcome, units: DisplayUnits) -> Option<String> {
     let critical = outcome.critical.as_ref()?;
-    let from = match critical.from.word() {
-        "loading" => "from the loading",
-        "stated" => "as stated",
-        _ => "the default of the design, assumed",
+    let from = match critical.from {
+        LimitFrom::Loading => format!("from the loading ({})", escaped(&critical.governing)),
+        LimitFrom::Stated => "as stated".to_owned(),
+        LimitFrom::Default => "the default of the design, assumed".to_owned(),
     };
     Some(format!(
-        "critical temperature: **{}** {from} ({})",
-        units.temperature(critical.as_built),
-        escaped(&critical.governing)
+        "critical temperature: **{}** {from}",
+        units.temperature(critical.as_built)
     ))
 }
 
