@@ -168,3 +168,16 @@ fn a_way_leads_from_the_root_to_a_cursor() {
         .collect();
     assert_eq!(way, ["mark: B1\n    loading: { axial: 20 }", "{ axial: 20 }", "20"]);
 }
+
+#[test]
+fn letters_of_every_width_are_cut_nowhere() {
+    for lead in 0..4 {
+        let text = format!(
+            "strange\nkey: {}{}\nmembers: []\n",
+            "x".repeat(lead),
+            "梁é😀".repeat(2000)
+        );
+        let read = scorchline::syntax::file::read(&text);
+        assert!(!read.all_errors().is_empty());
+    }
+}

@@ -147,13 +147,28 @@ impl<'a> Kept<'a> {
         let mut between = self.older.between.clone();
         for (file, strip) in self.files.iter().enumerate() {
             let (old, new) = (&self.older.design.files[file], &design.files[file]);
-            let by = new.text.len() as i64 - old.text.len() as i64;
-            let Some(first) = old.members.get(strip.before).filter(|_| by != 0) else {
+            if Arc::ptr_eq(old, new) {
                 continue;
+            }
+            // Each place moves with the member that it lies in: they need not all have moved alike.
+            let moved = |span: Span| {
+                let index = old
+                    .members
+                    .partition_point(|item| item.base() <= span.start)
+                    .checked_sub(1)?;
+                let item = old
+                    .members
+                    .get(index)
+                    .filter(|item| own::within(item.piece.span, span))?;
+                let behind = (index + strip.new).checked_sub(strip.old);
+                let now = if index < strip.before { Some(index) } else { behind };
+                let by = i64::from(new.members.get(now?)?.base()) - i64::from(item.base());
+                Some(own::shifted(span, by))
             };
-            let extent = Span::new(first.base() as usize, usize::MAX);
-            for finding in &mut between {
-                own::moved_in(finding, &old.path, extent, by);
+            for place in between.iter_mut().flat_map(own::places_mut) {
+                if *place.path == *old.path {
+                    place.span = moved(place.span).unwrap_or(place.span);
+                }
             }
         }
         between

@@ -1,11 +1,13 @@
 //! What one member tells by itself, kept until it changes.
 
+use std::sync::Arc;
+
 use jiff::civil::Date;
 
 use crate::analysis::design::{Design, MemberAt};
 use crate::analysis::names::Sections;
 use crate::analysis::outcome::Outcome;
-use crate::findings::finding::Finding;
+use crate::findings::finding::{Finding, Place};
 use crate::findings::{self, departures, reading};
 use crate::text::Span;
 
@@ -53,7 +55,7 @@ impl Own {
     }
 }
 
-fn places(finding: &Finding) -> impl Iterator<Item = &crate::findings::finding::Place> {
+fn places(finding: &Finding) -> impl Iterator<Item = &Place> {
     let notes = finding.notes.iter().filter_map(|note| note.place.as_ref());
     let edits = finding.fixes.iter().flat_map(|fix| &fix.edits).map(|edit| &edit.place);
     std::iter::once(&finding.place).chain(notes).chain(edits)
@@ -66,23 +68,23 @@ pub(super) fn within(outer: Span, span: Span) -> bool {
 
 /// Moves the places of a finding that lie in `extent` of its own file.
 pub(super) fn moved(finding: &mut Finding, extent: Span, by: i64) {
-    let path = finding.place.path.clone();
-    moved_in(finding, &path, extent, by);
+    let path = Arc::clone(&finding.place.path);
+    for place in places_mut(finding) {
+        if place.path == path && within(extent, place.span) {
+            place.span = shifted(place.span, by);
+        }
+    }
 }
 
-/// Moves the places of a finding that lie in `extent` of a file.
-pub(super) fn moved_in(finding: &mut Finding, path: &std::path::Path, extent: Span, by: i64) {
+/// Every place of a finding.
+pub(super) fn places_mut(finding: &mut Finding) -> impl Iterator<Item = &mut Place> {
     let notes = finding.notes.iter_mut().filter_map(|note| note.place.as_mut());
     let edits = finding
         .fixes
         .iter_mut()
         .flat_map(|fix| &mut fix.edits)
         .map(|edit| &mut edit.place);
-    for place in std::iter::once(&mut finding.place).chain(notes).chain(edits) {
-        if **place.path == *path && within(extent, place.span) {
-            place.span = shifted(place.span, by);
-        }
-    }
+    std::iter::once(&mut finding.place).chain(notes).chain(edits)
 }
 
 /// Whether a place of the finding touches a span of a file.

@@ -103,7 +103,16 @@ fn begins_mapping(text: &str, from: usize, to: usize, first: Line) -> bool {
             .skip(1)
             .take(1000)
             .any(|line| line.indent == first.indent && line::key_end(line.content(text)).is_some())
-            && parse(&text[from..to.min(from + 4096)], 0, true, None).stop.is_some()
+            && parse(beginning(&text[from..to], 4096), 0, true, None).stop.is_some()
+}
+
+/// At most so many bytes of a text, cut between characters.
+fn beginning(text: &str, most: usize) -> &str {
+    let mut end = most.min(text.len());
+    while !text.is_char_boundary(end) {
+        end -= 1;
+    }
+    &text[..end]
 }
 
 /// The top-level entries of a block mapping.
