@@ -66,10 +66,7 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
     if inputs.not_covered.iter().any(|(key, _)| *key != "method") {
         return outcome;
     }
-    // What is written of the limit and can't be read is told where it stands, and nothing is taken in its place.
-    let unread = |key| inputs.unread.contains(&key);
-    let hidden = unread("critical temperature") || inputs.stated.is_none() && unread("loading");
-    let found = (!hidden).then(|| limit(inputs, section, &geometry));
+    let found = (!limit_is_hidden(inputs)).then(|| limit(inputs, section, &geometry));
     match found {
         None => {}
         Some(Ok(critical)) => {
@@ -219,6 +216,15 @@ fn limit(inputs: &Inputs, section: &SectionInput, geometry: &Geometry) -> Result
         Some(loading) => by_loading(inputs, loading, section, geometry),
         None => default_limit(inputs),
     }
+}
+
+/// Whether what is written of the limit can't be read, or may stand where nothing can be read, such as under a misspelt
+/// key: that is told at its place, and nothing is taken in its stead.
+fn limit_is_hidden(inputs: &Inputs) -> bool {
+    let unread = |keys: &[&str]| inputs.unread.iter().any(|key| keys.contains(key));
+    unread(&["critical temperature"])
+        || inputs.stated.is_none() && unread(&["loading"])
+        || inputs.stated.is_none() && inputs.loading.is_none() && unread(&["member", "key", "group"])
 }
 
 fn by_loading(

@@ -9,6 +9,7 @@ use scorchline::analysis::outcome::Verdict;
 use scorchline::check::Checked;
 use scorchline::findings::finding::Severity;
 use scorchline::findings::registry::{EXAMPLE_LIBRARY, find};
+use scorchline::report::schedule::schedule;
 
 const SECTIONS: &[&str] = &[
     "IPE 80",
@@ -269,5 +270,34 @@ members:
             .iter()
             .any(|finding| finding.severity == Severity::Error);
         assert!(errors, "{broken}: {:#?}", messages(&checked));
+        // The schedule names what keeps a member from being verified, wherever that stands.
+        for row in schedule(std::slice::from_ref(&checked)).members {
+            assert!(!row.findings.is_empty(), "{broken}: {:#?}", messages(&checked));
+        }
+    }
+}
+
+#[test]
+fn what_may_be_a_load_is_told_once_where_it_stands() {
+    let member = |rest: &str| {
+        let checked = crate::check(&format!(
+            "- {{ mark: B1, section: HE 300 B, exposure: three sides, shielded by: slab, protection: grey board, {rest} }}"
+        ));
+        assert_eq!(checked.outcomes[0].verdict, Verdict::NotVerified, "{rest}");
+        let mut told = names(&checked);
+        told.retain(|name| *name != "unused-product");
+        told
+    };
+    for (rest, told) in [
+        ("loading: { utilisation: 0,55 }", "wrong-kind"),
+        ("loading: heavy", "wrong-kind"),
+        ("loading: { utilisation: 55 kN }", "wrong-unit"),
+        ("critical temperature: 550 mm", "wrong-unit"),
+        ("critical temperature: hot", "wrong-kind"),
+        ("loadng: { utilisation: 0.55 }", "unknown-key"),
+        ("role: column, loading: { utilisation: 0,55 }", "wrong-kind"),
+        ("role: column, group: nowhere", "unknown-group"),
+    ] {
+        assert_eq!(member(rest), [told], "{rest}");
     }
 }
