@@ -74,6 +74,16 @@ fn check(members: usize) -> Taken {
     let (passes, slender) = (verdict(Verdict::Passes), verdict(Verdict::CannotBeProtected));
     assert_eq!(verdict(Verdict::NotVerified), 0);
     assert!(passes > members / 2);
+    let mut names = std::collections::BTreeMap::<&str, usize>::new();
+    for finding in &checked[0].findings {
+        *names.entry(finding.declaration.name).or_default() += 1;
+    }
+    // Of the frame's own design, none of reading.
+    let expected = ["protection-not-needed", "protection-too-thin"];
+    assert!(names.keys().all(|name| expected.contains(name)), "{names:?}");
+    // A board whose thickness is worked out, and one of 15 mm for 120 min.
+    assert_eq!(checked[0].outcomes[0].verdict, Verdict::Passes);
+    assert_eq!(checked[0].outcomes[7].verdict, Verdict::Fails);
     eprintln!(
         "  {distinct} distinct members worked out; {passes} pass, {slender} can't be protected, {} findings",
         checked[0].findings.len()

@@ -64,13 +64,26 @@ pub fn frame(members: usize) -> (String, String) {
         if !column {
             text.push_str("    shielded by: slab\n");
         }
+        let _ = writeln!(text, "    length: {}.{} m", 3 + random.below(6), random.below(10));
+        // Columns by their force with buckling in fire, beams by their utilisation.
+        let _ = if column {
+            let force = 250_000 + random.below(450_000);
+            writeln!(
+                text,
+                "    loading: {{ axial: {}.{:03} kN, buckling length: 2.1 m }}",
+                force / 1000,
+                force % 1000
+            )
+        } else {
+            writeln!(
+                text,
+                "    loading: {{ utilisation: 0.{:06} }}",
+                300_000 + random.below(350_000)
+            )
+        };
         let _ = write!(
             text,
-            "    length: {}.{} m\n    loading: {{ utilisation: 0.{:06}{} }}\n    protection: {{ product: product {}{} }}\n    location: {{ level: {}, grid: {}/{} }}\n",
-            3 + random.below(6),
-            random.below(10),
-            300_000 + random.below(350_000),
-            if column { ", buckling length: 2.1 m" } else { "" },
+            "    protection: {{ product: product {}{} }}\n    location: {{ level: {}, grid: {}/{} }}\n",
             n % 8,
             // As in every frame, some are not right yet.
             if n % 20 == 7 { ", thickness: 15" } else { "" },
