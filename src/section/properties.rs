@@ -1,6 +1,6 @@
 //! Centroid, second moments, moduli and radii of gyration.
 
-use crate::section::outline::{Moments, Outline, Point};
+use crate::section::outline::{Moments, Outline};
 use crate::section::shape::{Shape, ShapeError};
 use crate::units::{Area, Length};
 
@@ -114,21 +114,31 @@ fn plastic_modulus(outer: &Outline, hole: Option<&Outline>) -> f64 {
         part
     };
     let bounds = outer.bounds();
-    let Point { y: mut low, .. } = bounds.min;
-    let Point { y: mut high, .. } = bounds.max;
-    let whole = above(low);
+    let (mut low, mut high) = (bounds.min.y, bounds.max.y);
     let base = low;
-    // Bisection to the last bits of the level; the modulus is flat about the line of equal areas.
+    let whole = above(low);
+    let half = whole.area / 2.0;
+    // What is above a level beyond the half: falling with the level, kinked where the width jumps.
+    let (mut below, mut beyond) = (half, -half);
+    let mut level = f64::midpoint(low, high);
+    let mut upper = above(level);
+    // The modulus is flat about the line of equal areas, so that a line this near gives it to the last digits.
     for _ in 0..60 {
-        let middle = f64::midpoint(low, high);
-        if above(middle).area > whole.area / 2.0 {
-            low = middle;
-        } else {
-            high = middle;
+        let excess = upper.area - half;
+        if excess.abs() <= 1e-9 * half || high - low <= 1e-12 * (bounds.max.y - base) {
+            break;
         }
+        if excess > 0.0 {
+            (low, below) = (level, excess);
+        } else {
+            (high, beyond) = (level, excess);
+        }
+        // A secant held well inside the bracket.
+        let share = (below / (below - beyond)).clamp(0.1, 0.9);
+        level = low + share * (high - low);
+        upper = above(level);
     }
-    let upper = above(low);
     // The whole about the line is the upper moment less the lower one.
-    let about_line = whole.moment - whole.area * (low - base);
+    let about_line = whole.moment - whole.area * (level - base);
     2.0 * upper.moment - about_line
 }
