@@ -19,6 +19,8 @@ const FIRST: f64 = 1.0;
 /// stage has to see the side that its step lies on. The estimate of error hardly weighs the first stage, so a slope
 /// from before the corner would pass unseen.
 const INSIDE: f64 = 1e-7;
+/// An enthalpy this near to the wanted one is it, J/kg: some 1e-5 s of heating, far within the error of a step.
+const NEAR: f64 = 1e-3;
 /// Halvings that find the top of a step in which the steel turns from warming to cooling.
 const HALVINGS: usize = 16;
 
@@ -245,6 +247,9 @@ pub fn time_within(piece: &impl Heated, step: Step, wanted: f64) -> f64 {
         let share = (h_low / (h_low - h_high)).clamp(0.05, 0.95);
         let middle = low + share * (high - low);
         let h = pair(piece, heat, step.from, step.enthalpy_from, middle, rate).enthalpy - wanted;
+        if h.abs() < NEAR {
+            return step.from + middle;
+        }
         if (h > 0.0) == (h_high > 0.0) {
             (high, h_high) = (middle, h);
         } else {
