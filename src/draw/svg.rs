@@ -69,8 +69,8 @@ pub fn heating(heating: &Heating) -> String {
             "<path d=\"M{left} {at:.1}H{right}\" stroke=\"#8a5a00\" stroke-dasharray=\"5 3\"/>"
         ));
         put(format_args!(
-            "<text x=\"{:.1}\" y=\"{:.1}\" text-anchor=\"end\" fill=\"#8a5a00\">critical {}</text>",
-            right - 2.0,
+            "<text x=\"{:.1}\" y=\"{:.1}\" fill=\"#8a5a00\">critical {}</text>",
+            left + 110.0,
             at - 3.0,
             heating.label(limit)
         ));

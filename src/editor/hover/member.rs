@@ -170,7 +170,11 @@ pub fn section(view: &View<'_>, at: MemberAt) -> Option<String> {
     let mut facts = Vec::new();
     let name = match (row_of(Some(choice), &lookup_options(view.design.basis())), choice) {
         (Some(row), _) => {
-            facts.push(format!("{}, {}", row.shape.name(), row.standard));
+            let shape = match row.shape.name() {
+                "i" => "I or H section",
+                name => name,
+            };
+            facts.push(format!("{shape}, {}", row.standard));
             facts.push(format!("{} kg/m", significant(row.mass.kg_m(), 1)));
             row.designation.to_string()
         }
