@@ -10,14 +10,15 @@ use crate::design::model::member::{Load, Reduction, Role, Steel, Surface};
 use crate::heating::fire::Fire;
 use crate::heating::flux::{Bare, Emissivity, effective_factor};
 use crate::protection::product::{Kind as ProductKind, ShapeClass};
-use crate::protection::requirement::{self, Demand, Refusal};
+use crate::protection::refusal::Refusal;
+use crate::protection::requirement::{self, Demand};
 use crate::protection::stock;
 use crate::resistance::buckling::{Lengths, governing_slenderness};
 use crate::resistance::critical::{self, Actions, Loading, Unverified, critical_temperature};
 use crate::resistance::grade::{Grade, YieldSource, governing_thickness, yield_strength};
 use crate::resistance::utilisation::{ActionMix, from_ambient, reduction_factor};
 use crate::section::shadow::shadow_factor;
-use crate::section::{Casing, Exposure, Geometry, Kind, heated};
+use crate::section::{Casing, Exposure, ExposureRefusal, Geometry, Kind, heated};
 use crate::units::{Force, Length, SectionFactor, Stress, Temperature, Time};
 
 /// Works out a member. Nothing is claimed that its inputs do not carry.
@@ -56,12 +57,17 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
         Cover::Product(_) => Casing::Profile,
         _ => Casing::Bare,
     };
-    outcome.section = exposed(inputs, section, &geometry, casing, fire.is_nominal());
-    let Some(exposed) = outcome.section.clone() else {
-        let why = "the exposure means nothing for this section".to_owned();
-        outcome.gaps.push(Gap::NotCovered { key: "exposure", why });
-        return outcome;
+    let exposed = match exposed(inputs, section, &geometry, casing, fire.is_nominal()) {
+        Ok(exposed) => exposed,
+        Err(refusal) => {
+            outcome.gaps.push(Gap::NotCovered {
+                key: "exposure",
+                why: refusal.to_string(),
+            });
+            return outcome;
+        }
     };
+    outcome.section = Some(exposed.clone());
     let mut cold = false;
     if inputs.not_covered.iter().any(|(key, _)| *key != "method") {
         return outcome;
@@ -154,11 +160,11 @@ fn exposed(
     geometry: &Geometry,
     casing: Casing,
     nominal: bool,
-) -> Option<ExposedSection> {
+) -> Result<ExposedSection, ExposureRefusal> {
     let exposure = inputs.reached.exposure;
-    let bare = heated(geometry, exposure, Casing::Bare).ok()?;
-    let own = heated(geometry, exposure, casing).ok()?;
-    Some(ExposedSection {
+    let bare = heated(geometry, exposure, Casing::Bare)?;
+    let own = heated(geometry, exposure, casing)?;
+    Ok(ExposedSection {
         shape: section.shape.name(),
         area: geometry.area,
         mass_per_m: section.mass.unwrap_or(geometry.mass.kg_m()),
@@ -166,7 +172,7 @@ fn exposed(
         factor: own.factor,
         bare_factor: bare.factor,
         box_factor: heated(geometry, exposure, Casing::Box).ok().map(|heated| heated.factor),
-        shadow_factor: shadow_factor(geometry, exposure, nominal).ok()?,
+        shadow_factor: shadow_factor(geometry, exposure, nominal)?,
         class: None,
         below_ten: own.factor.per_m() < crate::heating::flux::LEAST_FACTOR,
     })

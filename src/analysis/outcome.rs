@@ -1,6 +1,7 @@
 //! What the analysis says of a member: plain data without spans, the value of the memo.
 
-use crate::protection::requirement::{Refusal, Requirement};
+use crate::protection::refusal::Refusal;
+use crate::protection::requirement::Requirement;
 use crate::units::{Area, Length, SectionFactor, Temperature, Time};
 
 /// The verdict on a member. Unknown is never a pass.

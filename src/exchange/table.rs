@@ -52,7 +52,7 @@ pub fn schedule(schedule: &Schedule) -> String {
         "verdict",
     ];
     let mut out = table(&header, &[0, 2, 7, 11], rows);
-    out.push_str(&totals(schedule));
+    out.push_str(&totals(schedule, units));
     for row in schedule.members.iter().filter(|row| !row.departures.is_empty()) {
         let mark = row.mark.as_deref().unwrap_or(NONE);
         out.push_str(&format!(
@@ -60,7 +60,7 @@ pub fn schedule(schedule: &Schedule) -> String {
             row.departures.join(", ")
         ));
     }
-    out.push_str(&basis(schedule));
+    out.push_str(&basis(schedule, units));
     for caution in &schedule.cautions {
         out.push_str(&format!("- {caution}\n"));
     }
@@ -125,11 +125,21 @@ fn floor(value: f64, step: f64) -> f64 {
     (value / step + 1e-9).floor() * step
 }
 
-fn totals(schedule: &Schedule) -> String {
+fn totals(schedule: &Schedule, units: DisplayUnits) -> String {
     let currency = schedule.basis.currency.as_deref().unwrap_or("");
     let part = |value: Option<f64>, unit: &str| match value {
         Some(value) => format!(", {value:.0} {unit}").trim_end().to_owned(),
         None => String::new(),
+    };
+    let shown = |value: Option<f64>, show: fn(DisplayUnits, f64) -> String| {
+        value.map_or_else(String::new, |value| format!(", {}", show(units, value)))
+    };
+    let counted = |n: u32, what: &str| {
+        if n == 1 {
+            format!("1 {what}")
+        } else {
+            format!("{n} {what}s")
+        }
     };
     let mut out = String::new();
     for total in &schedule.products {
@@ -137,32 +147,34 @@ fn totals(schedule: &Schedule) -> String {
         let library = total.library.as_ref().filter(|_| namesakes.count() > 1);
         let library = library.map_or_else(String::new, |library| format!(" ({library})"));
         out.push_str(&format!(
-            "{}{library}: {} pieces, {:.0} m²{}{}{}{}{}, on {:.0} kg of steel\n",
+            "{}{library}: {}, {}{}{}{}{}{}, on {} of steel\n",
             total.product,
-            total.members,
-            total.surface_m2,
-            part(total.coats.map(f64::from), "coats"),
-            part(total.litres, "litres"),
-            part(total.product_mass_kg, "kg"),
+            counted(total.members, "piece"),
+            units.surface(total.surface_m2),
+            total
+                .coats
+                .map_or_else(String::new, |coats| format!(", {}", counted(coats, "coat"))),
+            shown(total.litres, DisplayUnits::volume),
+            shown(total.product_mass_kg, DisplayUnits::mass),
             part(total.cost, currency),
             part(total.carbon_kg, "kg CO2e"),
-            total.steel_mass_kg,
+            units.mass(total.steel_mass_kg),
         ));
     }
     let all = &schedule.totals;
     out.push_str(&format!(
-        "total: {} marks, {} pieces, {:.0} kg of steel, {:.0} m² protected{}{}\n",
-        all.marks,
-        all.members,
-        all.steel_mass_kg,
-        all.surface_m2,
+        "total: {}, {}, {} of steel, {} protected{}{}\n",
+        counted(all.marks, "mark"),
+        counted(all.members, "piece"),
+        units.mass(all.steel_mass_kg),
+        units.surface(all.surface_m2),
         part(all.cost, currency),
         part(all.carbon_kg, "kg CO2e"),
     ));
     out
 }
 
-fn basis(schedule: &Schedule) -> String {
+fn basis(schedule: &Schedule, units: DisplayUnits) -> String {
     let basis = &schedule.basis;
     let mut parts = Vec::new();
     for heading in [&basis.project, &basis.reference, &basis.revision, &basis.status] {
@@ -179,7 +191,8 @@ fn basis(schedule: &Schedule) -> String {
     parts.extend(
         basis
             .default_critical_temperature_c
-            .map(|limit| format!("default critical temperature {limit} °C")),
+            .map(|limit| units.temperature(Temperature::from_celsius(limit)))
+            .map(|limit| format!("default critical temperature {limit}")),
     );
     parts.extend(basis.hollow.as_ref().map(|finish| format!("hollow sections {finish}")));
     let tables = basis.section_tables.as_ref().filter(|tables| !tables.is_empty());

@@ -4,6 +4,7 @@
 //! factor, a higher critical temperature, a shorter period); on the unsafe side nothing is extrapolated.
 
 pub mod product;
+pub mod refusal;
 pub mod requirement;
 pub mod stock;
 pub mod table;

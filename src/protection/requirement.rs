@@ -1,6 +1,5 @@
 //! What thickness a member needs of a product, and what a given thickness does.
 
-use std::fmt;
 use std::sync::Arc;
 
 use crate::heating::family::{Family, Needed};
@@ -8,6 +7,7 @@ use crate::heating::fire::Fire;
 use crate::heating::flux::{HORIZON, Insulation, Protected};
 use crate::heating::history::History;
 use crate::protection::product::{Kind, Method, Product, ShapeClass};
+use crate::protection::refusal::{Outside, Refusal};
 use crate::protection::stock::{BuildUp, next_stock};
 use crate::protection::table::{NoFilm, Table};
 use crate::units::{Length, SectionFactor, Temperature, Time};
@@ -40,46 +40,6 @@ pub struct Requirement {
     pub next: Option<BuildUp>,
     /// Ranges that the product does not state, so that the result can't be verified.
     pub unstated: Vec<&'static str>,
-}
-
-/// Why a product can't hold a member.
-#[derive(Debug, Clone, PartialEq)]
-pub enum Refusal {
-    /// No assessed thickness holds this section factor for the period at the temperature.
-    TooSlender {
-        /// The temperature behind the thickest assessed build-up, where it is known.
-        reached: Option<Temperature>,
-    },
-    /// Something else lies outside what was assessed.
-    OutsideRange {
-        /// What: "the period", "the critical temperature", ..
-        what: &'static str,
-        /// Its value, with unit.
-        value: String,
-        /// The assessed range, with unit.
-        range: String,
-    },
-    /// The product was not assessed for the shape.
-    ShapeNotAssessed(ShapeClass),
-    /// The product was not assessed for beams, or for columns.
-    OrientationNotAssessed(&'static str),
-    /// The product was not assessed for the fire.
-    FireNotAssessed,
-    /// The method is read but not yet computed; why, as a sentence.
-    NotCovered(&'static str),
-}
-
-impl fmt::Display for Refusal {
-    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
-        match self {
-            Self::TooSlender { .. } => write!(f, "no assessed thickness holds it"),
-            Self::OutsideRange { what, value, range } => write!(f, "{what} is {value}; assessed is {range}"),
-            Self::ShapeNotAssessed(shape) => write!(f, "not assessed for {} sections", shape.words()),
-            Self::OrientationNotAssessed(word) => write!(f, "not assessed for {word}s"),
-            Self::FireNotAssessed => write!(f, "not assessed for this fire"),
-            Self::NotCovered(why) => write!(f, "{why}"),
-        }
-    }
 }
 
 /// Where families of marches come from: a memo, or made anew.
@@ -171,22 +131,22 @@ fn held_to_range<'a>(product: &Product, demand: &Demand<'a>) -> Result<(Demand<'
     match assessed.temperature {
         None => unstated.push("steel temperature"),
         Some((least, most)) if demand.limit.celsius() < least.celsius() - 1e-9 => {
-            return Err(Refusal::OutsideRange {
-                what: "the critical temperature",
-                value: format!("{:.0} °C", demand.limit.celsius()),
-                range: format!("{:.0} to {:.0} °C", least.celsius(), most.celsius()),
-            });
+            return Err(Refusal::Outside(Outside::CriticalTemperature {
+                of_member: demand.limit,
+                least,
+                most: Some(most),
+            }));
         }
         Some((_, most)) => held.limit = Temperature::from_celsius(demand.limit.celsius().min(most.celsius())),
     }
     match assessed.period {
         None => unstated.push("period"),
         Some((least, most)) if demand.period.min() > most.min() + 1e-9 => {
-            return Err(Refusal::OutsideRange {
-                what: "the period",
-                value: format!("{:.0} min", demand.period.min()),
-                range: format!("{:.0} to {:.0} min", least.min(), most.min()),
-            });
+            return Err(Refusal::Outside(Outside::Period {
+                wanted: demand.period,
+                least: Some(least),
+                most,
+            }));
         }
         Some((least, _)) => held.period = Time::from_min(demand.period.min().max(least.min())),
     }
@@ -260,32 +220,31 @@ fn by_tables(
     }
     let fitting = tables_for(tables, demand);
     let Some(longest) = fitting.last() else {
-        let others = if demand.sides == 3 { "4" } else { "3" };
-        return Err(Refusal::OutsideRange {
-            what: "the number of sides exposed",
-            value: demand.sides.to_string(),
-            range: format!("{others} for {} sections", demand.shape.words()),
-        });
+        return Err(Refusal::Outside(Outside::Sides {
+            of_member: demand.sides,
+            assessed: if demand.sides == 3 { 4 } else { 3 },
+            shape: demand.shape,
+        }));
     };
     let Some(table) = fitting
         .iter()
         .find(|table| table.period.min() >= demand.period.min() - 1e-9)
     else {
-        return Err(Refusal::OutsideRange {
-            what: "the period",
-            value: format!("{:.0} min", demand.period.min()),
-            range: format!("up to {:.0} min", longest.period.min()),
-        });
+        return Err(Refusal::Outside(Outside::Period {
+            wanted: demand.period,
+            least: None,
+            most: longest.period,
+        }));
     };
     let film = table
         .film(demand.factor, demand.limit, interpolate)
         .map_err(|none| match none {
             NoFilm::TooSlender => Refusal::TooSlender { reached: None },
-            NoFilm::TooCold { least } => Refusal::OutsideRange {
-                what: "the critical temperature",
-                value: format!("{:.0} °C", demand.limit.celsius()),
-                range: format!("{:.0} °C and above", least.celsius()),
-            },
+            NoFilm::TooCold { least } => Refusal::Outside(Outside::CriticalTemperature {
+                of_member: demand.limit,
+                least,
+                most: None,
+            }),
         })?;
     let (least, most) = match product.assessed.thickness {
         Some((least, most)) => (least.mm(), Some(most)),

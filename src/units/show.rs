@@ -52,6 +52,33 @@ impl DisplayUnits {
         }
     }
 
+    /// A mass in whole kg, or in lb: the international pound, exactly 0.45359237 kg.
+    #[must_use]
+    pub fn mass(self, kg: f64) -> String {
+        match self {
+            Self::Metric => format!("{kg:.0} kg"),
+            Self::Imperial => format!("{:.0} lb", kg / 0.453_592_37),
+        }
+    }
+
+    /// A surface in whole m², or in ft²: the international foot, exactly 0.3048 m.
+    #[must_use]
+    pub fn surface(self, m2: f64) -> String {
+        match self {
+            Self::Metric => format!("{m2:.0} m²"),
+            Self::Imperial => format!("{:.0} ft²", m2 / (0.3048 * 0.3048)),
+        }
+    }
+
+    /// A volume of paint in whole litres, or in gal: the US liquid gallon of 231 cubic inches, exactly 3.785411784 litres.
+    #[must_use]
+    pub fn volume(self, litres: f64) -> String {
+        match self {
+            Self::Metric => format!("{litres:.0} litres"),
+            Self::Imperial => format!("{:.0} gal", litres / 3.785_411_784),
+        }
+    }
+
     /// A section factor in whole 1/m, one decimal below 100: `188 1/m`.
     #[must_use]
     pub fn section_factor(self, value: SectionFactor) -> String {
@@ -89,6 +116,9 @@ mod tests {
             DisplayUnits::Imperial.temperature(Temperature::from_celsius(550.0)),
             "1022 °F"
         );
+        assert_eq!(DisplayUnits::Imperial.mass(453.592_37), "1000 lb");
+        assert_eq!(DisplayUnits::Imperial.surface(92.903_04), "1000 ft²");
+        assert_eq!(DisplayUnits::Imperial.volume(378.541_178_4), "100 gal");
         assert_eq!(
             DisplayUnits::Metric.section_factor(SectionFactor::from_per_m(59.33)),
             "59.3 1/m"

@@ -60,6 +60,24 @@ members:
 }
 
 #[test]
+fn totals_are_in_the_units_of_the_design() {
+    let folder = tempfile::tempdir().unwrap();
+    let design = "steelwork: 1
+basis: { units: imperial, default critical temperature: 1000 °F }
+members:
+  - { mark: B1, role: beam, steel: S355, period: 15, section: { shape: stated, area: 10000, perimeter: 1000 }, length: 10 }
+";
+    fs::write(folder.path().join("a.steelwork.yaml"), design).unwrap();
+    let table = text(&run(folder.path(), &["schedule"]));
+    // 10000 mm² of 10 m at 7850 kg/m³ are 785 kg.
+    assert!(
+        table.contains("total: 1 mark, 1 piece, 1731 lb of steel, 0 ft² protected"),
+        "{table}"
+    );
+    assert!(table.contains("default critical temperature 1000 °F"), "{table}");
+}
+
+#[test]
 fn namesakes_of_two_libraries_are_not_added_up() {
     let folder = tempfile::tempdir().unwrap();
     for (name, density) in [("a", 400), ("b", 800)] {
@@ -78,7 +96,7 @@ fn namesakes_of_two_libraries_are_not_added_up() {
     let libraries: Vec<&str> = products.iter().filter_map(|total| total["library"].as_str()).collect();
     assert_eq!(libraries, ["a.protection.yaml", "b.protection.yaml"]);
     let table = text(&run(folder.path(), &["schedule"]));
-    assert!(table.contains("grey board (a.protection.yaml): 1 pieces"), "{table}");
+    assert!(table.contains("grey board (a.protection.yaml): 1 piece, "), "{table}");
 }
 
 /// The keys of a member in the schedule, in their order; CSV has the same.

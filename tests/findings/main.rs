@@ -275,10 +275,26 @@ basis: { units: imperial }
 libraries: [demo.protection.yaml]
 defaults: { role: beam, steel: S355, period: 60, critical temperature: 1000 °F }
 members:
-  - { mark: B1, section: IPE 300 }";
+  - { mark: B1, section: IPE 300 }
+  - { mark: B2, section: IPE 300, critical temperature: 550 °F, protection: grey board }
+  - { mark: B3, section: IPE 300, period: 10, surface: { galvanised: { to: EN ISO 1461, category: A } } }
+  - { mark: B4, section: HE 300 B, critical temperature: 1200 °F, loading: { utilisation: 0.6 }, protection: grey board }";
     let checked = check(text);
     let message = &one(&checked, "bare-steel-fails").message;
     assert!(message.contains("1000 °F") && message.contains(" in)"), "{message}");
+    let message = &one(&checked, "outside-assessed-range").message;
+    assert!(message.contains("is 550 °F; assessed is 662 °F to"), "{message}");
+    let message = &one(&checked, "galvanised-benefit-claimed").message;
+    assert!(message.contains("932 °F"), "{message}");
+    // (4.22) gives 554.28 °C, by hand: 1029.7 °F.
+    let high = one(&checked, "critical-temperature-too-high");
+    assert_eq!(high.fixes[0].title, "state 1029 °F, which the loading gives");
+    let mended = check_files(mended(&checked, &high.fixes[0]));
+    assert!(!names(&mended).contains(&"critical-temperature-too-high"));
+    for finding in &checked.findings {
+        let message = &finding.message;
+        assert!(!message.contains("°C") && !message.contains(" mm"), "{message}");
+    }
 }
 
 const GROUPED: &str = "steelwork: 1

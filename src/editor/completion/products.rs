@@ -9,7 +9,8 @@ use crate::design::model::member::Environment;
 use crate::editor::completion::Here;
 use crate::editor::completion::item::{CompletionKind, Completions, Writer};
 use crate::protection::product::{Kind, Product};
-use crate::protection::requirement::{Fresh, Refusal, requirement};
+use crate::protection::refusal::Refusal;
+use crate::protection::requirement::{Fresh, requirement};
 use crate::units::{Length, SectionFactor, significant};
 
 /// How many products are judged at once: a march through a fire takes its time.
@@ -150,7 +151,7 @@ impl Here<'_> {
 
     fn judge(&self, asked: &Asked, named: &NamedProduct, product: &Product) -> Judged {
         if !named.serves_in(&asked.fire) {
-            return Judged::Fails(Refusal::FireNotAssessed.to_string());
+            return Judged::Fails(Refusal::FireNotAssessed.words(self.units()));
         }
         if let Some(why) = unfit(asked, named, product) {
             return Judged::Fails(why);
@@ -173,10 +174,12 @@ impl Here<'_> {
                 (None, _) => Judged::Fails("no build-up of its stock holds it".to_owned()),
                 (Some(next), None) => Judged::Holds(needed.exact, next.total()),
             },
-            Err(refusal @ Refusal::TooSlender { .. }) => {
-                Judged::Fails(format!("{refusal}: {}", self.slender(factor, asked)))
-            }
-            Err(refusal) => Judged::Fails(refusal.to_string()),
+            Err(refusal @ Refusal::TooSlender { .. }) => Judged::Fails(format!(
+                "{}: {}",
+                refusal.words(self.units()),
+                self.slender(factor, asked)
+            )),
+            Err(refusal) => Judged::Fails(refusal.words(self.units())),
         }
     }
 

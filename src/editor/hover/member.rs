@@ -108,7 +108,7 @@ fn behind(row: &Row, outcome: &Outcome, units: DisplayUnits) -> Option<String> {
     let needs = match &state.requirement {
         Ok(needed) if film => format!("needs {}", units.needed_film(needed.exact)),
         Ok(needed) => format!("needs {}", units.needed_thickness(needed.exact)),
-        Err(refusal) => format!("**{refusal}**"),
+        Err(refusal) => format!("**{}**", refusal.words(units)),
     };
     let has = state.provided.map(|provided| {
         let whose = if state.stated { "has" } else { "would take" };

@@ -145,7 +145,7 @@ fn outgrown(departure: &Departure, outcome: &Outcome, units: DisplayUnits) -> Op
             Some(Ok(needed)) if needed.exact.mm() > was.mm() + tolerance => {
                 return Some(format!("it needed {}, now {}", show(was), show(needed.exact)));
             }
-            Some(Err(refusal)) => return Some(format!("it needed {}, now {refusal}", show(was))),
+            Some(Err(refusal)) => return Some(format!("it needed {}, now {}", show(was), refusal.words(units))),
             None => return Some(format!("it needed {}, now what it needs is not known", show(was))),
             Some(Ok(_)) => {}
         }

@@ -3,7 +3,7 @@
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
-use crate::units::significant;
+use crate::units::{DisplayUnits, significant};
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -31,8 +31,13 @@ pub(super) fn check(cx: &mut Context<'_>) {
     );
     let span = cx.own().critical_temperature.span();
     cx.add(&DECLARATION, "critical temperature", span, message);
-    let value = significant(derived.celsius().floor(), 0);
-    let title = format!("state {value} °C, which the loading gives");
+    // Rounded down, in the units of the design.
+    let value = match cx.units {
+        DisplayUnits::Metric => significant(derived.celsius().floor(), 0),
+        DisplayUnits::Imperial => format!("{:.0} °F", (derived.celsius() * 1.8 + 32.0).floor()),
+    };
+    let shown = if cx.units == DisplayUnits::Metric { " °C" } else { "" };
+    let title = format!("state {value}{shown}, which the loading gives");
     match span {
         Some(span) => cx.fix(title, span, value),
         None => cx.state(title, "critical temperature", &value),

@@ -4,6 +4,7 @@ use crate::design::model::member::Surface;
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
+use crate::units::Temperature;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -27,8 +28,9 @@ pub(super) fn check(cx: &mut Context<'_>) {
     }
     if matches!(surface, Some(Surface::GalvanisedTo { category: 'A' | 'B' })) {
         let message = format!(
-            "{} is computed with an emissivity of 0.35 up to 500 °C for its declared zinc coating",
-            cx.mark
+            "{} is computed with an emissivity of 0.35 up to {} for its declared zinc coating",
+            cx.mark,
+            cx.temperature(Temperature::from_celsius(500.0))
         );
         cx.add(&DECLARATION, "surface", cx.own().surface.span(), message);
     }

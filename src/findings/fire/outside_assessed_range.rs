@@ -3,7 +3,7 @@
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
-use crate::protection::requirement::Refusal;
+use crate::protection::refusal::Refusal;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
@@ -24,10 +24,11 @@ pub(super) fn check(cx: &mut Context<'_>) {
     };
     let (name, span) = (product.name, cx.own().protection.span());
     match &state.requirement {
-        Err(refusal @ (Refusal::OutsideRange { .. } | Refusal::OrientationNotAssessed(_))) => {
+        Err(refusal @ (Refusal::Outside(_) | Refusal::OrientationNotAssessed(_))) => {
             let message = format!(
-                "{} is not verified, for it lies outside what `{name}` was assessed for: {refusal}",
-                cx.mark
+                "{} is not verified, for it lies outside what `{name}` was assessed for: {}",
+                cx.mark,
+                refusal.words(cx.units)
             );
             cx.add(&DECLARATION, "protection", span, message);
         }

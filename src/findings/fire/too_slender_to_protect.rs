@@ -8,7 +8,7 @@ use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::insert;
 use crate::findings::registry::Declaration;
-use crate::protection::requirement::Refusal;
+use crate::protection::refusal::Refusal;
 use crate::section::catalogue::{CatalogueRow, family_neighbours};
 use crate::section::{Casing, Exposure, heated};
 use crate::units::SectionFactor;

@@ -4,7 +4,7 @@ use crate::analysis::outcome::Gap;
 use crate::findings::context::Context;
 use crate::findings::finding::Severity;
 use crate::findings::registry::Declaration;
-use crate::protection::requirement::Refusal;
+use crate::protection::refusal::Refusal;
 
 /// What is known of it before any design is read.
 pub static DECLARATION: Declaration = Declaration {
