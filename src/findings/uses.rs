@@ -29,28 +29,29 @@ impl Uses {
 
     /// Counts a member in.
     pub fn add(&mut self, design: &Design, member: &Member) {
-        let keys = design.inherited(member);
-        count(&mut self.groups, keys.get(|keys| &keys.group).value());
-        let stated = keys.get(|keys| &keys.protection).value();
-        let product = stated.and_then(|stated| stated.product.as_ref());
-        count(&mut self.products, product.map(|name| &name.value));
-        for name in keys.get(|keys| &keys.supported_by).value().into_iter().flatten() {
-            count(&mut self.supports, Some(&name.value));
-        }
+        self.each(design, member, count);
         self.linked += usize::from(is_linked(design, member));
     }
 
     /// Counts a member out that was counted in.
     pub fn remove(&mut self, design: &Design, member: &Member) {
-        let keys = design.inherited(member);
-        discount(&mut self.groups, keys.get(|keys| &keys.group).value());
-        let stated = keys.get(|keys| &keys.protection).value();
-        let product = stated.and_then(|stated| stated.product.as_ref());
-        discount(&mut self.products, product.map(|name| &name.value));
-        for name in keys.get(|keys| &keys.supported_by).value().into_iter().flatten() {
-            discount(&mut self.supports, Some(&name.value));
-        }
+        self.each(design, member, discount);
         self.linked -= usize::from(is_linked(design, member));
+    }
+
+    /// Counts every name that a member uses, its own or inherited.
+    fn each(&mut self, design: &Design, member: &Member, count: fn(&mut FxHashMap<String, usize>, &String)) {
+        let keys = design.inherited(member);
+        if let Some(name) = keys.get(|keys| &keys.group).value() {
+            count(&mut self.groups, name);
+        }
+        let stated = keys.get(|keys| &keys.protection).value();
+        if let Some(product) = stated.and_then(|stated| stated.product.as_ref()) {
+            count(&mut self.products, &product.value);
+        }
+        for name in keys.get(|keys| &keys.supported_by).value().into_iter().flatten() {
+            count(&mut self.supports, &name.value);
+        }
     }
 
     /// Whether any member is of a group.
@@ -95,8 +96,7 @@ pub fn is_linked(design: &Design, member: &Member) -> bool {
     !supported.given.is_absent() || !keys.get(|keys| &keys.steadies).given.is_absent()
 }
 
-fn count(uses: &mut FxHashMap<String, usize>, name: Option<&String>) {
-    let Some(name) = name else { return };
+fn count(uses: &mut FxHashMap<String, usize>, name: &String) {
     // Most names are known, and a known one costs no copy.
     match uses.get_mut(name) {
         Some(known) => *known += 1,
@@ -106,8 +106,7 @@ fn count(uses: &mut FxHashMap<String, usize>, name: Option<&String>) {
     }
 }
 
-fn discount(uses: &mut FxHashMap<String, usize>, name: Option<&String>) {
-    let Some(name) = name else { return };
+fn discount(uses: &mut FxHashMap<String, usize>, name: &String) {
     match uses.get_mut(name) {
         Some(known) if *known > 1 => *known -= 1,
         _ => {
