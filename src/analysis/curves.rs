@@ -29,7 +29,7 @@ pub struct Curves {
 pub fn curves(inputs: &Inputs, outcome: &Outcome) -> Option<Curves> {
     let exposed = outcome.section.as_ref()?;
     let (section, fire) = (inputs.section.as_ref()?, inputs.fire.as_deref()?);
-    let geometry = section.shape.geometry().ok()?;
+    let geometry = section.geometry().ok()?;
     let period = inputs.period.map(Time::min);
     let bare_lasts = outcome.bare.and_then(|bare| bare.resistance).map(Time::min);
     let until = (1.25 * period.or(bare_lasts).unwrap_or(60.0)).clamp(10.0, HORIZON);

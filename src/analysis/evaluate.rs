@@ -42,7 +42,7 @@ pub fn evaluate(inputs: &Inputs, memo: &Memo) -> Outcome {
     let (Some(section), Some(fire)) = (&inputs.section, &inputs.fire) else {
         return outcome;
     };
-    let geometry = match section.shape.geometry() {
+    let geometry = match section.geometry() {
         Ok(geometry) => geometry,
         Err(error) => {
             outcome.gaps.push(Gap::NotCovered {

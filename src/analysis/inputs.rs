@@ -14,7 +14,7 @@ use crate::design::model::member::{Effects, Load, Loading, Member, Period, Role,
 use crate::heating::fire::Fire;
 use crate::protection::product::Product;
 use crate::section::catalogue::{CatalogueRow, LookupOptions, row};
-use crate::section::{Exposure, Shape};
+use crate::section::{Exposure, Geometry, Shape, ShapeError};
 use crate::units::{Length, Temperature, Time};
 
 /// A section ready to be computed with.
@@ -24,6 +24,18 @@ pub struct SectionInput {
     pub shape: Shape,
     /// Nominal mass in kg/m, where a table states it.
     pub mass: Option<f64>,
+    /// Its figures, where a table has them worked out.
+    pub known: Option<&'static Geometry>,
+}
+
+impl SectionInput {
+    /// The figures on which section factors rest.
+    ///
+    /// # Errors
+    /// Where the dimensions make no shape.
+    pub fn geometry(&self) -> Result<Geometry, ShapeError> {
+        self.known.map_or_else(|| self.shape.geometry(), |known| Ok(*known))
+    }
 }
 
 /// A product by content, with what the member states of it.
@@ -230,6 +242,7 @@ fn section_input(
             Some(row) => Some(SectionInput {
                 shape: row.shape,
                 mass: Some(row.mass.kg_m()),
+                known: Some(row.geometry()),
             }),
             None => {
                 unread.push("section");
@@ -239,6 +252,7 @@ fn section_input(
         SectionChoice::Shape(shape) => Some(SectionInput {
             shape: **shape,
             mass: None,
+            known: None,
         }),
         SectionChoice::NotCovered(_) => {
             not_covered.push((
