@@ -32,6 +32,8 @@ pub enum FireError {
     TimesNotIncreasing(usize),
     /// A number is not finite or not positive; its name.
     NotPositive(&'static str),
+    /// The factor k of a parametric fire, by which its heating is slowed, is not above zero: its gas would never warm.
+    NeverWarms(f64),
 }
 
 impl fmt::Display for FireError {
@@ -42,6 +44,11 @@ impl fmt::Display for FireError {
                 write!(f, "the time of point {} does not come after the one before", at + 1)
             }
             Self::NotPositive(name) => write!(f, "its {name} must be above zero"),
+            Self::NeverWarms(k) => write!(
+                f,
+                "by so low a fire load, so large openings and so light a lining together, k of EN 1991-1-2 Annex A (A.10) \
+                 is {k:.2}, and the gas would never warm"
+            ),
         }
     }
 }

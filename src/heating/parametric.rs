@@ -80,7 +80,8 @@ impl Parametric {
     /// Makes the fire.
     ///
     /// # Errors
-    /// Any number that is not above zero. Values outside the validity of Annex A are no error: see
+    /// Any number that is not above zero, the factor k of (A.10) included: that of an opening factor of 0.2 m½, 50 MJ/m² and
+    /// 100 J/m²s½K, all within the validity of Annex A, is -0.22, and steel in such a gas would never warm. Values outside the validity of Annex A are no error: see
     /// [`Parametric::outside_validity`].
     pub fn new(input: ParametricInput) -> Result<Self, FireError> {
         let numbers = [
@@ -108,6 +109,9 @@ impl Parametric {
             } else {
                 1.0
             };
+            if k <= 0.0 {
+                return Err(FireError::NeverWarms(k));
+            }
             k * (limited / b).powi(2) / reference
         } else {
             gamma
@@ -242,4 +246,35 @@ fn heating(star: f64) -> f64 {
 fn heating_slope(star: f64) -> f64 {
     1325.0
         * (0.324 * 0.2 * (-0.2 * star).exp() + 0.204 * 1.7 * (-1.7 * star).exp() + 0.472 * 19.0 * (-19.0 * star).exp())
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn fire(opening_factor: f64, load: f64, thermal_inertia: f64) -> Result<Parametric, FireError> {
+        Parametric::new(ParametricInput {
+            opening_factor,
+            fire_load: 3.0 * load,
+            thermal_inertia,
+            floor_area: 100.0,
+            enclosure_area: 300.0,
+            growth: Growth::Fast,
+            height: None,
+            roof_openings: false,
+        })
+    }
+
+    /// (A.10) by hand: 1 + (0.16/0.04)(-25/75)(1060/1160) = -0.218; 1 + (0.06/0.04)(-25/75)(160/1160) = 0.931.
+    #[test]
+    fn a_gas_that_would_never_warm_is_refused() {
+        match fire(0.20, 50.0, 100.0) {
+            Err(FireError::NeverWarms(k)) => assert!((k + 0.218).abs() < 5e-4, "{k}"),
+            other => panic!("{other:?}"),
+        }
+        let warms = fire(0.10, 50.0, 1000.0).unwrap();
+        let limited = (0.1e-3 * 50.0 / 0.25 / 1000.0_f64).powi(2) / (0.04_f64 / 1160.0).powi(2);
+        assert!((warms.gammas().1 / limited - 0.931).abs() < 5e-4);
+        assert!(warms.gas_celsius(5.0) > 20.0);
+    }
 }
