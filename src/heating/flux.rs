@@ -209,16 +209,8 @@ impl<'a> Protected<'a> {
         (Time::from_s(seconds), celsius(h))
     }
 
-    /// When the enthalpy is highest up to a time, s, and how high, J/kg.
     fn top(&self, time: Time) -> (f64, f64) {
-        let mut top = (0.0, 0.0);
-        self.run(time.s(), |_, step| {
-            if step.enthalpy_to > top.1 {
-                top = (step.to, step.enthalpy_to);
-            }
-            Go::On
-        });
-        top
+        top(|each| self.run(time.s(), |_, step| each(step)))
     }
 
     /// Marches, holding the steel at 100 °C for the moisture delay; shows each step with what was marched.
@@ -376,17 +368,21 @@ impl Bare<'_> {
         (Time::from_s(seconds), celsius(h))
     }
 
-    /// When the enthalpy is highest up to a time, s, and how high, J/kg.
     fn top(&self, time: Time) -> (f64, f64) {
-        let mut top = (0.0, 0.0);
-        march(self, time.s(), |step| {
-            if step.enthalpy_to > top.1 {
-                top = (step.to, step.enthalpy_to);
-            }
-            Go::On
-        });
-        top
+        top(|each| self.run(time.s(), each))
     }
+}
+
+/// When the enthalpy of a march is highest, s, and how high, J/kg.
+fn top(march: impl FnOnce(&mut dyn FnMut(Step) -> Go)) -> (f64, f64) {
+    let mut top = (0.0, 0.0);
+    march(&mut |step| {
+        if step.enthalpy_to > top.1 {
+            top = (step.to, step.enthalpy_to);
+        }
+        Go::On
+    });
+    top
 }
 
 /// The temperature of an enthalpy in J/kg.

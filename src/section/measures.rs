@@ -1,4 +1,4 @@
-//! Other measures of the same thing: mass over exposed surface, and the box with a gap of AS 4100.
+//! Other measures of the same thing: weight over perimeter, surface over mass, and the box with a gap of AS 4100.
 
 use crate::section::exposure::{Casing, Exposure, ExposureRefusal, Face, Faces, heated};
 use crate::section::geometry::Geometry;
@@ -12,12 +12,6 @@ pub const LB_FT_IN: f64 = 0.453_592_37 / 0.3048 / 25.4;
 #[must_use]
 pub fn weight_over_perimeter(mass: LinearMass, perimeter: Length) -> f64 {
     mass.kg_m() / perimeter.mm() / LB_FT_IN
-}
-
-/// Mass over exposed surface, kg/m².
-#[must_use]
-pub fn mass_over_surface(mass: LinearMass, perimeter: Length) -> f64 {
-    mass.kg_m() / perimeter.m()
 }
 
 /// Exposed surface area to mass ratio ksm of AS 4100 section 12, m²/t.

@@ -85,12 +85,6 @@ impl Properties {
         self.radius(self.iz_mm4)
     }
 
-    /// Radius of gyration about u-u, the largest.
-    #[must_use]
-    pub fn radius_u(&self) -> Length {
-        self.radius(self.iu_mm4)
-    }
-
     /// Radius of gyration about v-v, the least: what buckling of an unrestrained strut goes by.
     #[must_use]
     pub fn radius_v(&self) -> Length {

@@ -2,7 +2,7 @@
 
 use super::{HoverOptions, escaped, picture};
 use crate::analysis::design::MemberAt;
-use crate::analysis::inputs::row_of;
+use crate::analysis::inputs::{Names, row_of};
 use crate::analysis::names::lookup_options;
 use crate::analysis::outcome::{Gap, LimitFrom, Outcome};
 use crate::design::inherit::{Inherited, Origin};
@@ -16,7 +16,11 @@ use crate::units::{DisplayUnits, Length, SectionFactor, significant};
 pub fn summary(view: &View<'_>, at: MemberAt, options: HoverOptions) -> Option<String> {
     let outcome = view.outcome(at)?;
     let member = view.design.member(at).value();
-    let row = row(view.design, member, outcome);
+    let names = Names {
+        design: view.design,
+        options: lookup_options(view.design.basis()),
+    };
+    let row = row(&names, member, outcome);
     let units = view.design.units();
     let mut lines = vec![headline(&row)];
     let mut facts: Vec<String> = Vec::new();

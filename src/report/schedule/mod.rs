@@ -13,6 +13,8 @@ use self::basis::Basis;
 use self::row::Row;
 use self::totals::{ProductTotal, Totals};
 use crate::analysis::design::{Design, FileIndex, MemberAt};
+use crate::analysis::inputs::Names;
+use crate::analysis::names::lookup_options;
 use crate::analysis::outcome::Verdict;
 use crate::analysis::source::FileKind;
 use crate::check::Checked;
@@ -78,9 +80,13 @@ fn rows(checked: &Checked, out: &mut Vec<Row>) {
         }
     }
     let shared = faults(checked);
+    let names = Names {
+        design,
+        options: lookup_options(design.basis()),
+    };
     for (at, outcome) in design.members.iter().zip(&checked.outcomes) {
         let member = design.member(*at).value();
-        let mut row = row::row(design, member, outcome);
+        let mut row = row::row(&names, member, outcome);
         if let Some((findings, departures)) = by_member.remove(at) {
             row.findings = findings;
             row.departures = departures;

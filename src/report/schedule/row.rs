@@ -6,9 +6,7 @@ use std::sync::Arc;
 use serde::Serialize;
 
 use super::quantities::{Quantities, count, quantities};
-use crate::analysis::design::Design;
-use crate::analysis::inputs::row_of;
-use crate::analysis::names::lookup_options;
+use crate::analysis::inputs::{Names, row_of};
 use crate::analysis::outcome::Outcome;
 use crate::design::given::Given;
 use crate::design::model::member::{Member, Period, SectionChoice, Steel};
@@ -78,7 +76,8 @@ pub struct Row {
 
 /// The row of a member. Its findings and departures are joined by the caller.
 #[must_use]
-pub fn row(design: &Design, member: &Member, outcome: &Outcome) -> Row {
+pub fn row(names: &Names<'_>, member: &Member, outcome: &Outcome) -> Row {
+    let design = names.design;
     let keys = design.inherited(member);
     let count = count(&keys);
     let choice = keys.get(|k| &k.section).value();
@@ -100,7 +99,7 @@ pub fn row(design: &Design, member: &Member, outcome: &Outcome) -> Row {
         mark: member.mark.value().cloned(),
         count,
         length_m: keys.get(|k| &k.length).value().map(|length| length.m()),
-        section: match (row_of(choice, &lookup_options(design.basis())), choice) {
+        section: match (row_of(choice, &names.options), choice) {
             (Some(row), _) => Some(row.designation.to_string()),
             (None, Some(SectionChoice::Designation(text))) => Some(text.clone()),
             (None, Some(SectionChoice::Shape(shape))) => Some(shape.name().to_owned()),

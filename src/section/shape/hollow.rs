@@ -39,22 +39,6 @@ impl RectangularHollow {
         let (ro, ri) = (Length::from_mm(1.5 * t.mm()), t);
         Self { h, b, t, ro, ri }
     }
-
-    /// A cold formed section with the corner radii for calculation of EN 10219-2:2006 Annex B: outer and inner 2 t
-    /// and t up to 6 mm, 2.5 t and 1.5 t up to 10 mm, 3 t and 2 t above.
-    #[must_use]
-    pub const fn cold_formed(h: Length, b: Length, t: Length) -> Self {
-        let mm = t.mm();
-        let (outer, inner) = if mm <= 6.0 {
-            (2.0, 1.0)
-        } else if mm <= 10.0 {
-            (2.5, 1.5)
-        } else {
-            (3.0, 2.0)
-        };
-        let (ro, ri) = (Length::from_mm(outer * mm), Length::from_mm(inner * mm));
-        Self { h, b, t, ro, ri }
-    }
 }
 
 /// A rectangle about the origin with rounded corners.
