@@ -44,6 +44,8 @@ pub struct Documents {
     pub generation: u64,
     /// Grows where files may have come or gone.
     pub listing: u64,
+    /// Files that are said to have changed on disk: their time and size may not show it.
+    pub changed_on_disk: Vec<PathBuf>,
 }
 
 impl Documents {

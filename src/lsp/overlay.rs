@@ -37,6 +37,14 @@ impl Overlay {
         read.iter().any(|(path, (then, _))| stamp(path) != Some(*then))
     }
 
+    /// Forgets what was read of files that are said to have changed.
+    pub fn forget(&self, paths: &[PathBuf]) {
+        let mut read = self.read.lock().unwrap_or_else(PoisonError::into_inner);
+        for path in paths {
+            read.remove(path);
+        }
+    }
+
     /// Forgets what was read of files that nobody asks for any more.
     pub fn keep(&self, paths: &rustc_hash::FxHashSet<PathBuf>) {
         let mut read = self.read.lock().unwrap_or_else(PoisonError::into_inner);

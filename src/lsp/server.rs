@@ -194,6 +194,7 @@ impl LanguageServer for Server {
             if let Some(document) = documents.open.get_mut(&path) {
                 document.edited = None;
             }
+            documents.changed_on_disk.push(path);
         });
     }
 
@@ -203,11 +204,20 @@ impl LanguageServer for Server {
         };
         self.shared.change(|documents| {
             documents.open.remove(&path);
+            documents.changed_on_disk.push(path);
         });
     }
 
-    async fn did_change_watched_files(&self, _: DidChangeWatchedFilesParams) {
-        self.shared.change(|documents| documents.listing += 1);
+    async fn did_change_watched_files(&self, params: DidChangeWatchedFilesParams) {
+        let paths: Vec<_> = params
+            .changes
+            .iter()
+            .filter_map(|change| path_of(&change.uri))
+            .collect();
+        self.shared.change(|documents| {
+            documents.listing += 1;
+            documents.changed_on_disk.extend(paths);
+        });
     }
 
     async fn did_change_workspace_folders(&self, params: DidChangeWorkspaceFoldersParams) {

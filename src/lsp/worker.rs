@@ -107,15 +107,18 @@ impl Worker {
 
     /// Checks the newest version. `None` where a newer one came meanwhile.
     fn check(&mut self) -> Option<Snapshot> {
-        let (generation, documents, listing, folders) = {
-            let documents = self.shared.documents();
+        let (generation, documents, listing, folders, changed) = {
+            let mut documents = self.shared.documents();
+            let changed = std::mem::take(&mut documents.changed_on_disk);
             (
                 documents.generation,
                 documents.open.clone(),
                 documents.listing,
                 documents.folders.clone(),
+                changed,
             )
         };
+        self.files.forget(&changed);
         self.take(&documents);
         if self.listing != Some(listing) || self.files.disk.folders != folders {
             self.listing = Some(listing);
