@@ -59,3 +59,41 @@ fn a_slip_of_the_file_can_not_be_departed_from() {
     let unused = one(&checked, "departure-unused");
     assert!(unused.message.contains("slip of the file"), "{}", unused.message);
 }
+
+/// Status: computed by hand. IPE 360 in S355: c = 360 - 2 (12.7 + 18) = 298.6 mm over 8 mm; 42 · 0.85 √(235/355) = 29.0.
+#[test]
+fn class_4_says_what_is_slender() {
+    let checked = check("- { mark: C1, role: column, section: IPE 360, loading: { utilisation: 0.5 } }");
+    let message = &one(&checked, "class-4-temperature").message;
+    assert!(message.contains("(web c/t 37.3 > 42ε = 29.0)"), "{message}");
+}
+
+#[test]
+fn a_heavier_section_is_named_only_where_it_may_do() {
+    let of = |section: &str, period: u32| {
+        let checked = check(&format!(
+            "- {{ mark: B1, section: {section}, period: {period}, critical temperature: 600 }}"
+        ));
+        one(&checked, "bare-steel-fails").message.clone()
+    };
+    assert!(of("IPE 300", 90).ends_with("Protect it"));
+    assert!(of("IPE 300", 15).ends_with("Protect it, or take a heavier section"));
+}
+
+#[test]
+fn what_is_enough_is_told_once() {
+    let of = |section: &str| {
+        let checked = check(&format!(
+            "- {{ mark: B1, section: {section}, critical temperature: 550, protection: {{ product: grey board, thickness: 30 }} }}"
+        ));
+        one(&checked, "protection-over-thick").message.clone()
+    };
+    assert_eq!(
+        of("HE 300 M"),
+        "B1: 30 mm of `grey board` is more than the 15 mm needed"
+    );
+    assert_eq!(
+        of("IPE 300"),
+        "B1: 30 mm of `grey board` is more than the 17.2 mm needed; of its stock 20 mm would do"
+    );
+}

@@ -69,7 +69,7 @@ fn members(checked: &[Checked]) -> String {
         (Verdict::Passes, "pass"),
         (Verdict::Fails, "fail"),
         (Verdict::CannotBeProtected, "cannot be protected"),
-        (Verdict::NotVerified, "not verified, which is no pass"),
+        (Verdict::NotVerified, "not verified (which is no pass)"),
         (Verdict::NoPeriod, "without a period"),
     ];
     let parts: Vec<String> = words

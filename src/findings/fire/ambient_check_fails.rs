@@ -23,7 +23,7 @@ pub(super) fn check(cx: &mut Context<'_>) {
     for gap in &outcome.gaps {
         if let Gap::FailsCold(utilisation) = gap {
             let message = format!(
-                "{} fails at once: its load in fire is {utilisation:.2} of its resistance at 20 °C",
+                "{} fails at once: its load in fire is {utilisation:.2} times its resistance at 20 °C",
                 cx.mark
             );
             cx.add(&DECLARATION, "loading", cx.own().loading.span(), message);

@@ -30,8 +30,15 @@ pub(super) fn check(cx: &mut Context<'_>) {
     let lasts = state
         .resistance
         .map_or_else(String::new, |time| format!(" after {:.0} min", time.min().floor()));
+    // What lasts for less than half of its period is not brought to it by more steel.
+    let near = state.resistance.is_some_and(|time| time.min() >= 0.5 * period.min());
+    let answer = if near {
+        "Protect it, or take a heavier section"
+    } else {
+        "Protect it"
+    };
     let message = format!(
-        "{} is bare and reaches its critical temperature of {}{lasts}, but must last {:.0} min: it has {}. Protect it, or take a heavier section",
+        "{} is bare and reaches its critical temperature of {}{lasts}, but must last {:.0} min: it has {}. {answer}",
         cx.mark,
         cx.temperature(critical.bare),
         period.min(),

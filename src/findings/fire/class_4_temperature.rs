@@ -20,12 +20,12 @@ pub static DECLARATION: Declaration = Declaration {
 
 /// A member that is held to the temperature of class 4.
 pub(super) fn check(cx: &mut Context<'_>) {
-    let governs = |critical: &&crate::analysis::outcome::Critical| critical.governing.contains("class 4");
-    if cx.outcome.critical.as_ref().filter(governs).is_none() {
+    let critical = cx.outcome.critical.as_ref();
+    let Some((_, why)) = critical.and_then(|critical| critical.governing.split_once("class 4: ")) else {
         return;
-    }
+    };
     let message = format!(
-        "{} is class 4 in fire, so at most {} is taken: its section is too slender in itself to be followed further",
+        "{} is class 4 in fire ({why}), so that it may buckle locally: at most {} is taken",
         cx.mark,
         cx.temperature(Temperature::from_celsius(CLASS_4))
     );

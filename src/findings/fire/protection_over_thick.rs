@@ -31,14 +31,19 @@ pub(super) fn check(cx: &mut Context<'_>) {
     else {
         return;
     };
-    let message = format!(
-        "{}: {} of `{}` is more than the {} needed; the next stock is {}",
-        cx.mark,
-        cx.thickness(provided, product.film),
-        product.name,
-        cx.needed(needed.exact, product.film),
-        product.build_up(cx, next)
-    );
+    let (stated, enough) = (cx.thickness(provided, product.film), product.build_up(cx, next));
+    let needs = cx.needed(needed.exact, product.film);
+    let message = if needs == enough {
+        format!(
+            "{}: {stated} of `{}` is more than the {needs} needed",
+            cx.mark, product.name
+        )
+    } else {
+        format!(
+            "{}: {stated} of `{}` is more than the {needs} needed; of its stock {enough} would do",
+            cx.mark, product.name
+        )
+    };
     cx.add(&DECLARATION, "thickness", product.thickness_span(cx), message);
     product.offer(cx, next);
 }

@@ -27,7 +27,7 @@ pub(super) fn check(cx: &mut Context<'_>) {
     if let (true, Some(coats), Some(film)) = (product.film, state.layers.filter(|coats| *coats > MOST), state.provided)
     {
         let message = format!(
-            "{}: {} of `{}` takes {coats} coats",
+            "{}: {} of `{}` takes {coats} coats; more than {MOST} are slow to apply and hard to keep even",
             cx.mark,
             cx.thickness(film, true),
             product.name
