@@ -94,6 +94,6 @@ fn what_is_enough_is_told_once() {
     );
     assert_eq!(
         of("IPE 300"),
-        "B1: 30 mm of `grey board` is more than the 17.2 mm needed; of its stock 20 mm would do"
+        "B1: 30 mm of `grey board` is more than the 17.2 mm needed; 20 mm would do"
     );
 }

@@ -30,7 +30,7 @@ pub(super) fn check(cx: &mut Context<'_>) {
         ),
     };
     let message = format!(
-        "{} takes {} from a utilisation, which ignores buckling: {doubt}",
+        "{}: its critical temperature of {} rests on a utilisation, which ignores buckling: {doubt}",
         cx.mark,
         cx.temperature(critical.as_built)
     );

@@ -36,7 +36,7 @@ pub(super) fn check(cx: &mut Context<'_>) {
             let message = format!(
                 "{} is not verified: `{name}` states no assessed range of {}",
                 cx.mark,
-                needed.unstated.join(", ")
+                needed.unstated.join(" or ")
             );
             cx.add(&DECLARATION, "protection", span, message);
         }

@@ -40,7 +40,7 @@ pub(super) fn check(cx: &mut Context<'_>) {
         )
     } else {
         format!(
-            "{}: {stated} of `{}` is more than the {needs} needed; of its stock {enough} would do",
+            "{}: {stated} of `{}` is more than the {needs} needed; {enough} would do",
             cx.mark, product.name
         )
     };

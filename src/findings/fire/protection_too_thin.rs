@@ -29,7 +29,7 @@ pub(super) fn check(cx: &mut Context<'_>) {
         return;
     }
     let next = match &needed.next {
-        Some(next) => format!("the next stock is {}", product.build_up(cx, next)),
+        Some(next) => format!("{} would do", product.build_up(cx, next)),
         None => "no build-up of its stock is so thick".to_owned(),
     };
     let limit = cx.outcome.critical.as_ref().map_or_else(String::new, |critical| {
